@@ -1,0 +1,111 @@
+import { z } from "zod";
+import { LIMITS } from "../limits.ts";
+import { id, name, note, personRef, timestamp, version } from "./common.ts";
+import { job } from "./jobs.ts";
+
+/** receiving: the file is on its way · planning: the reading plan is open · importing · committed · withdrawn */
+export const EXTRACT_STATES = ["receiving", "planning", "importing", "committed", "withdrawn"] as const;
+
+/** One column card of the reading plan: how one column of the file is understood. */
+export const columnCard = z.object({
+  /** Position in the file, from 0. */
+  index: z.int().min(0),
+  /** Header as the file spells it. */
+  header: z.string(),
+  /** Registry key, its error partner (`ks_mag_err`), "kept" (kept as text, not used) — never anything else. */
+  means: z.string(),
+  /** Unit as confirmed (a spelling of shared/units); empty for pure numbers and text. */
+  unit: z.string(),
+  /** Texts that stand for "no value" in this column, besides the empty cell. */
+  blankMarks: z.array(z.string()),
+});
+export type ColumnCard = z.infer<typeof columnCard>;
+
+export const readingPlan = z.object({
+  delimiter: z.enum([",", ";", "\t", "|"]),
+  encoding: z.enum(["utf-8", "utf-16le", "latin1"]),
+  decimalMark: z.enum([".", ","]),
+  columns: z.array(columnCard).max(LIMITS.fileColumns),
+  /** Julian year of the positions where no column gives it; null until answered. */
+  epoch: z.number().min(1800).max(2200).nullable(),
+  /** Catalogue release the identifiers belong to, as the curator names it. */
+  release: z.string().trim().max(80),
+  /** RA in degrees or hours; null until answered when the file leaves doubt. */
+  raUnit: z.enum(["deg", "hour"]).nullable(),
+});
+export type ReadingPlan = z.infer<typeof readingPlan>;
+
+/** What the server suggests for a column, and why. */
+export const columnSuggestion = columnCard.extend({
+  /** First non-blank texts of the column with the value read from each (null: text or unreadable). */
+  samples: z.array(z.object({ text: z.string(), value: z.union([z.number(), z.string()]).nullable() })),
+  because: z.string(),
+  /** Whether it needs a person's answer before the import can begin. */
+  asks: z.boolean(),
+});
+export type ColumnSuggestion = z.infer<typeof columnSuggestion>;
+
+/** Stop: cannot go on · Ask: an answer is needed · Note: for your information. */
+export const finding = z.object({
+  level: z.enum(["stop", "ask", "note"]),
+  code: z.string(),
+  column: z.string().nullable(),
+  message: z.string(),
+  hint: z.string(),
+  count: z.int(),
+  examples: z.array(z.object({ line: z.int(), text: z.string() })),
+  /** For Ask: the answers to choose from; empty where a value is typed. */
+  answers: z.array(z.object({ value: z.string(), label: z.string() })),
+});
+export type Finding = z.infer<typeof finding>;
+
+export const extractPreview = z.object({
+  delimiter: readingPlan.shape.delimiter,
+  encoding: readingPlan.shape.encoding,
+  decimalMark: readingPlan.shape.decimalMark,
+  columns: z.array(columnSuggestion),
+  findings: z.array(finding),
+  sampledRows: z.int(),
+});
+export type ExtractPreview = z.infer<typeof extractPreview>;
+
+/** read = accepted + refused + skipped, always. */
+export const rowCounts = z.object({ read: z.int(), accepted: z.int(), refused: z.int(), skipped: z.int() });
+
+export const extract = z.object({
+  id,
+  /** Number within the programme, from 1. */
+  number: z.int(),
+  name: z.string(),
+  origin: z.string(),
+  state: z.enum(EXTRACT_STATES),
+  isInvented: z.boolean(),
+  fileName: z.string(),
+  bytes: z.number(),
+  receivedBytes: z.number(),
+  sha256: z.string().nullable(),
+  uploadedBy: personRef,
+  createdAt: timestamp,
+  committedAt: timestamp.nullable(),
+  /** Catalogue edition its commit made. */
+  edition: z.int().nullable(),
+  rows: rowCounts.nullable(),
+  newStars: z.int().nullable(),
+  plan: readingPlan.nullable(),
+  job: job.nullable(),
+  /** Why the last import did not happen. */
+  failure: z.object({ message: z.string(), hint: z.string().optional() }).nullable(),
+  version,
+});
+export type Extract = z.infer<typeof extract>;
+
+/** GET /api/programmes/:p/extracts → { extracts }; POST → 201 { extract }. The same bytes again: 409 code "extract-already-here" with details { extractId, number }, at the end of the upload. */
+export const extractCreateBody = z.strictObject({ name, fileName: z.string().trim().min(1).max(255), bytes: z.int().min(0).max(LIMITS.fileBytes, "A file may have at most 2 GiB. Split it, or compress less of the sky into one extract."), origin: note });
+/** PUT …/extracts/:id/original (raw body, application/octet-stream) → { extract, preview }. GET → the untouched file. */
+/** GET …/extracts/:id → { extract, preview } (preview null unless planning). */
+/** PUT …/extracts/:id/plan → { extract, findings }: what is still open under that plan. */
+export const planBody = z.strictObject({ plan: readingPlan, version });
+/** POST …/extracts/:id/commit → 202 { extract, job }. */
+export const commitBody = z.strictObject({ version });
+/** GET …/extracts/:id/refused → text/csv: line, reason, the row as it was. */
+/** DELETE …/extracts/:id → 204 before it is committed. POST …/extracts/:id/withdraw → 202 { job } after. */

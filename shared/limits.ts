@@ -1,0 +1,28 @@
+/** Every maximum, used by forms, schemas, readers and pages alike. */
+export const LIMITS = {
+  /** Bytes of one uploaded file. */
+  fileBytes: 2 * 1024 ** 3,
+  /** Columns of one file. */
+  fileColumns: 3000,
+  /** Characters in one cell. */
+  cellCharacters: 1_000_000,
+  /** Refused rows kept as text; more are counted. */
+  refusedRowsKept: 10_000,
+  nameCharacters: 120,
+  emailCharacters: 254,
+  noteCharacters: 2_000,
+  passwordCharacters: { least: 12, most: 200 },
+  cuts: 40,
+  expressionCharacters: 1_000,
+  meritTerms: 20,
+  /** Rows of one window of the table. */
+  windowRows: 500,
+  /** Stars in one target list. */
+  listStars: 100_000,
+  /** Sign-in attempts per address and account in the window below. */
+  signInAttempts: 10,
+  signInWindowMinutes: 15,
+  invitationDays: 7,
+  passwordResetHours: 1,
+  sessionDays: 14,
+} as const;
