@@ -6,15 +6,27 @@ type Columns = Record<string, EntitySchemaColumnOptions>;
 
 const number = (key: string): Columns => ({ [key]: { name: key, type: "double", nullable: true } });
 
-const text = (key: string): Columns => ({ [key]: { name: key, type: "varchar", length: 120, nullable: true } });
+const text = (key: string): Columns => ({
+  [key]: { name: key, type: "varchar", length: 120, nullable: true },
+});
 
-const small = (key: string): Columns => ({ [key]: { name: key, type: "tinyint", unsigned: true, default: 0 } });
+const small = (key: string): Columns => ({
+  [key]: { name: key, type: "tinyint", unsigned: true, default: 0 },
+});
 
-const withError = (c: Column): Columns => ({ ...number(c.key), ...(c.hasError ? number(errorKey(c.key)) : {}) });
+const withError = (c: Column): Columns => ({
+  ...number(c.key),
+  ...(c.hasError ? number(errorKey(c.key)) : {}),
+});
 
 /** Values as extracts give them. Temperature stands apart as `teff_given`: `teff` is what the recipe makes of it. */
 export const givenColumns = (): Columns =>
-  Object.assign({}, ...columnsOf("given").map((c) => (c.kind === "text" ? text(c.key) : withError(c))), number("teff_given"), number("teff_given_err"));
+  Object.assign(
+    {},
+    ...columnsOf("given").map((c) => (c.kind === "text" ? text(c.key) : withError(c))),
+    number("teff_given"),
+    number("teff_given_err"),
+  );
 
 /** Which quantities record the relation they came from. */
 export const METHOD_KEYS = ["teff", "radius", "mass", "luminosity"] as const;
@@ -23,7 +35,9 @@ export const METHOD_KEYS = ["teff", "radius", "mass", "luminosity"] as const;
 export const stellarColumns = (): Columns =>
   Object.assign(
     {},
-    ...columnsOf("stellar").filter((c) => c.key !== "flags").map((c) => ({ ...withError(c), ...small(blankKey(c.key)) })),
+    ...columnsOf("stellar")
+      .filter((c) => c.key !== "flags")
+      .map((c) => ({ ...withError(c), ...small(blankKey(c.key)) })),
     ...METHOD_KEYS.map((key) => small(`${key}_method`)),
     { flags_bits: { name: "flags_bits", type: "smallint", unsigned: true, default: 0 } },
     small("flags"),

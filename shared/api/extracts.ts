@@ -100,7 +100,18 @@ export const extract = z.object({
 export type Extract = z.infer<typeof extract>;
 
 /** GET /api/programmes/:p/extracts → { extracts }; POST → 201 { extract }. The same bytes again: 409 code "extract-already-here" with details { extractId, number }, at the end of the upload. */
-export const extractCreateBody = z.strictObject({ name, fileName: z.string().trim().min(1).max(255), bytes: z.int().min(0).max(LIMITS.fileBytes, "A file may have at most 2 GiB. Split it, or compress less of the sky into one extract."), origin: note });
+export const extractCreateBody = z.strictObject({
+  name,
+  fileName: z.string().trim().min(1).max(255),
+  bytes: z
+    .int()
+    .min(0)
+    .max(
+      LIMITS.fileBytes,
+      "A file may have at most 2 GiB. Split it, or compress less of the sky into one extract.",
+    ),
+  origin: note,
+});
 /** PUT …/extracts/:id/original (raw body, application/octet-stream) → { extract, preview }. GET → the untouched file. */
 /** GET …/extracts/:id → { extract, preview } (preview null unless planning). */
 /** PUT …/extracts/:id/plan → { extract, findings }: what is still open under that plan. */

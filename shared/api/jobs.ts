@@ -1,7 +1,13 @@
 import { z } from "zod";
 import { id, timestamp } from "./common.ts";
 
-export const JOB_KINDS = ["import-extract", "withdraw-extract", "recompute", "build-scan-index", "send-mail"] as const;
+export const JOB_KINDS = [
+  "import-extract",
+  "withdraw-extract",
+  "recompute",
+  "build-scan-index",
+  "send-mail",
+] as const;
 
 /** GET /api/programmes/:p/jobs/:id → { job }; POST …/jobs/:id/cancel → { job }; GET …/jobs?active=true → { jobs }. */
 export const job = z.object({

@@ -15,7 +15,9 @@ export const targetList = z.object({
   /** The view it was made from, as search parameters; opens the workbench on it. */
   viewParams: z.string(),
   selectionName: z.string().nullable(),
-  merit: z.object({ versionId: id, name: z.string(), number: z.int(), terms: z.array(z.string()) }).nullable(),
+  merit: z
+    .object({ versionId: id, name: z.string(), number: z.int(), terms: z.array(z.string()) })
+    .nullable(),
   card: z.object({ versionId: id, name: z.string(), number: z.int() }).nullable(),
   campaign: z.object({ versionId: id, name: z.string(), number: z.int() }).nullable(),
   recipe: z.string(),
@@ -43,12 +45,23 @@ export const listPatchBody = z.strictObject({ name: name.optional(), note: note.
 export const listStateBody = z.strictObject({ state: z.enum(["draft", "in-review"]), version });
 
 /** GET …/lists/:id/members?offset&limit → { members, count } in order of place. Values are those the list was made on. */
-export const listMember = starRow.extend({ state: z.enum(MEMBER_STATES), reason: z.string(), cameIn: z.string() });
+export const listMember = starRow.extend({
+  state: z.enum(MEMBER_STATES),
+  reason: z.string(),
+  cameIn: z.string(),
+});
 export type ListMember = z.infer<typeof listMember>;
 /** PATCH …/lists/:id/members/:starId → { member, list }; "out" needs a reason of 10 characters or more. */
 export const memberPatchBody = z
-  .strictObject({ state: z.enum(MEMBER_STATES), reason: z.string().trim().max(LIMITS.noteCharacters).default(""), version })
-  .refine((b) => b.state !== "out" || b.reason.length >= 10, { path: ["reason"], message: "Say why in at least 10 characters: the reason stays with the star." });
+  .strictObject({
+    state: z.enum(MEMBER_STATES),
+    reason: z.string().trim().max(LIMITS.noteCharacters).default(""),
+    version,
+  })
+  .refine((b) => b.state !== "out" || b.reason.length >= 10, {
+    path: ["reason"],
+    message: "Say why in at least 10 characters: the reason stays with the star.",
+  });
 
 /** GET …/lists/:id/export?format=csv|ecsv → the file. */
 export const EXPORT_FORMATS = ["csv", "ecsv"] as const;

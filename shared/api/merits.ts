@@ -4,10 +4,20 @@ import { id, name, note, personRef, timestamp } from "./common.ts";
 
 /** Shapes map a value to 0…1. A ramp is 0 at `zeroAt` and 1 at `oneAt`, either way round, flat outside. */
 export const shape = z.discriminatedUnion("kind", [
-  z.strictObject({ kind: z.literal("ramp"), zeroAt: z.number(), oneAt: z.number() }).refine((s) => s.zeroAt !== s.oneAt, "A ramp needs two different ends."),
+  z
+    .strictObject({ kind: z.literal("ramp"), zeroAt: z.number(), oneAt: z.number() })
+    .refine((s) => s.zeroAt !== s.oneAt, "A ramp needs two different ends."),
   z.strictObject({ kind: z.literal("step"), at: z.number(), above: z.boolean() }),
-  z.strictObject({ kind: z.literal("hump"), low: z.number(), peak: z.number(), high: z.number() }).refine((s) => s.low < s.peak && s.peak < s.high, "A hump rises from low to peak and falls to high."),
-  z.strictObject({ kind: z.literal("table"), points: z.array(z.tuple([z.number(), z.number().min(0).max(1)])).min(2).max(50) }),
+  z
+    .strictObject({ kind: z.literal("hump"), low: z.number(), peak: z.number(), high: z.number() })
+    .refine((s) => s.low < s.peak && s.peak < s.high, "A hump rises from low to peak and falls to high."),
+  z.strictObject({
+    kind: z.literal("table"),
+    points: z
+      .array(z.tuple([z.number(), z.number().min(0).max(1)]))
+      .min(2)
+      .max(50),
+  }),
   /** 1 − loss × value, not below 0: trust lost per flag. */
   z.strictObject({ kind: z.literal("loss"), perUnit: z.number().positive() }),
 ]);
@@ -25,12 +35,25 @@ export const term = z.strictObject({
 });
 export type Term = z.infer<typeof term>;
 
-export const merit = z.object({ id, versionId: id, number: z.int(), name: z.string(), note: z.string(), terms: z.array(term), savedBy: personRef, savedAt: timestamp });
+export const merit = z.object({
+  id,
+  versionId: id,
+  number: z.int(),
+  name: z.string(),
+  note: z.string(),
+  terms: z.array(term),
+  savedBy: personRef,
+  savedAt: timestamp,
+});
 export type Merit = z.infer<typeof merit>;
 /** GET …/merits → { merits }; GET …/merits/versions/:versionId; POST → 201 { merit }; PUT …/merits/:id → { merit } (new version, 409 when stale). */
 export const meritBody = z.strictObject({
   name,
   note,
-  terms: z.array(term).min(1, "A figure of merit needs a term.").max(LIMITS.meritTerms).refine((terms) => terms.some((t) => t.weight > 0), "At least one weight must be above zero."),
+  terms: z
+    .array(term)
+    .min(1, "A figure of merit needs a term.")
+    .max(LIMITS.meritTerms)
+    .refine((terms) => terms.some((t) => t.weight > 0), "At least one weight must be above zero."),
 });
 export const meritSaveBody = meritBody.extend({ number: z.int().positive() });

@@ -17,21 +17,46 @@ export const programme = z.object({
   edition: z.int().nullable(),
   stars: z.int(),
   version,
-  counts: z.object({ extracts: z.int(), instruments: z.int(), selections: z.int(), merits: z.int(), lists: z.int(), members: z.int() }),
+  counts: z.object({
+    extracts: z.int(),
+    instruments: z.int(),
+    selections: z.int(),
+    merits: z.int(),
+    lists: z.int(),
+    members: z.int(),
+  }),
 });
 export type Programme = z.infer<typeof programme>;
 export const programmeCreateBody = z.strictObject({ name, description: note });
-export const programmePatchBody = z.strictObject({ name: name.optional(), description: note.optional(), version });
+export const programmePatchBody = z.strictObject({
+  name: name.optional(),
+  description: note.optional(),
+  version,
+});
 /** PUT /api/programmes/:programmeId/recipe → 202 { job }: a recompute that makes a new catalogue edition. */
 export const recipeBody = z.strictObject({ recipe: z.enum(RECIPE_KEYS) });
 
 /** GET …/members → { members }; PATCH …/members/:personId; DELETE …/members/:personId → 204. */
-export const member = z.object({ person: personRef.extend({ email: z.string() }), roles: z.array(z.enum(ROLES)), since: timestamp, state: z.enum(["active", "deactivated"]) });
+export const member = z.object({
+  person: personRef.extend({ email: z.string() }),
+  roles: z.array(z.enum(ROLES)),
+  since: timestamp,
+  state: z.enum(["active", "deactivated"]),
+});
 export type Member = z.infer<typeof member>;
-export const rolesBody = z.strictObject({ roles: z.array(z.enum(ROLES)).min(1, "A member holds at least one role.") });
+export const rolesBody = z.strictObject({
+  roles: z.array(z.enum(ROLES)).min(1, "A member holds at least one role."),
+});
 /** POST …/invitations → 201 { invitation }; GET → { invitations }; DELETE …/invitations/:id → 204. */
 export const invitationBody = z.strictObject({ email, roles: rolesBody.shape.roles });
-export const invitation = z.object({ id, email: z.string(), roles: z.array(z.enum(ROLES)), createdAt: timestamp, expiresAt: timestamp, state: z.enum(["open", "used", "expired", "withdrawn"]) });
+export const invitation = z.object({
+  id,
+  email: z.string(),
+  roles: z.array(z.enum(ROLES)),
+  createdAt: timestamp,
+  expiresAt: timestamp,
+  state: z.enum(["open", "used", "expired", "withdrawn"]),
+});
 export type Invitation = z.infer<typeof invitation>;
 
 /** GET …/logbook?cursor&limit&subject → { lines, next? }, newest first. */

@@ -24,7 +24,9 @@ export const ladderStep = z.object({
   /** Stars of the whole catalogue for which a value this cut needs is blank. */
   blank: z.int(),
   /** Set where the expression cannot be used: what and why; the cut is then left out. */
-  error: z.object({ message: z.string(), hint: z.string().optional(), position: z.int().optional() }).nullable(),
+  error: z
+    .object({ message: z.string(), hint: z.string().optional(), position: z.int().optional() })
+    .nullable(),
 });
 export type LadderStep = z.infer<typeof ladderStep>;
 export const viewSummary = z.object({
@@ -103,10 +105,23 @@ export const starSheet = starRow.omit({ place: true }).extend({
 });
 export type StarSheet = z.infer<typeof starSheet>;
 export const findQuery = z.object({ q: z.string().trim().min(1).max(100) });
-export const starMatch = z.object({ id, designation: z.string(), sourceId: z.string().nullable(), place: z.int().nullable() });
+export const starMatch = z.object({
+  id,
+  designation: z.string(),
+  sourceId: z.string().nullable(),
+  place: z.int().nullable(),
+});
 export type StarMatch = z.infer<typeof starMatch>;
 
 /** GET …/catalogue → { catalogue } */
-export const catalogueEdition = z.object({ number: z.int(), reason: z.string(), stars: z.int(), recipe: z.string(), fingerprint: z.string(), madeAt: timestamp, madeBy: z.string() });
+export const catalogueEdition = z.object({
+  number: z.int(),
+  reason: z.string(),
+  stars: z.int(),
+  recipe: z.string(),
+  fingerprint: z.string(),
+  madeAt: timestamp,
+  madeBy: z.string(),
+});
 export const catalogue = z.object({ edition: z.int().nullable(), editions: z.array(catalogueEdition) });
 export type Catalogue = z.infer<typeof catalogue>;

@@ -31,7 +31,14 @@ export interface ViewSpec {
   readonly sort: Sort;
 }
 
-export const EMPTY_VIEW: ViewSpec = { edition: null, card: null, campaign: null, merit: null, cuts: [], sort: { key: "designation", direction: "asc" } };
+export const EMPTY_VIEW: ViewSpec = {
+  edition: null,
+  card: null,
+  campaign: null,
+  merit: null,
+  cuts: [],
+  sort: { key: "designation", direction: "asc" },
+};
 
 const encodeCut = (cut: Cut): string => `${cut.blanks}~${cut.label.replaceAll("~", "-")}~${cut.expression}`;
 
@@ -71,9 +78,18 @@ export const viewFromParams = (params: URLSearchParams): { view: ViewSpec; ignor
     return cut ? [cut] : [];
   });
   const sortText = params.get("sort") ?? EMPTY_VIEW.sort.key;
-  const sort: Sort = sortText.startsWith("-") ? { key: sortText.slice(1), direction: "desc" } : { key: sortText, direction: "asc" };
+  const sort: Sort = sortText.startsWith("-")
+    ? { key: sortText.slice(1), direction: "desc" }
+    : { key: sortText, direction: "asc" };
   return {
-    view: { edition: edition === null ? null : Number(edition), card: number("card"), campaign: number("campaign"), merit: number("merit"), cuts, sort },
+    view: {
+      edition: edition === null ? null : Number(edition),
+      card: number("card"),
+      campaign: number("campaign"),
+      merit: number("merit"),
+      cuts,
+      sort,
+    },
     ignored,
   };
 };

@@ -4,8 +4,23 @@ import type { Role } from "./roles.ts";
  * THE table of rights: what each role may do in a programme. Server guards refuse by it, client controls hide by
  * it. What does not stand here is denied.
  */
-const READERS: readonly Role[] = ["curator", "scientist", "reviewer", "lead", "instrument-team", "guest", "administrator"];
-const MEMBERS: readonly Role[] = ["curator", "scientist", "reviewer", "lead", "instrument-team", "administrator"];
+const READERS: readonly Role[] = [
+  "curator",
+  "scientist",
+  "reviewer",
+  "lead",
+  "instrument-team",
+  "guest",
+  "administrator",
+];
+const MEMBERS: readonly Role[] = [
+  "curator",
+  "scientist",
+  "reviewer",
+  "lead",
+  "instrument-team",
+  "administrator",
+];
 
 export const RIGHTS = {
   "programme.read": READERS,

@@ -1,5 +1,13 @@
 /** The roles a member of a programme can hold; one member may hold several. */
-export const ROLES = ["curator", "scientist", "reviewer", "lead", "instrument-team", "guest", "administrator"] as const;
+export const ROLES = [
+  "curator",
+  "scientist",
+  "reviewer",
+  "lead",
+  "instrument-team",
+  "guest",
+  "administrator",
+] as const;
 
 export type Role = (typeof ROLES)[number];
 
