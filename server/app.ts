@@ -1,0 +1,47 @@
+import express, { type Express, Router } from "express";
+import { createPassport } from "./auth/passport.ts";
+import type { Deps } from "./deps.ts";
+import { clientFiles } from "./http/client-files.ts";
+import { csrfProtection } from "./http/csrf.ts";
+import { errorHandler, noSuchRoute } from "./http/error-handler.ts";
+import { addHealthRoutes } from "./http/health.ts";
+import { requestLog } from "./http/request-log.ts";
+import { type DefinedRoute, Routes } from "./http/route.ts";
+import { securityHeaders } from "./http/security-headers.ts";
+import { sessions } from "./http/session.ts";
+
+/** Every subject's routes; a subject that is not listed here does not exist for callers. */
+const SUBJECTS: readonly ((routes: Routes) => void)[] = [addHealthRoutes];
+
+const api = (deps: Deps): { router: Router; routes: DefinedRoute[] } => {
+  const router = Router();
+  const passport = createPassport(deps);
+  router.use(
+    (_req, res, next) => {
+      res.set("Cache-Control", "no-store");
+      next();
+    },
+    sessions(deps),
+    passport.session(),
+    csrfProtection(deps),
+    express.json({ limit: "1mb" }),
+  );
+  const routes = new Routes(router, deps);
+  for (const add of SUBJECTS) add(routes);
+  router.use(noSuchRoute);
+  return { router, routes: routes.defined };
+};
+
+/** The whole web application, not yet listening. */
+export const createApp = (deps: Deps): { app: Express; routes: DefinedRoute[] } => {
+  const app = express();
+  const { router, routes } = api(deps);
+  app.disable("x-powered-by");
+  app.set("trust proxy", deps.config.trustedProxies);
+  app.use(requestLog(deps), securityHeaders(deps));
+  app.use("/api", router);
+  app.use(clientFiles(deps));
+  app.use(noSuchRoute);
+  app.use(errorHandler(deps));
+  return { app, routes };
+};

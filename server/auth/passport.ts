@@ -1,0 +1,34 @@
+import passportModule from "passport";
+import { Strategy } from "passport-local";
+import { Person } from "../database/entities/person.entity.ts";
+import type { Deps } from "../deps.ts";
+import type { Caller } from "../http/route.ts";
+import { verifySignIn } from "./sign-in.ts";
+
+/** Reads the signed-in person anew with each request: one who was deactivated is out at once. */
+const findCaller = async (deps: Deps, id: string): Promise<Caller | false> => {
+  const person = await deps.db.manager.findOne(Person, {
+    where: { id, isActive: true },
+    select: { id: true, name: true, email: true, isInstallationAdministrator: true },
+  });
+  if (!person) return false;
+  const { name, email, isInstallationAdministrator } = person;
+  return { id: person.id, name, email, isInstallationAdministrator };
+};
+
+type Passport = InstanceType<typeof passportModule.Passport>;
+
+/** One per application, as it holds that application's dependencies. */
+export const createPassport = (deps: Deps): Passport => {
+  const passport = new passportModule.Passport();
+  passport.use(
+    new Strategy({ usernameField: "email", passwordField: "password" }, (email, password, done) => {
+      verifySignIn(deps, email, password).then((caller) => done(null, caller ?? false), done);
+    }),
+  );
+  passport.serializeUser((user, done) => done(null, user.id));
+  passport.deserializeUser((id: string, done) => {
+    findCaller(deps, id).then((caller) => done(null, caller), done);
+  });
+  return passport;
+};
