@@ -1,3 +1,4 @@
+import { AttemptCount } from "./attempt-count.entity.ts";
 import { CampaignVersion } from "./campaign.entity.ts";
 import { CatalogueEdition } from "./catalogue-edition.entity.ts";
 import { EntryEntity } from "./entry.entity.ts";
@@ -20,6 +21,7 @@ import { StoredSession } from "./stored-session.entity.ts";
 import { TargetList } from "./target-list.entity.ts";
 
 export const ENTITIES = [
+  AttemptCount,
   CampaignVersion,
   CatalogueEdition,
   EntryEntity,
