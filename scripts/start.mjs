@@ -1,0 +1,3 @@
+import { handOverTo } from "./lib/bootstrap.mjs";
+
+handOverTo("scripts/start.ts");
