@@ -23,7 +23,9 @@ const run = async (): Promise<number> => {
 run().then(
   (code) => process.exit(code),
   (error: unknown) => {
-    console.error(error instanceof ConfigError ? error.message : `The logbook could not be read: ${String(error)}`);
+    console.error(
+      error instanceof ConfigError ? error.message : `The logbook could not be read: ${String(error)}`,
+    );
     process.exit(2);
   },
 );

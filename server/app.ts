@@ -1,30 +1,43 @@
 import express, { type Express, Router } from "express";
-import { createPassport } from "./auth/passport.ts";
+import { signedInPerson } from "./auth/passport.ts";
+import { addAuthRoutes } from "./auth/routes.ts";
 import type { Deps } from "./deps.ts";
 import { clientFiles } from "./http/client-files.ts";
 import { csrfProtection } from "./http/csrf.ts";
 import { errorHandler, noSuchRoute } from "./http/error-handler.ts";
 import { addHealthRoutes } from "./http/health.ts";
+import { rateLimits } from "./http/rate-limit.ts";
 import { requestLog } from "./http/request-log.ts";
 import { type DefinedRoute, Routes } from "./http/route.ts";
 import { securityHeaders } from "./http/security-headers.ts";
 import { sessions } from "./http/session.ts";
+import { addLogbookRoutes } from "./logbook/routes.ts";
+import { addMailRoutes } from "./mail/routes.ts";
+import { addPeopleRoutes } from "./people/routes.ts";
+import { addProgrammeRoutes } from "./programmes/routes.ts";
 
 /** Every subject's routes; a subject that is not listed here does not exist for callers. */
-const SUBJECTS: readonly ((routes: Routes) => void)[] = [addHealthRoutes];
+const SUBJECTS: readonly ((routes: Routes) => void)[] = [
+  addHealthRoutes,
+  addAuthRoutes,
+  addPeopleRoutes,
+  addProgrammeRoutes,
+  addLogbookRoutes,
+  addMailRoutes,
+];
 
 const api = (deps: Deps): { router: Router; routes: DefinedRoute[] } => {
   const router = Router();
-  const passport = createPassport(deps);
   router.use(
     (_req, res, next) => {
       res.set("Cache-Control", "no-store");
       next();
     },
     sessions(deps),
-    passport.session(),
+    signedInPerson(deps),
     csrfProtection(deps),
     express.json({ limit: "1mb" }),
+    rateLimits(deps),
   );
   const routes = new Routes(router, deps);
   for (const add of SUBJECTS) add(routes);

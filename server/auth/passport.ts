@@ -1,3 +1,4 @@
+import type { Request, RequestHandler, Response } from "express";
 import passportModule from "passport";
 import { Strategy } from "passport-local";
 import { Person } from "../database/entities/person.entity.ts";
@@ -18,8 +19,7 @@ const findCaller = async (deps: Deps, id: string): Promise<Caller | false> => {
 
 type Passport = InstanceType<typeof passportModule.Passport>;
 
-/** One per application, as it holds that application's dependencies. */
-export const createPassport = (deps: Deps): Passport => {
+const createPassport = (deps: Deps): Passport => {
   const passport = new passportModule.Passport();
   passport.use(
     new Strategy({ usernameField: "email", passwordField: "password" }, (email, password, done) => {
@@ -32,3 +32,23 @@ export const createPassport = (deps: Deps): Passport => {
   });
   return passport;
 };
+
+const made = new WeakMap<Deps, Passport>();
+
+/** One for each set of dependencies: two applications in one process stay apart. */
+const passportFor = (deps: Deps): Passport => {
+  const passport = made.get(deps) ?? createPassport(deps);
+  made.set(deps, passport);
+  return passport;
+};
+
+/** Puts the signed-in person on `req.user`. */
+export const signedInPerson = (deps: Deps): RequestHandler => passportFor(deps).session();
+
+/** The person whose address and password stand in the body, or false. It does not sign in yet. */
+export const authenticate = (deps: Deps, req: Request, res: Response): Promise<Caller | false> =>
+  new Promise((resolve, reject) => {
+    const answer = (error: unknown, caller?: Caller | false): void =>
+      error ? reject(error) : resolve(caller || false);
+    passportFor(deps).authenticate("local", answer)(req, res, reject);
+  });

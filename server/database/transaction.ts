@@ -10,17 +10,20 @@ const asksToTryAgain = (error: unknown): boolean =>
     String((error.driverError as { code?: unknown }).code),
   );
 
+type Isolation = "READ COMMITTED" | "REPEATABLE READ";
+
 /** Runs the work in a transaction, again where the database asks for it: the work must be repeatable. */
 export const inTransaction = async <T>(
   db: DataSource,
   work: (tx: EntityManager) => Promise<T>,
-  attempt = 1,
+  isolation: Isolation = "REPEATABLE READ",
 ): Promise<T> => {
-  try {
-    return await db.transaction(work);
-  } catch (error) {
-    if (!asksToTryAgain(error) || attempt >= ATTEMPTS) throw error;
-    await wait(attempt * 20 * (1 + Math.random()));
-    return inTransaction(db, work, attempt + 1);
+  for (let attempt = 1; ; attempt++) {
+    try {
+      return await db.transaction(isolation, work);
+    } catch (error) {
+      if (!asksToTryAgain(error) || attempt >= ATTEMPTS) throw error;
+      await wait(attempt * 20 * (1 + Math.random()));
+    }
   }
 };

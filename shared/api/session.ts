@@ -56,13 +56,18 @@ export const meBody = z.strictObject({ name: name.optional(), theme: theme.optio
 export const passwordResetRequestBody = z.strictObject({ email });
 /** GET /api/password-resets/:token → { link }; POST /api/password-resets/:token → { session } (signed in). */
 export const passwordResetBody = z.strictObject({ password });
-/** GET /api/invitations/:token → { link }; POST /api/invitations/:token → { session }. */
+/**
+ * GET /api/invitations/:token → { link }. Who has no account: POST /api/invitations/:token → { session } (signed in).
+ * Who has one signs in with it first: POST /api/invitations/:token/join (no body) → { session }.
+ */
 export const invitationAcceptBody = z.strictObject({ name, password });
 export const link = z.object({
   purpose: z.enum(["invitation", "password-reset"]),
   email: z.string(),
   programme: z.string().nullable(),
   expiresAt: z.iso.datetime(),
+  /** Whether that address can sign in already. */
+  hasAccount: z.boolean(),
 });
 export type Link = z.infer<typeof link>;
 

@@ -1,0 +1,9 @@
+import type { Routes } from "../http/route.ts";
+import { presentMail } from "./present.ts";
+import { readMailbox } from "./service.ts";
+
+export const addMailRoutes = (routes: Routes): void => {
+  routes.add({ method: "get", path: "/mailbox", access: "installation-administrator" }, async ({ deps }) => ({
+    mails: (await readMailbox(deps)).map(presentMail),
+  }));
+};
