@@ -1,0 +1,127 @@
+/**
+ * Cool dwarfs (M and late K): radius and mass from the absolute Ks magnitude, temperature from colour. Single
+ * main-sequence stars only.
+ */
+
+/** Range of M_Ks in which both relations are used. Radius holds for 4.6 to 9.8 (Mann et al. 2015). */
+export const COOL_DWARF_ABS_KS = { brightest: 4.6, faintest: 9.8 } as const;
+/** [Fe/H] of the calibration stars (Mann et al. 2015); the metallicity terms hold inside. */
+export const COOL_DWARF_FEH = { least: -0.6, most: 0.5 } as const;
+/** Scatter of eq. 4 and eq. 5 of Mann et al. 2015, relative. */
+export const RADIUS_SCATTER = 0.0289;
+export const RADIUS_FEH_SCATTER = 0.027;
+/** Scatter of eq. 4 and eq. 5 of Mann et al. 2019, relative. */
+export const MASS_SCATTER = 0.02;
+export const MASS_FEH_SCATTER = 0.021;
+
+const isInRange = (absKs: number): boolean =>
+  absKs >= COOL_DWARF_ABS_KS.brightest && absKs <= COOL_DWARF_ABS_KS.faintest;
+
+const hasFeh = (feh: number): boolean => feh >= COOL_DWARF_FEH.least && feh <= COOL_DWARF_FEH.most;
+
+/**
+ * Radius, R☉: `1.9515 − 0.3520 M + 0.01680 M²`; scatter 2.89 %.
+ *
+ * @param absKs absolute Ks (Vega), 4.6 to 9.8
+ * @returns NaN outside; the parabola turns at M_Ks 10.476 and is never carried on
+ * @see Mann et al. 2015, ApJ 804, 64, Table 1, eq. 4, with the erratum 2016, ApJ 819, 87
+ * @example radiusFromAbsKs(7.5) // 0.2565
+ */
+export const radiusFromAbsKs = (absKs: number): number =>
+  isInRange(absKs) ? 1.9515 - 0.352 * absKs + 0.0168 * absKs * absKs : Number.NaN;
+
+/** dR/dM_Ks of {@link radiusFromAbsKs}, R☉ per mag. */
+export const radiusSlope = (absKs: number): number => -0.352 + 0.0336 * absKs;
+
+/**
+ * Radius with the metallicity term, R☉: `(1.9305 − 0.3466 M + 0.01647 M²)(1 + 0.04458 [Fe/H])`; scatter 2.70 %. The
+ * term multiplies.
+ *
+ * @param absKs absolute Ks (Vega), 4.6 to 9.8
+ * @param feh [Fe/H], −0.6 to 0.5
+ * @see Mann et al. 2015, ApJ 804, 64, Table 1, eq. 5, with the erratum 2016, ApJ 819, 87
+ */
+export const radiusFromAbsKsFeh = (absKs: number, feh: number): number =>
+  isInRange(absKs) && hasFeh(feh)
+    ? (1.9305 - 0.3466 * absKs + 0.01647 * absKs * absKs) * (1 + 0.04458 * feh)
+    : Number.NaN;
+
+/** dR/dM_Ks of {@link radiusFromAbsKsFeh}, R☉ per mag. */
+export const radiusFehSlope = (absKs: number, feh: number): number =>
+  (-0.3466 + 0.03294 * absKs) * (1 + 0.04458 * feh);
+
+/** The quintic of Mann et al. 2019 in x = M_Ks − 7.5, by Horner. */
+const quintic = (x: number, a: number, b: number, c: number, d: number, e: number, f: number): number =>
+  a + x * (b + x * (c + x * (d + x * (e + x * f))));
+
+const slopeOfQuintic = (x: number, b: number, c: number, d: number, e: number, f: number): number =>
+  b + x * (2 * c + x * (3 * d + x * (4 * e + x * 5 * f)));
+
+/**
+ * Mass, M☉: `log M = −0.642 − 0.208 x − 8.43e−4 x² + 7.87e−3 x³ + 1.42e−4 x⁴ − 2.13e−4 x⁵`, x = M_Ks − 7.5; scatter 2.0 %.
+ * Published for 4 < M_Ks < 11; used here where the radius holds too, 4.6 to 9.8.
+ *
+ * @see Mann et al. 2019, ApJ 871, 63, eq. 4 and Table 6
+ * @example massFromAbsKs(7.5) // 0.22803420720004194
+ */
+export const massFromAbsKs = (absKs: number): number =>
+  isInRange(absKs)
+    ? 10 ** quintic(absKs - 7.5, -0.642, -0.208, -8.43e-4, 7.87e-3, 1.42e-4, -2.13e-4)
+    : Number.NaN;
+
+/** d ln M / dM_Ks of {@link massFromAbsKs}, per mag. */
+export const logMassSlope = (absKs: number): number =>
+  Math.LN10 * slopeOfQuintic(absKs - 7.5, -0.208, -8.43e-4, 7.87e-3, 1.42e-4, -2.13e-4);
+
+/**
+ * Mass with the metallicity term, M☉: `(1 − 0.0035 [Fe/H]) 10^(−0.647 − 0.207 x − 6.53e−4 x² + 7.13e−3 x³ + 1.84e−4 x⁴ −
+ * 1.60e−4 x⁵)`; scatter 2.1 %.
+ *
+ * @see Mann et al. 2019, ApJ 871, 63, eq. 5 and Table 6
+ */
+export const massFromAbsKsFeh = (absKs: number, feh: number): number =>
+  isInRange(absKs) && hasFeh(feh)
+    ? (1 - 0.0035 * feh) * 10 ** quintic(absKs - 7.5, -0.647, -0.207, -6.53e-4, 7.13e-3, 1.84e-4, -1.6e-4)
+    : Number.NaN;
+
+/** d ln M / dM_Ks of {@link massFromAbsKsFeh}, per mag. */
+export const logMassFehSlope = (absKs: number): number =>
+  Math.LN10 * slopeOfQuintic(absKs - 7.5, -0.207, -6.53e-4, 7.13e-3, 1.84e-4, -1.6e-4);
+
+/** BP − RP of the calibration stars of the temperature relation, and its temperatures. */
+export const COOL_DWARF_BP_RP = { bluest: 1.9, reddest: 4.75 } as const;
+/** Scatter of the fit (52 K) and zero point of the spectroscopic scale (60 K) in quadrature. */
+export const COOL_DWARF_TEFF_SCATTER_K = Math.hypot(52, 60);
+
+/**
+ * Effective temperature from BP − RP, K: `3500 (3.245 − 2.4309 X + 1.043 X² − 0.2127 X³ + 0.01649 X⁴)`; scatter 52 K,
+ * zero point 60 K.
+ *
+ * @param bpRp BP − RP, mag, 1.90 to 4.75
+ * @returns NaN outside the colours and outside 2700 to 4100 K, where the quartic turns up again
+ * @see Mann et al. 2015, ApJ 804, 64, Table 2, with the erratum 2016, ApJ 819, 87
+ */
+export const coolDwarfTeff = (bpRp: number): number => {
+  if (!(bpRp >= COOL_DWARF_BP_RP.bluest && bpRp <= COOL_DWARF_BP_RP.reddest)) return Number.NaN;
+  const teff = 3500 * (3.245 + bpRp * (-2.4309 + bpRp * (1.043 + bpRp * (-0.2127 + bpRp * 0.01649))));
+  return teff >= 2700 && teff <= 4100 ? teff : Number.NaN;
+};
+
+/** dTeff / d(BP − RP) of {@link coolDwarfTeff}, K per mag. */
+export const coolDwarfTeffSlope = (bpRp: number): number =>
+  3500 * (-2.4309 + bpRp * (2.086 + bpRp * (-0.6381 + bpRp * 0.06596)));
+
+/**
+ * Bolometric correction to Ks from BP − RP, mag: `1.81625213 + 0.40853528 X − 0.03546636 X²`; rms 0.040 mag.
+ *
+ * @param bpRp 1.90 to 4.75
+ * @see a fit of this project to the 50 stars published with Mann et al. 2015 (F_bol, Ks, colours); not a relation of
+ *   that paper
+ */
+export const bolometricCorrectionKs = (bpRp: number): number =>
+  bpRp >= COOL_DWARF_BP_RP.bluest && bpRp <= COOL_DWARF_BP_RP.reddest
+    ? 1.81625213 + bpRp * (0.40853528 - 0.03546636 * bpRp)
+    : Number.NaN;
+
+/** Scatter of {@link bolometricCorrectionKs}, mag. */
+export const BC_KS_SCATTER = 0.04;
