@@ -11,6 +11,7 @@ import { requestLog } from "./http/request-log.ts";
 import { type DefinedRoute, Routes } from "./http/route.ts";
 import { securityHeaders } from "./http/security-headers.ts";
 import { sessions } from "./http/session.ts";
+import { addJobRoutes } from "./jobs/routes.ts";
 import { addLogbookRoutes } from "./logbook/routes.ts";
 import { addMailRoutes } from "./mail/routes.ts";
 import { addPeopleRoutes } from "./people/routes.ts";
@@ -24,6 +25,7 @@ const SUBJECTS: readonly ((routes: Routes) => void)[] = [
   addProgrammeRoutes,
   addLogbookRoutes,
   addMailRoutes,
+  addJobRoutes,
 ];
 
 const api = (deps: Deps): { router: Router; routes: DefinedRoute[] } => {
