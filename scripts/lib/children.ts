@@ -22,7 +22,8 @@ export interface Child {
 const QUICK_MS = 5_000;
 const QUICK_ENDS_ALLOWED = 3;
 const RESTART_MS = 1_000;
-const STOP_MS = 15_000;
+/** Longer than the processes give their own work to come to an end. */
+const STOP_MS = 30_000;
 
 const print = (line: string): void => {
   process.stdout.write(`${line}\n`);

@@ -1,5 +1,5 @@
 import { createHash, randomUUID } from "node:crypto";
-import { createReadStream } from "node:fs";
+import { createReadStream, createWriteStream } from "node:fs";
 import { type FileHandle, mkdir, open, readdir, rename, rm, stat } from "node:fs/promises";
 import { dirname, join } from "node:path";
 import { type Readable, Transform } from "node:stream";
@@ -95,16 +95,11 @@ export class FolderStorage implements FileStorage {
   }
 
   private async writeAside(aside: string, source: Readable, options: WriteOptions): Promise<Written> {
-    const handle = await open(aside, "wx", 0o600);
-    try {
-      const { through, written } = meter(options.limitBytes ?? Number.POSITIVE_INFINITY);
-      const file = handle.createWriteStream({ autoClose: false, flush: true });
-      await pipeline(source, through, file, { signal: options.signal });
-      await handle.sync();
-      return written();
-    } finally {
-      await handle.close();
-    }
+    const { through, written } = meter(options.limitBytes ?? Number.POSITIVE_INFINITY);
+    // `flush` forces the bytes to disk before the stream says it is closed.
+    const file = createWriteStream(aside, { flags: "wx", mode: 0o600, flush: true });
+    await pipeline(source, through, file, { signal: options.signal });
+    return written();
   }
 
   private async sweep(): Promise<void> {
