@@ -1,0 +1,86 @@
+import { beforeAll, describe, expect, test } from "vitest";
+import { JobRow } from "#server/database/entities/job.entity.ts";
+import { startTestApp, type TestApp } from "#tests/support/app.ts";
+import { buildPerson } from "#tests/support/factories.ts";
+
+let on: TestApp;
+beforeAll(async () => {
+  on = await startTestApp();
+});
+
+describe("a programme", () => {
+  test("is made by an installation administrator, who administers it", async () => {
+    const { agent } = await on.as(await buildPerson(on.deps.db, { isInstallationAdministrator: true }));
+    const { body } = await agent.post("/api/programmes").send({ name: " Cool Neighbours " }).expect(201);
+    expect(body.programme).toMatchObject({
+      name: "Cool Neighbours",
+      description: "",
+      recipe: "default",
+      edition: null,
+      stars: 0,
+      counts: { members: 1, extracts: 0 },
+    });
+    const session = (await agent.get("/api/session")).body.session;
+    expect(session.programmes).toMatchObject([{ id: body.programme.id, roles: ["administrator"] }]);
+  });
+
+  test("is listed to its members alone", async () => {
+    const { agent, programme } = await on.asPerson("guest");
+    await on.asPerson("guest");
+    const { body } = await agent.get("/api/programmes").expect(200);
+    expect(body.programmes.map((each: { id: string }) => each.id)).toEqual([programme.id]);
+  });
+
+  test("is changed once from one version: the second of two editors is told what is in force", async () => {
+    const { agent, programme } = await on.asPerson("lead");
+    const path = `/api/programmes/${programme.id}`;
+    const { version } = (await agent.get(path)).body.programme;
+    const first = await agent.patch(path).send({ name: "First", version }).expect(200);
+    expect(first.body.programme).toMatchObject({ name: "First", version: version + 1 });
+    const second = await agent.patch(path).send({ name: "Second", version });
+    expect([second.status, second.body.error.code]).toEqual([409, "changed-meanwhile"]);
+    expect(second.body.error.details).toMatchObject({ name: "First", version: version + 1 });
+    expect((await agent.get(path)).body.programme.name).toBe("First");
+  });
+
+  test("two editors at the same moment: one wins", async () => {
+    const { agent, programme } = await on.asPerson("lead");
+    const path = `/api/programmes/${programme.id}`;
+    const { version } = (await agent.get(path)).body.programme;
+    const answers = await Promise.all(
+      ["A", "B", "C"].map((name) => agent.patch(path).send({ name, version })),
+    );
+    expect(answers.map((answer) => answer.status).sort()).toEqual([200, 409, 409]);
+  });
+
+  test("without a name is refused at the field", async () => {
+    const { agent } = await on.as(await buildPerson(on.deps.db, { isInstallationAdministrator: true }));
+    const { body } = await agent.post("/api/programmes").send({ name: "  " }).expect(400);
+    expect(body.error.fields).toEqual({ name: "Give it a name." });
+  });
+});
+
+describe("another recipe", () => {
+  test("is a job that derives the catalogue anew, in the logbook", async () => {
+    const { agent, programme, person } = await on.asPerson(["curator"]);
+    const path = `/api/programmes/${programme.id}`;
+    const { body } = await agent.put(`${path}/recipe`).send({ recipe: "practice" }).expect(202);
+    expect(body.job).toMatchObject({ kind: "recompute", state: "queued" });
+    const job = await on.deps.db.manager.findOneByOrFail(JobRow, { id: body.job.id });
+    expect(job).toMatchObject({
+      programmeId: programme.id,
+      personId: person.id,
+      payload: { recipe: "practice" },
+    });
+    const { lines } = (await agent.get(`${path}/logbook`)).body;
+    expect(lines[0]).toMatchObject({ action: "programme.choose-recipe", after: { recipe: "practice" } });
+  });
+
+  test("that is in force already, or does not exist, starts nothing", async () => {
+    const { agent, programme } = await on.asPerson("lead");
+    const put = (recipe: string) => agent.put(`/api/programmes/${programme.id}/recipe`).send({ recipe });
+    expect((await put("default")).status).toBe(409);
+    expect((await put("magic")).status).toBe(400);
+    expect(await on.deps.db.manager.countBy(JobRow, { programmeId: programme.id })).toBe(0);
+  });
+});
