@@ -1,3 +1,3 @@
 import { handOverTo } from "./lib/bootstrap.mjs";
 
-handOverTo("scripts/bench.ts");
+handOverTo("tests/bench/run.ts");
