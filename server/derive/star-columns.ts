@@ -1,0 +1,48 @@
+import { METHOD_KEYS } from "#server/database/star-table.ts";
+import { blankKey, type Column, columnsOf, errorKey } from "#shared/catalogue/columns.ts";
+
+/** The numeric keys of one row of given values; temperature stands apart as `teff_given`. NaN is "not given". */
+export const GIVEN_KEYS: readonly string[] = [
+  ...columnsOf("given").flatMap((c: Column) =>
+    c.kind === "text" ? [] : c.hasError ? [c.key, errorKey(c.key)] : [c.key],
+  ),
+  "teff_given",
+  "teff_given_err",
+];
+
+/** The stellar quantities that have a value, an error and a blank reason: all but the count of flags. */
+export const STELLAR_KEYS: readonly string[] = columnsOf("stellar").flatMap((c) =>
+  c.key === "flags" ? [] : [c.key],
+);
+
+/** Columns of one length by key. */
+export type Columns = Record<string, Float64Array>;
+
+export interface StellarColumns {
+  readonly length: number;
+  /** Values and errors, by `key` and `key_err`. */
+  readonly values: Columns;
+  /** Blank-reason codes by `key_blank`; 0 where the value is there. */
+  readonly blanks: Record<string, Uint8Array>;
+  /** Codes of shared/catalogue/methods by `key_method`. */
+  readonly methods: Record<string, Uint8Array>;
+  readonly flagBits: Uint16Array;
+  readonly flags: Uint8Array;
+}
+
+export const allocateGiven = (length: number): Columns =>
+  Object.fromEntries(GIVEN_KEYS.map((key) => [key, new Float64Array(length).fill(Number.NaN)]));
+
+export const allocateStellar = (length: number): StellarColumns => ({
+  length,
+  values: Object.fromEntries(
+    STELLAR_KEYS.flatMap((key) => [
+      [key, new Float64Array(length).fill(Number.NaN)],
+      [errorKey(key), new Float64Array(length).fill(Number.NaN)],
+    ]),
+  ),
+  blanks: Object.fromEntries(STELLAR_KEYS.map((key) => [blankKey(key), new Uint8Array(length)])),
+  methods: Object.fromEntries(METHOD_KEYS.map((key) => [`${key}_method`, new Uint8Array(length)])),
+  flagBits: new Uint16Array(length),
+  flags: new Uint8Array(length),
+});
