@@ -1,11 +1,20 @@
 import { createServer } from "node:http";
 import { createApp } from "./app.ts";
 import { ConfigError, loadConfig } from "./config.ts";
-import { closeDeps, createDeps } from "./deps.ts";
+import { closeDeps, createDeps, type Deps } from "./deps.ts";
+import { removeExpired } from "./http/expired.ts";
 import { createLog } from "./log.ts";
 
 /** Requests under way get this long to finish before their connections are cut. */
 const GRACE_MS = 5_000;
+
+const SWEEP_EVERY_MS = 15 * 60_000;
+
+const sweep = (deps: Deps): void => {
+  removeExpired(deps).catch((error: unknown) =>
+    deps.log.warn("database", "Expired rows stay for now", { error }),
+  );
+};
 
 const start = async (): Promise<void> => {
   const config = loadConfig(process.env);
@@ -13,10 +22,13 @@ const start = async (): Promise<void> => {
   const deps = await createDeps(config, log);
   const server = createServer(createApp(deps).app);
 
+  const sweeping = setInterval(sweep, SWEEP_EVERY_MS, deps);
+
   let isStopping = false;
   const stop = (): void => {
     if (isStopping) return;
     isStopping = true;
+    clearInterval(sweeping);
     setTimeout(() => server.closeAllConnections(), GRACE_MS).unref();
     server.close(() => {
       closeDeps(deps).then(

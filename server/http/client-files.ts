@@ -1,8 +1,8 @@
-import { join } from "node:path";
+import { extname, join } from "node:path";
 import express, { Router } from "express";
 import type { Deps } from "../deps.ts";
 
-/** The built client. Files with a hash in their name never change; every other address of ours is the page itself. */
+/** The built client. Files with a hash in their name never change; every other address without an ending is the page itself. */
 export const clientFiles = (deps: Deps): Router => {
   const folder = deps.config.folders.client;
   const router = Router();
@@ -12,7 +12,7 @@ export const clientFiles = (deps: Deps): Router => {
   );
   router.use(express.static(folder, { index: false, maxAge: 0 }));
   router.get("/{*path}", (req, res, next) => {
-    if (!req.accepts("html") || req.path.startsWith("/assets/")) return next();
+    if (!req.accepts("html") || extname(req.path) !== "") return next();
     res.set("Cache-Control", "no-cache");
     res.sendFile("index.html", { root: folder }, (error) => {
       if (!error || res.headersSent) return;
