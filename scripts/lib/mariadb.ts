@@ -84,24 +84,33 @@ const launch = async (options: MariaDbOptions, password: string): Promise<MariaD
   initialise(programs.install, dataFolder(options.folder));
   let last: unknown;
   for (let attempt = 0; attempt < ATTEMPTS; attempt++) {
-    const port = await choosePort(portFile(options.folder), attempt > 0);
+    const port = await choosePort(options.folder, attempt > 0);
     try {
       return await launchOn(programs.server, options, port, password);
     } catch (error) {
       last = error;
+      // A server that is still ending holds the data for another moment.
+      await sleep(1000);
     }
   }
   throw last;
 };
 
-/** The port of the last run when it is still free, so that tools that were pointed at it go on working. */
-const choosePort = async (file: string, isRetry: boolean): Promise<number> => {
+/** The port of the last run, so that whatever was pointed at it goes on working, unless another program has it. */
+const choosePort = async (folder: string, isRetry: boolean): Promise<number> => {
+  const file = portFile(folder);
   const remembered = existsSync(file) ? Number(readFileSync(file, "utf8")) : 0;
-  const port =
-    !isRetry && remembered > 0 && (await isPortFree("127.0.0.1", remembered)) ? remembered : await freePort();
+  const isTaken =
+    remembered === 0 || (isRetry ? lostPort(folder) : !(await isPortFree("127.0.0.1", remembered)));
+  const port = isTaken ? await freePort() : remembered;
   writeFileSync(file, String(port));
   return port;
 };
+
+const logFile = (folder: string) => join(folder, "mariadb.log");
+
+const lostPort = (folder: string): boolean =>
+  /Address already in use/i.test(readFileSync(logFile(folder), "utf8"));
 
 const launchOn = async (
   program: string,
@@ -112,7 +121,7 @@ const launchOn = async (
   const { folder, isThrowaway = false } = options;
   const setUp = join(folder, "set-up.sql");
   writeFileSync(setUp, setUpStatements(password, isThrowaway).join("\n"), { mode: 0o600 });
-  const log = join(folder, "mariadb.log");
+  const log = logFile(folder);
   rmSync(log, { force: true });
   const output = openSync(log, "a", 0o600);
   // A group of its own: Ctrl-C in the terminal reaches the starter alone, which then stops things in order.

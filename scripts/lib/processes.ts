@@ -1,5 +1,5 @@
 import { execFileSync } from "node:child_process";
-import { readFileSync } from "node:fs";
+import { readdirSync, readFileSync } from "node:fs";
 import { setTimeout as sleep } from "node:timers/promises";
 
 /** The command line of a running process, or null when there is none of that number. */
@@ -18,6 +18,20 @@ const commandByPs = (pid: number): string | null => {
     return execFileSync("ps", ["-o", "command=", "-p", String(pid)], { encoding: "utf8" }).trim() || null;
   } catch {
     return null;
+  }
+};
+
+/**
+ * Whether nothing of the process is left but, at most, its entry in the list. While it is ending it has no command
+ * line any more but still holds its files and ports; with many threads the first may be done before the others.
+ */
+const isGone = (pid: number): boolean => {
+  if (process.platform !== "linux") return commandOf(pid) === null;
+  try {
+    const state = readFileSync(`/proc/${pid}/stat`, "utf8").split(") ").at(-1)?.charAt(0);
+    return state === "X" || (state === "Z" && readdirSync(`/proc/${pid}/task`).length <= 1);
+  } catch {
+    return true;
   }
 };
 
@@ -44,12 +58,15 @@ const signal = (pid: number, name: NodeJS.Signals): void => {
 /** Asks the process to end, insists after `patienceMs`, and resolves once it is gone. */
 export const endProcess = async (pid: number, patienceMs: number): Promise<void> => {
   const before = commandOf(pid);
-  if (before === null) return;
-  const isThere = () => commandOf(pid) === before;
+  const isThere = (): boolean => {
+    const now = commandOf(pid);
+    // Another command: the number has been given to a new process.
+    return now === null || now === before ? !isGone(pid) : false;
+  };
+  if (!isThere()) return;
   signal(pid, "SIGTERM");
   const until = Date.now() + patienceMs;
   while (isThere() && Date.now() < until) await sleep(50);
-  if (!isThere()) return;
-  signal(pid, "SIGKILL");
+  if (isThere()) signal(pid, "SIGKILL");
   while (isThere()) await sleep(20);
 };
