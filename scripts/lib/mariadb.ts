@@ -7,7 +7,7 @@ import { createConnection } from "mysql2/promise";
 import { requireMariaDb } from "./debian.ts";
 import { initialise, socketPath, userArguments } from "./mariadb-folder.ts";
 import { freePort, isPortFree } from "./ports.ts";
-import { endProcess, livingProcess } from "./processes.ts";
+import { endProcess, livingProcess, waitWhileEnding } from "./processes.ts";
 import { Trouble } from "./trouble.ts";
 
 export interface MariaDbOptions {
@@ -65,6 +65,7 @@ const answers = async (port: number, password: string): Promise<boolean> => {
 };
 
 const adopt = async (options: MariaDbOptions, password: string): Promise<MariaDb | null> => {
+  await waitWhileEnding(pidFile(options.folder), STOP_MS);
   const pid = livingProcess(pidFile(options.folder), `--datadir=${dataFolder(options.folder)} `);
   if (pid === null) return null;
   const port = existsSync(portFile(options.folder))

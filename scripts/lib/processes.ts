@@ -35,16 +35,26 @@ const isGone = (pid: number): boolean => {
   }
 };
 
-/** The number kept in that file if it is of a live process whose command line has that word; else null. */
-export const livingProcess = (pidFile: string, word: string): number | null => {
-  let pid: number;
+const numberIn = (pidFile: string): number | null => {
   try {
-    pid = Number(readFileSync(pidFile, "utf8").trim());
+    const pid = Number(readFileSync(pidFile, "utf8").trim());
+    return Number.isInteger(pid) && pid > 1 ? pid : null;
   } catch {
     return null;
   }
-  if (!Number.isInteger(pid) || pid < 2) return null;
-  return commandOf(pid)?.includes(word) ? pid : null;
+};
+
+/** The number kept in that file if it is of a live process whose command line has that word; else null. */
+export const livingProcess = (pidFile: string, word: string): number | null => {
+  const pid = numberIn(pidFile);
+  return pid !== null && commandOf(pid)?.includes(word) ? pid : null;
+};
+
+/** Waits while the process of that file is dying but still holds on to what it had open. */
+export const waitWhileEnding = async (pidFile: string, patienceMs: number): Promise<void> => {
+  const pid = numberIn(pidFile);
+  const until = Date.now() + patienceMs;
+  while (pid !== null && commandOf(pid) === null && !isGone(pid) && Date.now() < until) await sleep(20);
 };
 
 const signal = (pid: number, name: NodeJS.Signals): void => {
