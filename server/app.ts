@@ -14,6 +14,7 @@ import { sessions } from "./http/session.ts";
 import { addJobRoutes } from "./jobs/routes.ts";
 import { addLogbookRoutes } from "./logbook/routes.ts";
 import { addMailRoutes } from "./mail/routes.ts";
+import { addInterfaceRoutes } from "./openapi.ts";
 import { addPeopleRoutes } from "./people/routes.ts";
 import { addProgrammeRoutes } from "./programmes/routes.ts";
 
@@ -25,6 +26,7 @@ const SUBJECTS: readonly ((routes: Routes) => void)[] = [
   addProgrammeRoutes,
   addLogbookRoutes,
   addMailRoutes,
+  addInterfaceRoutes,
   addJobRoutes,
 ];
 

@@ -5,8 +5,8 @@ import { closeDeps, createDeps, type Deps } from "./deps.ts";
 import { removeExpired } from "./http/expired.ts";
 import { createLog } from "./log.ts";
 
-/** Requests under way get this long to finish before their connections are cut. */
-const GRACE_MS = 5_000;
+/** Requests under way get this long to finish before their connections are cut; event streams never would. */
+const GRACE_MS = 2_000;
 
 const SWEEP_EVERY_MS = 15 * 60_000;
 

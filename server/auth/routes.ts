@@ -1,9 +1,12 @@
 import type { Request, Response } from "express";
+import { z } from "zod";
 import {
   type Link,
+  link,
   passwordChangeBody,
   passwordResetBody,
   passwordResetRequestBody,
+  session,
   signInBody,
 } from "#shared/api/session.ts";
 import { AppError } from "../errors.ts";
@@ -15,6 +18,8 @@ import { presentLink } from "./present.ts";
 import { changePassword, signOutEverywhere } from "./service.ts";
 import { currentSession, signIn } from "./session-answer.ts";
 import { endSession } from "./sessions.ts";
+
+const sessionAnswer = z.object({ session });
 
 const notRecognised = (): AppError =>
   new AppError(401, "not-recognised", "This e-mail address and password do not belong together.", {
@@ -28,13 +33,16 @@ const signOut = async (req: Request, res: Response): Promise<undefined> => {
 };
 
 const addSessionRoutes = (routes: Routes): void => {
-  routes.add({ method: "get", path: "/session", access: "anyone" }, currentSession);
+  routes.add({ method: "get", path: "/session", access: "anyone", answer: sessionAnswer }, currentSession);
 
-  routes.add({ method: "post", path: "/session", access: "anyone", body: signInBody }, async (at) => {
-    const caller = await authenticate(at.deps, at.req, at.res);
-    if (!caller) throw notRecognised();
-    return signIn(at, caller);
-  });
+  routes.add(
+    { method: "post", path: "/session", access: "anyone", body: signInBody, answer: sessionAnswer },
+    async (at) => {
+      const caller = await authenticate(at.deps, at.req, at.res);
+      if (!caller) throw notRecognised();
+      return signIn(at, caller);
+    },
+  );
 
   routes.add({ method: "delete", path: "/session", access: "signed-in" }, ({ req, res }) =>
     signOut(req, res),
@@ -60,7 +68,13 @@ const addOwnRoutes = (routes: Routes): void => {
 
 const addPasswordResetRoutes = (routes: Routes): void => {
   routes.add(
-    { method: "post", path: "/password-resets", access: "anyone", body: passwordResetRequestBody },
+    {
+      method: "post",
+      path: "/password-resets",
+      access: "anyone",
+      body: passwordResetRequestBody,
+      status: 202,
+    },
     async ({ deps, body, res }) => {
       await requestPasswordReset(deps, body.email);
       res.status(202).end();
@@ -68,15 +82,21 @@ const addPasswordResetRoutes = (routes: Routes): void => {
   );
 
   routes.add(
-    { method: "get", path: "/password-resets/:token", access: "anyone" },
+    { method: "get", path: "/password-resets/:token", access: "anyone", answer: z.object({ link }) },
     async ({ deps, params }): Promise<{ link: Link }> => {
-      const link = await readPasswordReset(deps, params.token ?? "");
-      return { link: presentLink(link, null, true) };
+      const found = await readPasswordReset(deps, params.token ?? "");
+      return { link: presentLink(found, null, true) };
     },
   );
 
   routes.add(
-    { method: "post", path: "/password-resets/:token", access: "anyone", body: passwordResetBody },
+    {
+      method: "post",
+      path: "/password-resets/:token",
+      access: "anyone",
+      body: passwordResetBody,
+      answer: sessionAnswer,
+    },
     async (at) => signIn(at, await resetPassword(at.deps, at.params.token ?? "", at.body.password)),
   );
 };

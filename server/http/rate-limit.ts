@@ -6,8 +6,8 @@ import { AppError } from "../errors.ts";
 import { AttemptStore } from "./attempt-store.ts";
 
 const WINDOW_MS = LIMITS.signInWindowMinutes * 60_000;
-/** One address may try this many times the attempts on one account: a whole institute can sit behind it. */
-const ACCOUNTS_PER_ADDRESS = 10;
+/** One address, or one account from all addresses, may see this many times the attempts: an institute shares one. */
+const WIDER = 10;
 
 const waitInWords = (ms: number): string => {
   const minutes = Math.max(1, Math.ceil(ms / 60_000));
@@ -61,7 +61,7 @@ export const rateLimits = (deps: Deps): Router => {
   const attempts = LIMITS.signInAttempts;
   const byAddress = limiter(deps, {
     name: "address",
-    limit: attempts * ACCOUNTS_PER_ADDRESS,
+    limit: attempts * WIDER,
     key: address,
     forgetsSuccess: true,
   });
@@ -70,6 +70,7 @@ export const rateLimits = (deps: Deps): Router => {
     "/session",
     byAddress,
     limiter(deps, { name: "sign-in", limit: attempts, key: both, forgetsSuccess: true }),
+    limiter(deps, { name: "account", limit: attempts * WIDER, key: account, forgetsSuccess: true }),
   );
   router.post(
     "/password-resets",

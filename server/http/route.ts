@@ -28,6 +28,8 @@ export interface RouteSpec<B extends z.ZodType, Q extends z.ZodType> {
   query?: Q;
   /** Status of a JSON answer; 200 unless said. */
   status?: number;
+  /** Shape of the JSON answer, for the description of the interface. */
+  answer?: z.ZodType;
 }
 
 export interface Context<B, Q> {
@@ -45,12 +47,8 @@ export interface Context<B, Q> {
   res: Response;
 }
 
-/** Every route that was defined, for the test that walks route × role. */
-export interface DefinedRoute {
-  method: string;
-  path: string;
-  access: Access;
-}
+/** Every route that was defined, for the interface's description and for the test that walks route × role. */
+export type DefinedRoute = Readonly<RouteSpec<z.ZodType, z.ZodType>>;
 
 /**
  * Collects a subject's routes. The handler's answer becomes the JSON body; `undefined` with an unsent response
@@ -68,7 +66,7 @@ export class Routes {
     spec: RouteSpec<B, Q>,
     handle: (context: Context<z.output<B>, z.output<Q>>) => unknown,
   ): void {
-    this.defined.push({ method: spec.method, path: spec.path, access: spec.access });
+    this.defined.push(spec);
     this.router[spec.method](spec.path, async (req: Request, res: Response) => {
       const who = await authorise(this.deps, req, spec.access);
       const context = {

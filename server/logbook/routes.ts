@@ -1,4 +1,5 @@
-import { logbookQuery } from "#shared/api/programmes.ts";
+import { z } from "zod";
+import { logbookLine, logbookQuery } from "#shared/api/programmes.ts";
 import type { Routes } from "../http/route.ts";
 import { presentLine } from "./present.ts";
 import { readLines } from "./read.ts";
@@ -10,6 +11,7 @@ export const addLogbookRoutes = (routes: Routes): void => {
       path: "/programmes/:programmeId/logbook",
       access: "logbook.read",
       query: logbookQuery,
+      answer: z.object({ lines: z.array(logbookLine), next: z.string().optional() }),
     },
     async ({ deps, programmeId, query }) => {
       const { lines, next } = await readLines(deps, programmeId, query);

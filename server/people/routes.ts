@@ -1,5 +1,6 @@
-import { invitationBody, rolesBody } from "#shared/api/programmes.ts";
-import { invitationAcceptBody, meBody } from "#shared/api/session.ts";
+import { z } from "zod";
+import { invitation, invitationBody, member, rolesBody } from "#shared/api/programmes.ts";
+import { invitationAcceptBody, link, meBody, session } from "#shared/api/session.ts";
 import { currentSession, signIn } from "../auth/session-answer.ts";
 import type { Routes } from "../http/route.ts";
 import { acceptInvitation, joinByInvitation, readInvitation } from "./accept-invitation.ts";
@@ -8,16 +9,26 @@ import { presentInvitation, presentMember } from "./present.ts";
 import { changeProfile } from "./profile.ts";
 import { changeRoles, listMembers, removeMember } from "./service.ts";
 
+const sessionAnswer = z.object({ session });
 const MEMBERS = "/programmes/:programmeId/members";
 const INVITATIONS = "/programmes/:programmeId/invitations";
 
 const addMemberRoutes = (routes: Routes): void => {
-  routes.add({ method: "get", path: MEMBERS, access: "member.read" }, async ({ deps, programmeId }) => ({
-    members: (await listMembers(deps, programmeId)).map(presentMember),
-  }));
+  routes.add(
+    { method: "get", path: MEMBERS, access: "member.read", answer: z.object({ members: z.array(member) }) },
+    async ({ deps, programmeId }) => ({
+      members: (await listMembers(deps, programmeId)).map(presentMember),
+    }),
+  );
 
   routes.add(
-    { method: "patch", path: `${MEMBERS}/:personId`, access: "member.edit", body: rolesBody },
+    {
+      method: "patch",
+      path: `${MEMBERS}/:personId`,
+      access: "member.edit",
+      body: rolesBody,
+      answer: z.object({ member }),
+    },
     async ({ deps, caller, programmeId, params, body }) => ({
       member: presentMember(await changeRoles(deps, caller, programmeId, params.personId ?? "", body.roles)),
     }),
@@ -36,14 +47,29 @@ const addMemberRoutes = (routes: Routes): void => {
 };
 
 const addInvitingRoutes = (routes: Routes): void => {
-  routes.add({ method: "get", path: INVITATIONS, access: "member.edit" }, async ({ deps, programmeId }) => ({
-    invitations: (await listInvitations(deps, programmeId)).map((link) =>
-      presentInvitation(link, deps.now()),
-    ),
-  }));
+  routes.add(
+    {
+      method: "get",
+      path: INVITATIONS,
+      access: "member.edit",
+      answer: z.object({ invitations: z.array(invitation) }),
+    },
+    async ({ deps, programmeId }) => ({
+      invitations: (await listInvitations(deps, programmeId)).map((link) =>
+        presentInvitation(link, deps.now()),
+      ),
+    }),
+  );
 
   routes.add(
-    { method: "post", path: INVITATIONS, access: "member.edit", body: invitationBody, status: 201 },
+    {
+      method: "post",
+      path: INVITATIONS,
+      access: "member.edit",
+      body: invitationBody,
+      status: 201,
+      answer: z.object({ invitation }),
+    },
     async ({ deps, caller, programmeId, body }) => ({
       invitation: presentInvitation(await invite(deps, caller, programmeId, body), deps.now()),
     }),
@@ -59,25 +85,35 @@ const addInvitingRoutes = (routes: Routes): void => {
 const addJoiningRoutes = (routes: Routes): void => {
   const path = "/invitations/:token";
 
-  routes.add({ method: "get", path, access: "anyone" }, async ({ deps, params }) => ({
-    link: await readInvitation(deps, params.token ?? ""),
-  }));
-
-  routes.add({ method: "post", path, access: "anyone", body: invitationAcceptBody }, async (at) =>
-    signIn(at, await acceptInvitation(at.deps, at.params.token ?? "", at.body)),
+  routes.add(
+    { method: "get", path, access: "anyone", answer: z.object({ link }) },
+    async ({ deps, params }) => ({
+      link: await readInvitation(deps, params.token ?? ""),
+    }),
   );
 
-  routes.add({ method: "post", path: `${path}/join`, access: "signed-in" }, async (at) => {
-    await joinByInvitation(at.deps, at.params.token ?? "", at.caller);
-    return currentSession(at);
-  });
+  routes.add(
+    { method: "post", path, access: "anyone", body: invitationAcceptBody, answer: sessionAnswer },
+    async (at) => signIn(at, await acceptInvitation(at.deps, at.params.token ?? "", at.body)),
+  );
+
+  routes.add(
+    { method: "post", path: `${path}/join`, access: "signed-in", answer: sessionAnswer },
+    async (at) => {
+      await joinByInvitation(at.deps, at.params.token ?? "", at.caller);
+      return currentSession(at);
+    },
+  );
 };
 
 export const addPeopleRoutes = (routes: Routes): void => {
-  routes.add({ method: "patch", path: "/me", access: "signed-in", body: meBody }, async (at) => {
-    await changeProfile(at.deps, at.caller, at.body);
-    return currentSession(at);
-  });
+  routes.add(
+    { method: "patch", path: "/me", access: "signed-in", body: meBody, answer: sessionAnswer },
+    async (at) => {
+      await changeProfile(at.deps, at.caller, at.body);
+      return currentSession(at);
+    },
+  );
   addMemberRoutes(routes);
   addInvitingRoutes(routes);
   addJoiningRoutes(routes);
