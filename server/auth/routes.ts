@@ -75,9 +75,9 @@ const addPasswordResetRoutes = (routes: Routes): void => {
       body: passwordResetRequestBody,
       status: 202,
     },
-    async ({ deps, body, res }) => {
+    async ({ deps, body }) => {
       await requestPasswordReset(deps, body.email);
-      res.status(202).end();
+      return {};
     },
   );
 

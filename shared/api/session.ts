@@ -52,7 +52,7 @@ export const passwordChangeBody = z.strictObject({
 });
 /** PATCH /api/me → { session } */
 export const meBody = z.strictObject({ name: name.optional(), theme: theme.optional() });
-/** POST /api/password-resets → 202 whatever the address. */
+/** POST /api/password-resets → 202 {} whatever the address. */
 export const passwordResetRequestBody = z.strictObject({ email });
 /** GET /api/password-resets/:token → { link }; POST /api/password-resets/:token → { session } (signed in). */
 export const passwordResetBody = z.strictObject({ password });
