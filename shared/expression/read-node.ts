@@ -57,13 +57,19 @@ export const readSyntaxError = (error: unknown, text: string): Refused => {
 
 const asNumber = (tree: Tree, doing: string): NumberTree =>
   isCondition(tree)
-    ? refuse(`${doing} needs numbers, and one side is a condition.`, "Set brackets, or join conditions by and, or.")
+    ? refuse(
+        `${doing} needs numbers, and one side is a condition.`,
+        "Set brackets, or join conditions by and, or.",
+      )
     : tree;
 
 const asCondition = (tree: Tree, doing: string): ConditionTree =>
   isCondition(tree)
     ? tree
-    : refuse(`${doing} needs conditions, and one side is a number.`, "Compare it first, for example ruwe < 1.4.");
+    : refuse(
+        `${doing} needs conditions, and one side is a number.`,
+        "Compare it first, for example ruwe < 1.4.",
+      );
 
 const readConstant = (node: ConstantNode): Tree => {
   const value: unknown = node.value;
@@ -113,10 +119,16 @@ const readUnary = (op: string, of: Tree, text: string): Tree => {
   if (op === "not") return { kind: "not", of: asCondition(of, "not") };
   if (op === "-") {
     const number = asNumber(of, "A minus sign");
-    return number.kind === "number" ? { kind: "number", value: -number.value } : { kind: "negate", of: number };
+    return number.kind === "number"
+      ? { kind: "number", value: -number.value }
+      : { kind: "negate", of: number };
   }
   if (op === "+") return asNumber(of, "A plus sign");
-  return refuse(`${op} is not used here.`, "Write + - * / ^, comparisons, and, or, not.", positionOf(op, text));
+  return refuse(
+    `${op} is not used here.`,
+    "Write + - * / ^, comparisons, and, or, not.",
+    positionOf(op, text),
+  );
 };
 
 const readOperator = (node: OperatorNode, text: string): Tree => {

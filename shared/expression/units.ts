@@ -1,5 +1,5 @@
-import { refuse } from "./refusal.ts";
 import { NUMERIC_UNITS } from "./names.ts";
+import { refuse } from "./refusal.ts";
 import type { NumberTree, Tree } from "./tree.ts";
 
 /**
