@@ -113,7 +113,7 @@ export const BLANK_REASONS = [
     "too-bright",
     "out-of-range",
     "too bright",
-    "The star is brighter than the bright limit of the instrument card.",
+    "The star is brighter than the instrument card measures: above its bright limit, or filling a pixel in one exposure.",
   ),
   reason(
     18,
@@ -159,6 +159,13 @@ export const BLANK_REASONS = [
     "input-missing",
     "no error given",
     "An input has no error, so this one has none.",
+  ),
+  reason(
+    27,
+    "outside-light-share",
+    "out-of-range",
+    "out of range",
+    "The light share is a fraction of the light, above 0 and at most 1; the one given is not.",
   ),
 ] as const satisfies readonly BlankReason[];
 

@@ -1,4 +1,5 @@
 /** Settings of an instrument card and of a campaign, as the science uses them. */
+import type { PhotonBandKey } from "./passbands.ts";
 
 /**
  * Noise by a published or measured curve: three terms in ppm per hour at the reference magnitude, added in
@@ -24,8 +25,8 @@ export interface FormulaCard {
 export interface DetectorCard {
   readonly model: "detector";
   readonly passband: string;
-  /** Band of the photon rate: a key of PHOTON_BANDS. */
-  readonly photonBand: string;
+  /** Band of the photon rate. */
+  readonly photonBand: PhotonBandKey;
   /** Diameter of the aperture, m. */
   readonly apertureM: number;
   /** Diameter of the central obstruction over that of the aperture. */

@@ -5,8 +5,9 @@
 
 /** Range of M_Ks in which both relations are used. Radius holds for 4.6 to 9.8 (Mann et al. 2015). */
 export const COOL_DWARF_ABS_KS = { brightest: 4.6, faintest: 9.8 } as const;
-/** [Fe/H] of the calibration stars (Mann et al. 2015); the metallicity terms hold inside. */
-export const COOL_DWARF_FEH = { least: -0.6, most: 0.5 } as const;
+/** [Fe/H] of the calibration stars; the metallicity terms hold inside (radius: Mann et al. 2015; mass: Mann et al. 2019). */
+export const RADIUS_FEH = { least: -0.6, most: 0.5 } as const;
+export const MASS_FEH = { least: -0.6, most: 0.4 } as const;
 /** Scatter of eq. 4 and eq. 5 of Mann et al. 2015, relative. */
 export const RADIUS_SCATTER = 0.0289;
 export const RADIUS_FEH_SCATTER = 0.027;
@@ -16,8 +17,6 @@ export const MASS_FEH_SCATTER = 0.021;
 
 const isInRange = (absKs: number): boolean =>
   absKs >= COOL_DWARF_ABS_KS.brightest && absKs <= COOL_DWARF_ABS_KS.faintest;
-
-const hasFeh = (feh: number): boolean => feh >= COOL_DWARF_FEH.least && feh <= COOL_DWARF_FEH.most;
 
 /**
  * Radius, R☉: `1.9515 − 0.3520 M + 0.01680 M²`; scatter 2.89 %.
@@ -42,7 +41,7 @@ export const radiusSlope = (absKs: number): number => -0.352 + 0.0336 * absKs;
  * @see Mann et al. 2015, ApJ 804, 64, Table 1, eq. 5, with the erratum 2016, ApJ 819, 87
  */
 export const radiusFromAbsKsFeh = (absKs: number, feh: number): number =>
-  isInRange(absKs) && hasFeh(feh)
+  isInRange(absKs) && feh >= RADIUS_FEH.least && feh <= RADIUS_FEH.most
     ? (1.9305 - 0.3466 * absKs + 0.01647 * absKs * absKs) * (1 + 0.04458 * feh)
     : Number.NaN;
 
@@ -74,13 +73,13 @@ export const logMassSlope = (absKs: number): number =>
   Math.LN10 * slopeOfQuintic(absKs - 7.5, -0.208, -8.43e-4, 7.87e-3, 1.42e-4, -2.13e-4);
 
 /**
- * Mass with the metallicity term, M☉: `(1 − 0.0035 [Fe/H]) 10^(−0.647 − 0.207 x − 6.53e−4 x² + 7.13e−3 x³ + 1.84e−4 x⁴ −
+ * Mass with the metallicity term, M☉, for [Fe/H] −0.6 to 0.4: `(1 − 0.0035 [Fe/H]) 10^(−0.647 − 0.207 x − 6.53e−4 x² + 7.13e−3 x³ + 1.84e−4 x⁴ −
  * 1.60e−4 x⁵)`; scatter 2.1 %.
  *
  * @see Mann et al. 2019, ApJ 871, 63, eq. 5 and Table 6
  */
 export const massFromAbsKsFeh = (absKs: number, feh: number): number =>
-  isInRange(absKs) && hasFeh(feh)
+  isInRange(absKs) && feh >= MASS_FEH.least && feh <= MASS_FEH.most
     ? (1 - 0.0035 * feh) * 10 ** quintic(absKs - 7.5, -0.647, -0.207, -6.53e-4, 7.13e-3, 1.84e-4, -1.6e-4)
     : Number.NaN;
 
@@ -122,6 +121,9 @@ export const bolometricCorrectionKs = (bpRp: number): number =>
   bpRp >= COOL_DWARF_BP_RP.bluest && bpRp <= COOL_DWARF_BP_RP.reddest
     ? 1.81625213 + bpRp * (0.40853528 - 0.03546636 * bpRp)
     : Number.NaN;
+
+/** dBC_Ks / d(BP − RP) of {@link bolometricCorrectionKs}. */
+export const bolometricCorrectionKsSlope = (bpRp: number): number => 0.40853528 - 0.07093272 * bpRp;
 
 /** Scatter of {@link bolometricCorrectionKs}, mag. */
 export const BC_KS_SCATTER = 0.04;

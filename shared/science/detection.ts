@@ -1,10 +1,14 @@
 import type { CampaignSettings } from "./cards.ts";
 import { EARTH_RADII_PER_SOLAR } from "./constants.ts";
-import { fullTransitDuration, transitDuration } from "./transit.ts";
+import type { Recipe } from "./recipes.ts";
+import { fullTransitDuration, MEAN_CHORD, transitDuration } from "./transit.ts";
+
+/** Rounding of decimal settings in binary: 100 d × 0.29 is 28.999999999999996 d, and 29 d must fit into it once. */
+const ROUNDING = 1e-12;
 
 /** Transits in a campaign: `floor(length × duty / period)`. */
 export const transitsInCampaign = (campaign: CampaignSettings, periodDays: number): number =>
-  Math.floor((campaign.lengthDays * campaign.duty) / periodDays);
+  Math.floor(((campaign.lengthDays * campaign.duty) / periodDays) * (1 + ROUNDING));
 
 /**
  * Radius of the smallest planet found, Earth radii: `R★ √(SNR σ_T / (√N share))`, with `σ_T = σ₁ₕ / √T` (white noise).
@@ -37,3 +41,37 @@ export const smallestPlanet = (
  */
 export const trapezoidDuration = (period: number, a: number, k: number, b: number): number =>
   (transitDuration(period, a, k, b) + 2 * fullTransitDuration(period, a, k, b)) / 3;
+
+/** Least transits with which a planet counts as found: at least one, whatever the campaign asks. */
+export const leastTransits = (campaign: CampaignSettings): number => Math.max(1, campaign.leastTransits);
+
+/** Impact parameter of the mean chord, √(1 − (π/4)²). */
+const MEAN_CHORD_IMPACT = Math.sqrt(1 - MEAN_CHORD ** 2);
+
+/**
+ * Radius of the smallest planet found on one orbit, Earth radii, by the campaign's statistic. A box weighs the whole
+ * `boxHours`. A trapezoid weighs (T14 + 2 T23) / 3 of a planet of the radius that a box would find, at the impact
+ * parameter of the recipe's duration.
+ *
+ * @param a semi-major axis over stellar radius
+ * @param boxHours duration by the recipe, h
+ * @param lightShare F_target / F_total, above 0 to 1; NaN where it is not known: the star then counts as alone
+ */
+export const detectableRadius = (
+  campaign: CampaignSettings,
+  duration: Recipe["duration"],
+  radiusSolar: number,
+  noise1hPpm: number,
+  lightShare: number,
+  transits: number,
+  periodDays: number,
+  a: number,
+  boxHours: number,
+): number => {
+  const share = Number.isNaN(lightShare) ? 1 : lightShare;
+  const box = smallestPlanet(radiusSolar, campaign.snrLimit, noise1hPpm, transits, boxHours, share);
+  if (campaign.statistic === "boxcar") return box;
+  const b = duration === "central" ? 0 : MEAN_CHORD_IMPACT;
+  const hours = trapezoidDuration(24 * periodDays, a, box / (EARTH_RADII_PER_SOLAR * radiusSolar), b);
+  return smallestPlanet(radiusSolar, campaign.snrLimit, noise1hPpm, transits, hours, share);
+};

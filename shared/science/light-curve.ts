@@ -32,6 +32,8 @@ export const transitLossPpm = (
   darkening: LimbDarkening,
 ): number => {
   const phase = (2 * Math.PI * hours) / periodHours;
+  // On the far half of its orbit the planet passes behind the star.
+  if (Math.cos(phase) <= 0) return 0;
   const z = Math.hypot(a * Math.sin(phase), b * Math.cos(phase));
   const covered = coveredShare(k, z);
   return covered === 0 ? 0 : 1e6 * covered * relativeBrightness(darkening, Math.min(z, 1 - k / 2));

@@ -32,16 +32,23 @@ const SEQUENCE: readonly (readonly [bpRp: number, absG: number])[] = [
   [3.35, 12.45],
 ];
 
+/** The table by column: it is searched once per star. */
+const COLOURS = Float64Array.from(SEQUENCE, ([bpRp]) => bpRp);
+const MAGNITUDES = Float64Array.from(SEQUENCE, ([, absG]) => absG);
+
 /**
  * Absolute G of a main-sequence star of that colour, mag, by linear interpolation.
  *
  * @returns NaN outside BP − RP 0.377 to 3.35
  */
 export const mainSequenceAbsG = (bpRp: number): number => {
-  for (let i = 1; i < SEQUENCE.length; i++) {
-    const [x0, y0] = SEQUENCE[i - 1] ?? [0, 0];
-    const [x1, y1] = SEQUENCE[i] ?? [0, 0];
-    if (bpRp >= x0 && bpRp <= x1) return y0 + ((bpRp - x0) / (x1 - x0)) * (y1 - y0);
+  if (!(bpRp >= (COLOURS[0] as number))) return Number.NaN;
+  for (let i = 1; i < COLOURS.length; i++) {
+    const redder = COLOURS[i] as number;
+    if (bpRp > redder) continue;
+    const bluer = COLOURS[i - 1] as number;
+    const above = MAGNITUDES[i - 1] as number;
+    return above + ((bpRp - bluer) / (redder - bluer)) * ((MAGNITUDES[i] as number) - above);
   }
   return Number.NaN;
 };

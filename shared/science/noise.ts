@@ -1,5 +1,5 @@
 import type { CardSettings, DetectorCard, FormulaCard } from "./cards.ts";
-import { electronRate, PHOTON_BANDS, type PhotonBand } from "./passbands.ts";
+import { electronRate, PHOTON_BANDS } from "./passbands.ts";
 
 /** Parts of the noise of one hour, ppm; `total` is their sum in quadrature. */
 export interface NoiseParts {
@@ -60,8 +60,6 @@ export const erf = (x: number): number => {
   return x < 0 ? tail - 1 : 1 - tail;
 };
 
-const bandOf = (key: string): PhotonBand => PHOTON_BANDS[key as keyof typeof PHOTON_BANDS] ?? PHOTON_BANDS.V;
-
 const formulaNoise = (card: FormulaCard, magnitude: number): number => {
   const step = magnitude - card.referenceMagnitude;
   const photon = card.photonPpm * 10 ** (0.2 * step);
@@ -71,7 +69,7 @@ const formulaNoise = (card: FormulaCard, magnitude: number): number => {
 
 /** Electrons of one exposure per pixel and from the star. */
 const exposureElectrons = (card: DetectorCard, magnitude: number) => {
-  const band = bandOf(card.photonBand);
+  const band = PHOTON_BANDS[card.photonBand];
   const { apertureM, obstruction, throughput, exposureS } = card;
   const star =
     electronRate(magnitude, band, apertureM, obstruction, throughput, card.extinction * card.airmass) *
@@ -125,12 +123,20 @@ export const noiseParts = (card: CardSettings, magnitude: number): NoiseParts =>
 /**
  * Noise in one hour, ppm.
  *
- * @returns NaN for a magnitude outside the card's bright and faint limits: nothing is extrapolated
+ * @returns NaN for a magnitude brighter than {@link brightestUsable} or fainter than the card's faint limit: nothing is
+ *   extrapolated
  */
 export const noiseInOneHour = (card: CardSettings, magnitude: number): number => {
-  if (!(magnitude >= card.brightLimit && magnitude <= card.faintLimit)) return Number.NaN;
+  if (!(magnitude >= brightestUsable(card) && magnitude <= card.faintLimit)) return Number.NaN;
   return card.model === "formula" ? formulaNoise(card, magnitude) : detectorParts(card, magnitude).total;
 };
+
+/**
+ * Brightest magnitude a card measures: its bright limit or, for a detector, the magnitude that fills the central pixel,
+ * whichever is fainter. NaN where sky and dark current alone fill the pixel: then nothing is measured.
+ */
+export const brightestUsable = (card: CardSettings): number =>
+  card.model === "formula" ? card.brightLimit : Math.max(card.brightLimit, saturationMagnitude(card));
 
 /**
  * Magnitude at which the central pixel fills within one exposure; brighter stars saturate.

@@ -2,6 +2,8 @@
 
 /** Dwarf colours of the relation below: BP − RP. */
 export const SUNLIKE_BP_RP = { bluest: 0.2, reddest: 2.0 } as const;
+/** Brightest BP and RP with which the relation is used, mag: the photometry of brighter stars saturates. */
+export const SUNLIKE_BRIGHTEST_MAG = 5;
 /** Zero point of the scale, K (Casagrande et al. 2021), and scatter about the fit (30 to 80 K by colour, from memory). */
 export const SUNLIKE_TEFF_SCATTER_K = Math.hypot(20, 60);
 
@@ -68,14 +70,21 @@ export const bolometricCorrectionGSlope = (teffK: number): number => {
 };
 
 /**
+ * Least log g of the relation below. The paper speaks of the main sequence and stars mildly evolved; the number is a
+ * judgement of this project, the border of dwarfs in the temperature relation above.
+ */
+export const SPECTRAL_MASS_LEAST_LOGG = 3.2;
+
+/**
  * Mass of a star like the Sun, M☉, from temperature, gravity and iron content; scatter 0.027 dex (6.4 %). It gives the
  * Sun 1.049: a known feature of the relation.
  *
  * @param teffK K; @param logg dex of cm/s²; @param feh [Fe/H]
- * @returns NaN where the relation gives 0.6 M☉ or less, below its calibration
+ * @returns NaN where the relation gives 0.6 M☉ or less, below its calibration, and for giants (log g below 3.2)
  * @see Torres, Andersen & Giménez 2010, A&A Rev. 18, 67, eq. 5 and Table 4
  */
 export const massFromSpectrum = (teffK: number, logg: number, feh: number): number => {
+  if (!(logg >= SPECTRAL_MASS_LEAST_LOGG)) return Number.NaN;
   const x = Math.log10(teffK) - 4.1;
   const g = logg;
   const log =
