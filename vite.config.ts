@@ -7,6 +7,7 @@ const api = process.env.SHORTLIGHT_API ?? "http://127.0.0.1:4400";
 
 export default defineConfig({
   plugins: [react(), tailwindcss()],
+  publicDir: "src/public",
   build: { outDir: "dist", emptyOutDir: true, assetsInlineLimit: 0, sourcemap: false },
   server: { host: "127.0.0.1", port: 4500, strictPort: true, proxy: { "/api": { target: api } } },
 });

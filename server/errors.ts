@@ -33,8 +33,12 @@ export class AppError extends Error {
 
 /** Also the answer for things of programmes one may not see: there is no telling the two apart. */
 export const notFound = (what = "This page or record"): AppError =>
-  new AppError(404, "not-found", `${what} does not exist, or you may not see it.`, { hint: "Check the address, or ask a member of the programme." });
+  new AppError(404, "not-found", `${what} does not exist, or you may not see it.`, {
+    hint: "Check the address, or ask a member of the programme.",
+  });
 
-export const unprocessable = (code: string, message: string, more?: ErrorMore): AppError => new AppError(422, code, message, more);
+export const unprocessable = (code: string, message: string, more?: ErrorMore): AppError =>
+  new AppError(422, code, message, more);
 
-export const conflict = (code: string, message: string, more?: ErrorMore): AppError => new AppError(409, code, message, more);
+export const conflict = (code: string, message: string, more?: ErrorMore): AppError =>
+  new AppError(409, code, message, more);

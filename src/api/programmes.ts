@@ -1,0 +1,86 @@
+import { infiniteQueryOptions, queryOptions, useMutation, useQueryClient } from "@tanstack/react-query";
+import type { Job } from "#shared/api/jobs.ts";
+import type { Invitation, LogbookLine, Member, Programme } from "#shared/api/programmes.ts";
+import type { Role } from "#shared/policy/roles.ts";
+import { get, request } from "./client.ts";
+import { sessionOptions } from "./session.ts";
+
+export const programmeKeys = {
+  /** Everything of a programme: what a change of its catalogue makes stale. */
+  all: (programmeId: string) => ["programme", programmeId] as const,
+  part: (programmeId: string, ...part: unknown[]) => ["programme", programmeId, ...part] as const,
+};
+
+const base = (programmeId: string): string => `/programmes/${programmeId}`;
+
+export const programmeOptions = (programmeId: string) =>
+  queryOptions({
+    queryKey: programmeKeys.part(programmeId, "itself"),
+    queryFn: async () => (await get<{ programme: Programme }>(base(programmeId))).programme,
+  });
+
+export const membersOptions = (programmeId: string) =>
+  queryOptions({
+    queryKey: programmeKeys.part(programmeId, "members"),
+    queryFn: async () => (await get<{ members: Member[] }>(`${base(programmeId)}/members`)).members,
+  });
+
+export const invitationsOptions = (programmeId: string) =>
+  queryOptions({
+    queryKey: programmeKeys.part(programmeId, "invitations"),
+    queryFn: async () =>
+      (await get<{ invitations: Invitation[] }>(`${base(programmeId)}/invitations`)).invitations,
+  });
+
+export const logbookOptions = (programmeId: string) =>
+  infiniteQueryOptions({
+    queryKey: programmeKeys.part(programmeId, "logbook"),
+    queryFn: ({ pageParam }) =>
+      get<{ lines: LogbookLine[]; next?: string }>(
+        `${base(programmeId)}/logbook${pageParam ? `?cursor=${encodeURIComponent(pageParam)}` : ""}`,
+      ),
+    initialPageParam: "",
+    getNextPageParam: (page) => page.next,
+  });
+
+/** A change in a programme; what it may have touched is read again. */
+export const useProgrammeChange = <V, R>(programmeId: string, send: (input: V) => Promise<R>) => {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: send,
+    onSuccess: () => client.invalidateQueries({ queryKey: programmeKeys.all(programmeId) }),
+  });
+};
+
+export const useCreateProgramme = () => {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (body: { name: string; description: string }) =>
+      request<{ programme: Programme }>("POST", "/programmes", body),
+    onSuccess: () => client.invalidateQueries({ queryKey: sessionOptions.queryKey }),
+  });
+};
+export const useEditProgramme = (programmeId: string) =>
+  useProgrammeChange(programmeId, (body: { name?: string; description?: string; version: number }) =>
+    request<{ programme: Programme }>("PATCH", base(programmeId), body),
+  );
+export const useChooseRecipe = (programmeId: string) =>
+  useProgrammeChange(programmeId, (recipe: string) =>
+    request<{ job: Job }>("PUT", `${base(programmeId)}/recipe`, { recipe }),
+  );
+export const useSetRoles = (programmeId: string) =>
+  useProgrammeChange(programmeId, ({ personId, roles }: { personId: string; roles: Role[] }) =>
+    request("PATCH", `${base(programmeId)}/members/${personId}`, { roles }),
+  );
+export const useRemoveMember = (programmeId: string) =>
+  useProgrammeChange(programmeId, (personId: string) =>
+    request("DELETE", `${base(programmeId)}/members/${personId}`),
+  );
+export const useInvite = (programmeId: string) =>
+  useProgrammeChange(programmeId, (body: { email: string; roles: Role[] }) =>
+    request("POST", `${base(programmeId)}/invitations`, body),
+  );
+export const useWithdrawInvitation = (programmeId: string) =>
+  useProgrammeChange(programmeId, (id: string) =>
+    request("DELETE", `${base(programmeId)}/invitations/${id}`),
+  );

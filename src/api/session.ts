@@ -1,0 +1,70 @@
+import { queryOptions, useMutation, useQueryClient, useSuspenseQuery } from "@tanstack/react-query";
+import type { Link, Mail, Session } from "#shared/api/session.ts";
+import { get, request, setCsrfToken } from "./client.ts";
+
+const adopt = ({ session }: { session: Session }): Session => {
+  setCsrfToken(session.csrfToken);
+  return session;
+};
+
+export const sessionOptions = queryOptions({
+  queryKey: ["session"],
+  queryFn: async () => adopt(await get<{ session: Session }>("/session")),
+  staleTime: 60_000,
+});
+
+/** The session; every screen inside the shell has one with a person. */
+export const useSession = (): Session => useSuspenseQuery(sessionOptions).data;
+
+/** A change that answers with the session it leaves. */
+const useSessionChange = <V>(send: (input: V) => Promise<{ session: Session }>) => {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: send,
+    onSuccess: (answer) => client.setQueryData(sessionOptions.queryKey, adopt(answer)),
+  });
+};
+
+export const useSignIn = () =>
+  useSessionChange((body: { email: string; password: string }) => request("POST", "/session", body));
+export const useAcceptInvitation = (token: string) =>
+  useSessionChange((body: { name: string; password: string }) =>
+    request("POST", `/invitations/${token}`, body),
+  );
+export const useResetPassword = (token: string) =>
+  useSessionChange((body: { password: string }) => request("POST", `/password-resets/${token}`, body));
+export const useChangeMe = () =>
+  useSessionChange((body: { name?: string; theme?: string }) => request("PATCH", "/me", body));
+
+/** Leaves nothing of one person's data for the next. */
+const useLeave = (path: string) => {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => request<void>("DELETE", path),
+    onSuccess: async () => {
+      client.clear();
+      window.location.assign("/sign-in");
+    },
+  });
+};
+export const useSignOut = () => useLeave("/session");
+export const useSignOutEverywhere = () => useLeave("/sessions");
+
+export const useChangePassword = () =>
+  useMutation({
+    mutationFn: (body: { current: string; next: string }) => request<void>("PUT", "/me/password", body),
+  });
+export const useRequestPasswordReset = () =>
+  useMutation({ mutationFn: (body: { email: string }) => request<void>("POST", "/password-resets", body) });
+
+export const linkOptions = (kind: "invitations" | "password-resets", token: string) =>
+  queryOptions({
+    queryKey: ["link", kind, token],
+    queryFn: async () => (await get<{ link: Link }>(`/${kind}/${token}`)).link,
+    retry: false,
+  });
+
+export const mailboxOptions = queryOptions({
+  queryKey: ["mailbox"],
+  queryFn: async () => (await get<{ mails: Mail[] }>("/mailbox")).mails,
+});

@@ -1,0 +1,29 @@
+/** Every address of the application: the pattern for the router, the builder for links. */
+export const paths = {
+  signIn: {
+    pattern: "/sign-in",
+    to: (next?: string) => (next ? `/sign-in?next=${encodeURIComponent(next)}` : "/sign-in"),
+  },
+  forgottenPassword: { pattern: "/forgotten-password", to: () => "/forgotten-password" },
+  invitation: { pattern: "/invitations/:token" },
+  passwordReset: { pattern: "/password-resets/:token" },
+  me: { pattern: "/me", to: () => "/me" },
+  mailbox: { pattern: "/mailbox", to: () => "/mailbox" },
+  programmes: { pattern: "/programmes", to: () => "/programmes" },
+  programme: {
+    pattern: "/programmes/:programmeId",
+    to: (programmeId: string, screen: Screen = "overview", more = "") =>
+      `/programmes/${programmeId}/${screen}${more}`,
+  },
+} as const;
+
+export type Screen =
+  | "overview"
+  | "extracts"
+  | "catalogue"
+  | "instruments"
+  | "merit"
+  | "lists"
+  | "plan"
+  | "logbook"
+  | "settings";

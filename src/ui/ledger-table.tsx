@@ -1,0 +1,33 @@
+import type { ReactNode } from "react";
+
+interface Props {
+  caption: string;
+  heads: readonly { label: ReactNode; isNumber?: boolean }[];
+  children: ReactNode;
+}
+
+/** A plain table ruled in hairlines; long tables of stars use the grid instead. */
+export const LedgerTable = ({ caption, heads, children }: Props) => (
+  <div className="overflow-x-auto">
+    <table className="w-full border-collapse text-left">
+      <caption className="sr-only">{caption}</caption>
+      <thead>
+        <tr className="border-b border-rule">
+          {heads.map(({ label, isNumber }, i) => (
+            // biome-ignore lint/suspicious/noArrayIndexKey: the heads of a table neither move nor change
+            <th
+              key={i}
+              scope="col"
+              className={`px-2 py-2 text-xs font-semibold ${isNumber ? "text-right" : ""}`}
+            >
+              {label}
+            </th>
+          ))}
+        </tr>
+      </thead>
+      <tbody className="[&_td]:border-b [&_td]:border-hair [&_td]:px-2 [&_td]:py-2 [&_td]:align-top">
+        {children}
+      </tbody>
+    </table>
+  </div>
+);
