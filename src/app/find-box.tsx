@@ -18,18 +18,20 @@ export const FindBox = ({ programmeId }: { programmeId: string }) => {
     navigate(paths.programme.to(programmeId, "catalogue", `?${params}`));
   };
   return (
-    <form onSubmit={submit} role="search" className="relative">
-      <input
-        id="find-box"
-        type="search"
-        aria-label="Find a star"
-        aria-keyshortcuts="/"
-        placeholder="Find a star"
-        value={text}
-        onChange={(event) => setText(event.target.value)}
-        className="w-44 rounded border border-edge bg-sheet py-1.5 pr-8 pl-2.5 text-ink xl:w-60"
-      />
-      <kbd className="pointer-events-none absolute top-1.5 right-2.5 font-mono text-soft">/</kbd>
-    </form>
+    <search>
+      <form onSubmit={submit} className="relative">
+        <input
+          id="find-box"
+          type="search"
+          aria-label="Find a star"
+          aria-keyshortcuts="/"
+          placeholder="Find a star"
+          value={text}
+          onChange={(event) => setText(event.target.value)}
+          className="w-44 rounded border border-edge bg-sheet py-1.5 pr-8 pl-2.5 text-ink xl:w-60"
+        />
+        <kbd className="pointer-events-none absolute top-1.5 right-2.5 font-mono text-soft">/</kbd>
+      </form>
+    </search>
   );
 };

@@ -24,7 +24,6 @@ export const Button = ({
   ...rest
 }: Props) => (
   <button
-    // biome-ignore lint/a11y/useButtonType: the type is given above, "button" unless asked otherwise
     type={type}
     disabled={disabled || isBusy}
     aria-busy={isBusy || undefined}

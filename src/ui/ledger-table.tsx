@@ -2,7 +2,7 @@ import type { ReactNode } from "react";
 
 interface Props {
   caption: string;
-  heads: readonly { label: ReactNode; isNumber?: boolean }[];
+  heads: readonly { key?: string; label: ReactNode; isNumber?: boolean }[];
   children: ReactNode;
 }
 
@@ -13,10 +13,9 @@ export const LedgerTable = ({ caption, heads, children }: Props) => (
       <caption className="sr-only">{caption}</caption>
       <thead>
         <tr className="border-b border-rule">
-          {heads.map(({ label, isNumber }, i) => (
-            // biome-ignore lint/suspicious/noArrayIndexKey: the heads of a table neither move nor change
+          {heads.map(({ key, label, isNumber }) => (
             <th
-              key={i}
+              key={key ?? String(label)}
               scope="col"
               className={`px-2 py-2 text-xs font-semibold ${isNumber ? "text-right" : ""}`}
             >

@@ -89,11 +89,14 @@ interface ItemProps {
   children: ReactNode;
 }
 
+/** What tells a choice among several from a plain command. */
+const roleOf = (isChecked: boolean | undefined) =>
+  isChecked === undefined ? { role: "menuitem" } : { role: "menuitemradio", "aria-checked": isChecked };
+
 export const MenuItem = ({ onSelect, isChecked, children }: ItemProps) => (
   <button
     type="button"
-    role={isChecked === undefined ? "menuitem" : "menuitemradio"}
-    aria-checked={isChecked}
+    {...roleOf(isChecked)}
     tabIndex={-1}
     onClick={onSelect}
     className="flex min-h-8 w-full items-center gap-2 px-3 text-left hover:bg-sel focus-visible:bg-sel"
