@@ -180,8 +180,8 @@ const readChain = (node: RelationalNode, text: string): Tree => {
 const readChoice = (node: ConditionalNode, text: string): Tree => ({
   kind: "choice",
   when: asCondition(toTree(node.condition, text), "?"),
-  then: asNumber(toTree(node.trueExpr, text), "?"),
-  otherwise: asNumber(toTree(node.falseExpr, text), "?"),
+  yes: asNumber(toTree(node.trueExpr, text), "?"),
+  no: asNumber(toTree(node.falseExpr, text), "?"),
 });
 
 export const toTree = (node: MathNode, text: string): Tree => {

@@ -32,8 +32,8 @@ export type NumberTree =
   | {
       readonly kind: "choice";
       readonly when: ConditionTree;
-      readonly then: NumberTree;
-      readonly otherwise: NumberTree;
+      readonly yes: NumberTree;
+      readonly no: NumberTree;
     };
 
 /** A tree that holds, fails, or is blank. */
@@ -67,7 +67,7 @@ const parts = (tree: Tree): readonly Tree[] => {
     case "call":
       return tree.args;
     case "choice":
-      return [tree.when, tree.then, tree.otherwise];
+      return [tree.when, tree.yes, tree.no];
     default:
       return [tree.left, tree.right];
   }

@@ -89,7 +89,7 @@ const unitOf = (tree: NumberTree): Unit => {
       return unitOfCall(tree);
     case "choice":
       checkUnits(tree.when);
-      return agree(unitOf(tree.then), unitOf(tree.otherwise), "Choosing between");
+      return agree(unitOf(tree.yes), unitOf(tree.no), "Choosing between");
     case "arithmetic": {
       const [a, b] = [unitOf(tree.left), unitOf(tree.right)];
       if (tree.op === "+") return agree(a, b, "Adding");
