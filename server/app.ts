@@ -11,6 +11,7 @@ import { requestLog } from "./http/request-log.ts";
 import { type DefinedRoute, Routes } from "./http/route.ts";
 import { securityHeaders } from "./http/security-headers.ts";
 import { sessions } from "./http/session.ts";
+import { addInstrumentRoutes } from "./instruments/routes.ts";
 import { addJobRoutes } from "./jobs/routes.ts";
 import { addLogbookRoutes } from "./logbook/routes.ts";
 import { addMailRoutes } from "./mail/routes.ts";
@@ -28,6 +29,7 @@ const SUBJECTS: readonly ((routes: Routes) => void)[] = [
   addMailRoutes,
   addInterfaceRoutes,
   addJobRoutes,
+  addInstrumentRoutes,
 ];
 
 const api = (deps: Deps): { router: Router; routes: DefinedRoute[] } => {
