@@ -1,35 +1,17 @@
 import { type MathNode, parse as parseMath } from "mathjs/number";
 import { LIMITS } from "../limits.ts";
 import { readSyntaxError, toTree } from "./read-node.ts";
-import { type Refusal, Refused, refuse } from "./refusal.ts";
+import { type Refusal, Refused, refuse, refuseDepth } from "./refusal.ts";
 import { conditionToSql, numberToSql, Parameters } from "./to-sql.ts";
-import { type ConditionTree, columnsUsed, isCondition, type NumberTree, type Tree } from "./tree.ts";
+import { type ConditionTree, columnsUsed, depthOf, isCondition, type NumberTree, type Tree } from "./tree.ts";
 import { checkUnits } from "./units.ts";
 
 export type Parsed<T extends Tree> =
   | { readonly ok: true; readonly tree: T; readonly columns: readonly string[] }
   | ({ readonly ok: false } & Refusal);
 
-/** Guards repeat what they guard; this bounds what a short text can grow into. */
-const LONGEST_SQL = 20_000;
-/** Brackets, functions and choices within one another. */
-const DEEPEST = 40;
-
-const depthOf = (text: string): number => {
-  let [depth, deepest] = [0, 0];
-  for (const character of text) {
-    if (character === "(" || character === "?") depth++;
-    else if (character === ")") depth--;
-    deepest = Math.max(deepest, depth);
-  }
-  return deepest;
-};
-
-const tooDeep = (): never =>
-  refuse(
-    "This expression is nested too deeply.",
-    "Split it into several cuts, or write it with fewer brackets and choices.",
-  );
+/** Operations within one another. */
+const DEEPEST = 100;
 
 const nodeOf = (text: string): MathNode => {
   if (text.trim() === "") refuse("Nothing is written here.", "Write for example teff < 3900.", 0);
@@ -39,7 +21,6 @@ const nodeOf = (text: string): MathNode => {
       "Split it into two cuts.",
       LIMITS.expressionCharacters,
     );
-  if (depthOf(text) > DEEPEST) tooDeep();
   try {
     // Line breaks would end an expression; a space of the same length keeps positions true.
     return parseMath(text.replaceAll(/\s/g, " "));
@@ -55,8 +36,9 @@ const parsed = <T extends Tree>(
 ): Parsed<T> => {
   try {
     const tree = make(toTree(nodeOf(text), text));
+    if (depthOf(tree) > DEEPEST) refuseDepth();
     checkUnits(tree);
-    if (sqlOf(tree).length > LONGEST_SQL) tooDeep();
+    sqlOf(tree);
     return { ok: true, tree, columns: columnsUsed(tree) };
   } catch (error) {
     if (error instanceof Refused) return { ok: false, ...error.refusal };

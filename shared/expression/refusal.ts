@@ -15,3 +15,9 @@ export class Refused extends Error {
 export const refuse = (message: string, hint: string, position: number | null = null): never => {
   throw new Refused({ message, hint, position });
 };
+
+export const refuseDepth = (): never =>
+  refuse(
+    "This expression is nested too deeply.",
+    "Split it into several cuts, or write it with fewer brackets and choices.",
+  );

@@ -1,3 +1,4 @@
+import { refuseDepth } from "./refusal.ts";
 import { type Comparison, type ConditionTree, columnsUsed, type NumberTree, type Tree } from "./tree.ts";
 
 /** Constants of one statement: each gets a place (`$1`, `$2` …), so that no text of a person's reaches the SQL. */
@@ -27,6 +28,11 @@ const whenFinite = (sql: string, trees: readonly NumberTree[], texts: readonly s
   return `(CASE WHEN ${checks.map((text) => `isfinite(${text})`).join(" AND ")} THEN ${sql} END)`;
 };
 
+/** Guards repeat what they guard; this bounds what a short text can grow into, before it has grown. */
+const LONGEST = 20_000;
+
+const bounded = (sql: string): string => (sql.length > LONGEST ? refuseDepth() : sql);
+
 const callSql = (tree: Extract<NumberTree, { kind: "call" }>, parameters: Parameters): string => {
   const args = tree.args.map((arg) => numberSql(arg, parameters));
   const list = args.join(", ");
@@ -47,7 +53,10 @@ const callSql = (tree: Extract<NumberTree, { kind: "call" }>, parameters: Parame
   }
 };
 
-const numberSql = (tree: NumberTree, parameters: Parameters): string => {
+const numberSql = (tree: NumberTree, parameters: Parameters): string =>
+  bounded(plainNumberSql(tree, parameters));
+
+const plainNumberSql = (tree: NumberTree, parameters: Parameters): string => {
   switch (tree.kind) {
     case "number":
       return parameters.place(tree.value);
@@ -80,7 +89,10 @@ const SQL_COMPARISON: Record<Comparison, string> = {
   "!=": "<>",
 };
 
-const conditionSql = (tree: ConditionTree, parameters: Parameters): string => {
+const conditionSql = (tree: ConditionTree, parameters: Parameters): string =>
+  bounded(plainConditionSql(tree, parameters));
+
+const plainConditionSql = (tree: ConditionTree, parameters: Parameters): string => {
   switch (tree.kind) {
     case "compare": {
       const [a, b] = [numberSql(tree.left, parameters), numberSql(tree.right, parameters)];

@@ -83,3 +83,6 @@ export const columnsUsed = (tree: Tree): readonly string[] => {
   visit(tree);
   return [...keys];
 };
+
+/** Operations within one another at the deepest place. */
+export const depthOf = (tree: Tree): number => 1 + Math.max(0, ...parts(tree).map(depthOf));
