@@ -1,80 +1,66 @@
 import type { BlankKey } from "#shared/catalogue/blank-reasons.ts";
 import { absoluteMagnitude, absoluteMagnitudeError, distanceFromParallax } from "#shared/science/distance.ts";
-import {
-  DWARF_BRIGHTNESS_MARGIN,
-  DWARF_LEAST_LOGG,
-  mainSequenceAbsG,
-} from "#shared/science/main-sequence.ts";
 import type { Recipe } from "#shared/science/recipes.ts";
+import { SUNLIKE_BRIGHTEST_MAG } from "#shared/science/sunlike.ts";
+import { judgeDwarf } from "./dwarf.ts";
+import { at, errorAt, type Inputs } from "./inputs.ts";
 import type { Scratch } from "./scratch.ts";
-import type { Columns } from "./star-columns.ts";
-import type { Writer } from "./writer.ts";
+import type { Slots } from "./slots.ts";
 
 /** What dwarfs take where log g or [Fe/H] is not given. */
 const ASSUMED = { logg: 4.5, loggError: 0.3, feh: 0, fehError: 0.2 } as const;
 
-const read = (given: Columns, key: string, i: number): number => given[key]?.[i] ?? Number.NaN;
-
 /** Why a parallax gives no distance. */
-const distanceReason = (parallax: number, error: number, recipe: Recipe): BlankKey => {
+const distanceReason = (parallax: number, error: number): BlankKey => {
   if (Number.isNaN(parallax)) return "needs-parallax";
-  if (parallax - recipe.parallaxZeroPointMas <= 0) return "parallax-not-positive";
-  if (Number.isNaN(error)) return "needs-parallax-error";
-  return "parallax-too-uncertain";
+  if (parallax <= 0) return "parallax-not-positive";
+  return Number.isNaN(error) ? "needs-parallax-error" : "parallax-too-uncertain";
 };
 
-const readSpectrum = (star: Scratch, given: Columns, i: number): void => {
-  const logg = read(given, "logg", i);
-  const feh = read(given, "feh", i);
+const readSpectrum = (star: Scratch, given: Inputs): void => {
+  const logg = at(given.logg, star.row);
+  const feh = at(given.feh, star.row);
   star.hasLogg = !Number.isNaN(logg);
   star.hasFeh = !Number.isNaN(feh);
   star.logg = star.hasLogg ? logg : ASSUMED.logg;
-  star.loggError = star.hasLogg ? read(given, "logg_err", i) : ASSUMED.loggError;
+  star.loggError = star.hasLogg ? errorAt(given.loggError, star.row) : ASSUMED.loggError;
   star.feh = star.hasFeh ? feh : ASSUMED.feh;
-  star.fehError = star.hasFeh ? read(given, "feh_err", i) : ASSUMED.fehError;
+  star.fehError = star.hasFeh ? errorAt(given.fehError, star.row) : ASSUMED.fehError;
   star.isAssumed = false;
 };
 
-const readColour = (star: Scratch, given: Columns, i: number): void => {
-  star.bpRp = read(given, "bp_mag", i) - read(given, "rp_mag", i);
-  star.bpRpError = Math.hypot(read(given, "bp_mag_err", i), read(given, "rp_mag_err", i));
+const readColour = (star: Scratch, given: Inputs): void => {
+  const bp = at(given.bp, star.row);
+  const rp = at(given.rp, star.row);
+  const bpError = errorAt(given.bpError, star.row);
+  const rpError = errorAt(given.rpError, star.row);
+  star.bpRp = bp - rp;
+  star.bpRpError = Math.sqrt(bpError * bpError + rpError * rpError);
+  star.isColourSafe = bp >= SUNLIKE_BRIGHTEST_MAG && rp >= SUNLIKE_BRIGHTEST_MAG;
 };
 
-/** A dwarf is ruled out by a low gravity or by its place above the main sequence; without either it cannot be told. */
-const isNotDwarf = (star: Scratch): boolean =>
-  (star.hasLogg && star.logg < DWARF_LEAST_LOGG) ||
-  star.absG < mainSequenceAbsG(star.bpRp) - DWARF_BRIGHTNESS_MARGIN;
+const writeDistance = (star: Scratch, given: Inputs, recipe: Recipe, out: Slots): void => {
+  const parallax = at(given.parallax, star.row);
+  const error = errorAt(given.parallaxError, star.row);
+  const zeroPoint = recipe.parallaxZeroPointMas;
+  star.distance = distanceFromParallax(parallax, error, recipe.parallaxFractionLimit, zeroPoint);
+  star.distanceError = error / (parallax - zeroPoint);
+  if (Number.isNaN(star.distance)) out.distance.blank(star.row, distanceReason(parallax - zeroPoint, error));
+  else out.distance.value(star.row, star.distance, star.distance * star.distanceError);
+};
 
 /** Distance and absolute magnitudes, and whether the star can be a dwarf. */
-export const deriveDistance = (
-  star: Scratch,
-  given: Columns,
-  i: number,
-  recipe: Recipe,
-  writer: Writer,
-): void => {
-  readSpectrum(star, given, i);
-  readColour(star, given, i);
-  const parallax = read(given, "parallax", i);
-  const parallaxError = read(given, "parallax_err", i);
-  star.distance = distanceFromParallax(
-    parallax,
-    parallaxError,
-    recipe.parallaxFractionLimit,
-    recipe.parallaxZeroPointMas,
-  );
-  star.distanceError = parallaxError / (parallax - recipe.parallaxZeroPointMas);
-  if (Number.isNaN(star.distance)) writer.blank("distance", distanceReason(parallax, parallaxError, recipe));
-  else writer.value("distance", star.distance, star.distance * star.distanceError);
-
-  const ks = read(given, "ks_mag", i);
+export const deriveDistance = (star: Scratch, given: Inputs, recipe: Recipe, out: Slots): void => {
+  readSpectrum(star, given);
+  readColour(star, given);
+  writeDistance(star, given, recipe, out);
+  const ks = at(given.ks, star.row);
+  star.ksError = errorAt(given.ksError, star.row);
   star.absKs = absoluteMagnitude(ks, star.distance, 0);
-  star.absKsError = absoluteMagnitudeError(read(given, "ks_mag_err", i), star.distanceError);
-  if (Number.isNaN(ks)) writer.blank("abs_ks", "needs-ks");
-  else if (Number.isNaN(star.distance)) writer.blank("abs_ks", "needs-distance");
-  else writer.value("abs_ks", star.absKs, star.absKsError);
-
-  star.absG = absoluteMagnitude(read(given, "g_mag", i), star.distance, 0);
-  star.absGError = absoluteMagnitudeError(read(given, "g_mag_err", i), star.distanceError);
-  star.isNotDwarf = isNotDwarf(star);
+  if (Number.isNaN(ks)) out.abs_ks.blank(star.row, "needs-ks");
+  else if (Number.isNaN(star.distance)) out.abs_ks.blank(star.row, "needs-distance");
+  else out.abs_ks.value(star.row, star.absKs, absoluteMagnitudeError(star.ksError, star.distanceError));
+  star.gError = errorAt(given.gError, star.row);
+  star.absG = absoluteMagnitude(at(given.g, star.row), star.distance, 0);
+  judgeDwarf(star);
 };

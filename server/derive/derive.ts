@@ -1,19 +1,22 @@
 import { countWarnings, flagBit } from "#shared/catalogue/flags.ts";
 import type { Recipe } from "#shared/science/recipes.ts";
-import { deriveLuminosity, deriveMass, deriveRadius } from "./body.ts";
 import { deriveDistance } from "./brightness.ts";
 import { deriveHabitability } from "./habitability.ts";
+import { at, bindInputs, type Inputs } from "./inputs.ts";
+import { deriveLuminosity } from "./luminosity.ts";
+import { deriveDensity, deriveMass } from "./mass.ts";
+import { deriveRadius } from "./radius.ts";
 import { newScratch, type Scratch } from "./scratch.ts";
+import { slotsOf } from "./slots.ts";
 import { allocateStellar, type Columns, type StellarColumns } from "./star-columns.ts";
 import { deriveTemperature } from "./temperature.ts";
-import { Writer } from "./writer.ts";
 
 const LEAST_CLEAN_LIGHT_SHARE = 0.98;
 
-const flagsOf = (star: Scratch, given: Columns, i: number, recipe: Recipe): number => {
+const flagsOf = (star: Scratch, given: Inputs, recipe: Recipe): number => {
   let bits = 0;
-  if ((given.ruwe?.[i] ?? Number.NaN) > recipe.ruweLimit) bits |= flagBit("maybe-two-stars");
-  if ((given.light_share?.[i] ?? Number.NaN) < LEAST_CLEAN_LIGHT_SHARE) bits |= flagBit("shared-light");
+  if (at(given.ruwe, star.row) > recipe.ruweLimit) bits |= flagBit("maybe-two-stars");
+  if (at(given.lightShare, star.row) < LEAST_CLEAN_LIGHT_SHARE) bits |= flagBit("shared-light");
   if (star.isNotDwarf) bits |= flagBit("not-dwarf-like");
   if (star.isAssumed) bits |= flagBit("assumed");
   return bits;
@@ -27,19 +30,29 @@ const flagsOf = (star: Scratch, given: Columns, i: number, recipe: Recipe): numb
  */
 export const deriveColumns = (given: Columns, length: number, recipe: Recipe): StellarColumns => {
   const columns = allocateStellar(length);
-  const writer = new Writer(columns);
+  const inputs = bindInputs(given, length);
+  const out = slotsOf(columns);
   const star = newScratch();
   for (let i = 0; i < length; i++) {
-    writer.moveTo(i);
-    deriveDistance(star, given, i, recipe, writer);
-    deriveTemperature(star, given, i, recipe, writer);
-    deriveRadius(star, recipe, writer);
-    deriveLuminosity(star, recipe, writer);
-    deriveMass(star, recipe, writer);
-    deriveHabitability(star, recipe, writer);
-    const bits = flagsOf(star, given, i, recipe);
+    star.row = i;
+    deriveDistance(star, inputs, recipe, out);
+    deriveTemperature(star, inputs, recipe, out);
+    deriveRadius(star, recipe, out);
+    deriveLuminosity(star, recipe, out);
+    deriveMass(star, recipe, out);
+    deriveDensity(star, out);
+    deriveHabitability(star, recipe, out);
+    const bits = flagsOf(star, inputs, recipe);
     columns.flagBits[i] = bits;
     columns.flags[i] = countWarnings(bits);
   }
   return columns;
 };
+
+/** One star by the same code: given values by key, NaN or absent where not given. */
+export const deriveStar = (given: Readonly<Record<string, number>>, recipe: Recipe): StellarColumns =>
+  deriveColumns(
+    Object.fromEntries(Object.entries(given).map(([key, value]) => [key, Float64Array.of(value)])),
+    1,
+    recipe,
+  );

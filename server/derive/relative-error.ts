@@ -5,16 +5,21 @@
  * reads as "no error given".
  */
 export const SOURCE = {
-  magnitude: 0,
-  temperature: 1,
-  radius: 2,
-  mass: 3,
-  light: 4,
+  parallax: 0,
+  ks: 1,
+  g: 2,
+  colour: 3,
+  /** A given temperature, or the scatter of the relation that gave it. */
+  temperature: 4,
   gravity: 5,
   iron: 6,
+  /** Scatter of the relations that gave radius, mass and luminosity. */
+  radius: 7,
+  mass: 8,
+  light: 9,
 } as const;
 
-const SOURCES = 7;
+const SOURCES = 10;
 
 export type ErrorVector = Float64Array;
 
@@ -22,12 +27,37 @@ export const errorVector = (): ErrorVector => new Float64Array(SOURCES);
 
 /** Sets `target` to `p × a + q × b`: the vector of aᵖ bᑫ. */
 export const combine = (target: ErrorVector, p: number, a: ErrorVector, q: number, b: ErrorVector): void => {
-  for (let i = 0; i < SOURCES; i++) target[i] = p * (a[i] ?? 0) + q * (b[i] ?? 0);
+  for (let i = 0; i < SOURCES; i++) target[i] = p * (a[i] as number) + q * (b[i] as number);
+};
+
+/** Adds `factor × a` to `target`. */
+export const addScaled = (target: ErrorVector, factor: number, a: ErrorVector): void => {
+  for (let i = 0; i < SOURCES; i++) target[i] = (target[i] as number) + factor * (a[i] as number);
+};
+
+/** Sets `target` to `factor × a`. */
+export const scale = (target: ErrorVector, factor: number, a: ErrorVector): void => {
+  for (let i = 0; i < SOURCES; i++) target[i] = factor * (a[i] as number);
 };
 
 /** Length of the vector: the relative error. */
 export const relativeError = (vector: ErrorVector): number => {
   let sum = 0;
-  for (let i = 0; i < SOURCES; i++) sum += (vector[i] ?? 0) ** 2;
+  for (let i = 0; i < SOURCES; i++) sum += (vector[i] as number) * (vector[i] as number);
   return Math.sqrt(sum);
+};
+
+/** Change of an absolute magnitude per relative change of the parallax, mag. */
+export const PER_PARALLAX = 5 / Math.LN10;
+
+/** Sets `target` to the vector of a quantity that changes by `slope` (relative) per magnitude of M_Ks. */
+export const setKsErrors = (
+  target: ErrorVector,
+  slope: number,
+  parallaxError: number,
+  ksError: number,
+): void => {
+  target.fill(0);
+  target[SOURCE.parallax] = slope * PER_PARALLAX * parallaxError;
+  target[SOURCE.ks] = slope * ksError;
 };

@@ -10,10 +10,30 @@ export const GIVEN_KEYS: readonly string[] = [
   "teff_given_err",
 ];
 
-/** The stellar quantities that have a value, an error and a blank reason: all but the count of flags. */
-export const STELLAR_KEYS: readonly string[] = columnsOf("stellar").flatMap((c) =>
-  c.key === "flags" ? [] : [c.key],
-);
+/**
+ * The stellar quantities that have a value, an error and a blank reason: the registry's but for the count of flags, by
+ * name, as each is computed by name.
+ */
+export const STELLAR_KEYS = [
+  "teff",
+  "distance",
+  "abs_ks",
+  "radius",
+  "mass",
+  "luminosity",
+  "density",
+  "hz_inner",
+  "hz_outer",
+  "hz_inner_period",
+  "hz_outer_period",
+  "earth_distance",
+  "earth_period",
+  "transit_probability",
+  "transit_duration",
+  "earth_depth",
+] as const;
+
+export type StellarKey = (typeof STELLAR_KEYS)[number];
 
 /** Columns of one length by key. */
 export type Columns = Record<string, Float64Array>;

@@ -35,4 +35,4 @@ export const absoluteMagnitude = (magnitude: number, distancePc: number, extinct
  * `σ² = σ_m² + (5 s_d / ln 10)²`.
  */
 export const absoluteMagnitudeError = (magnitudeError: number, relativeDistanceError: number): number =>
-  Math.hypot(magnitudeError, (5 * relativeDistanceError) / Math.LN10);
+  Math.sqrt(magnitudeError ** 2 + ((5 * relativeDistanceError) / Math.LN10) ** 2);
