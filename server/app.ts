@@ -2,6 +2,7 @@ import express, { type Express, Router } from "express";
 import { signedInPerson } from "./auth/passport.ts";
 import { addAuthRoutes } from "./auth/routes.ts";
 import type { Deps } from "./deps.ts";
+import { addHandoverRoutes } from "./handover/routes.ts";
 import { clientFiles } from "./http/client-files.ts";
 import { csrfProtection } from "./http/csrf.ts";
 import { errorHandler, noSuchRoute } from "./http/error-handler.ts";
@@ -13,11 +14,15 @@ import { securityHeaders } from "./http/security-headers.ts";
 import { sessions } from "./http/session.ts";
 import { addInstrumentRoutes } from "./instruments/routes.ts";
 import { addJobRoutes } from "./jobs/routes.ts";
+import { addListRoutes } from "./lists/routes.ts";
 import { addLogbookRoutes } from "./logbook/routes.ts";
 import { addMailRoutes } from "./mail/routes.ts";
+import { addMeritRoutes } from "./merit/routes.ts";
 import { addInterfaceRoutes } from "./openapi.ts";
 import { addPeopleRoutes } from "./people/routes.ts";
 import { addProgrammeRoutes } from "./programmes/routes.ts";
+import { addSelectionRoutes } from "./selections/routes.ts";
+import { addStarRoutes } from "./stars/routes.ts";
 
 /** Every subject's routes; a subject that is not listed here does not exist for callers. */
 const SUBJECTS: readonly ((routes: Routes) => void)[] = [
@@ -30,6 +35,11 @@ const SUBJECTS: readonly ((routes: Routes) => void)[] = [
   addInterfaceRoutes,
   addJobRoutes,
   addInstrumentRoutes,
+  addHandoverRoutes,
+  addListRoutes,
+  addSelectionRoutes,
+  addMeritRoutes,
+  addStarRoutes,
 ];
 
 const api = (deps: Deps): { router: Router; routes: DefinedRoute[] } => {

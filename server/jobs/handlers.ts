@@ -1,10 +1,17 @@
+import { recompute } from "../catalogue/recompute.ts";
+import { afterImport, importExtract, withdraw } from "../extracts/import.ts";
 import { sendMail } from "../mail/send.ts";
+import { buildScanIndexJob } from "../scan/job.ts";
 import type { Aftermath, Handler, JobKind } from "./job-run.ts";
 
 /** Who does each kind of job. */
-export const HANDLERS: Partial<Record<JobKind, Handler>> = {
+export const HANDLERS: Record<JobKind, Handler> = {
+  "import-extract": importExtract,
+  "withdraw-extract": withdraw,
+  recompute,
+  "build-scan-index": buildScanIndexJob,
   "send-mail": sendMail,
 };
 
 /** What to put right when a job of that kind will not be done. */
-export const AFTERMATHS: Partial<Record<JobKind, Aftermath>> = {};
+export const AFTERMATHS: Partial<Record<JobKind, Aftermath>> = { "import-extract": afterImport };

@@ -130,23 +130,29 @@ export class OpenView {
     return Array.from(window, String);
   }
 
-  /** Place of a star from 1; null where the cuts drop it. */
-  async placeOf(starId: string): Promise<number | null> {
+  /** Places from 1 of those stars that pass the cuts. */
+  async placesOf(starIds: readonly string[]): Promise<Map<string, number>> {
     const count = await this.count();
-    if (count <= MOST_ORDERED) {
-      const place = (await this.order(count)).indexOf(BigInt(starId));
-      return place < 0 ? null : place + 1;
-    }
-    return this.ask(async (c) => {
-      const { source, where, order, values } = this.parts();
-      const result = await c.runAndReadAll(
-        `SELECT place::DOUBLE FROM (SELECT star_id, row_number() OVER (ORDER BY ${order}) AS place
-           FROM ${source} WHERE ${where}) WHERE star_id = ${BigInt(starId)}`,
-        values,
-      );
-      const [row] = result.getRowsJS();
-      return row ? Number(row[0]) : null;
-    }, null);
+    if (starIds.length === 0 || count === 0) return new Map();
+    if (count > MOST_ORDERED) return this.ask((c) => this.rank(c, starIds), new Map());
+    const order = await this.order(count);
+    return new Map(
+      starIds.flatMap((id): [string, number][] => {
+        const index = order.indexOf(BigInt(id));
+        return index < 0 ? [] : [[id, index + 1]];
+      }),
+    );
+  }
+
+  private async rank(connection: DuckDBConnection, starIds: readonly string[]): Promise<Map<string, number>> {
+    const { source, where, order, values } = this.parts();
+    const result = await connection.runAndReadAll(
+      `SELECT star_id, place::DOUBLE FROM
+         (SELECT star_id, row_number() OVER (ORDER BY ${order}) AS place FROM ${source} WHERE ${where})
+       WHERE star_id IN (${starIds.map(BigInt).join(", ")})`,
+      values,
+    );
+    return new Map(result.getRowsJS().map(([id, place]) => [String(id), Number(place)]));
   }
 
   /** Which cuts, by their position, drop that star. */

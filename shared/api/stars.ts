@@ -6,6 +6,15 @@ import { id, timestamp } from "./common.ts";
  * Every star query carries a view as search parameters (see catalogue/view.ts): edition, card, campaign, merit,
  * cut (repeated), sort. `card`, `campaign`, `merit` are ids of VERSIONS.
  */
+const part = z.string().optional();
+export const viewQuery = z.object({
+  edition: part,
+  card: part,
+  campaign: part,
+  merit: part,
+  cut: z.union([z.string(), z.array(z.string())]).optional(),
+  sort: part,
+});
 export const windowQuery = z.object({
   offset: z.coerce.number().int().min(0).default(0),
   limit: z.coerce.number().int().min(1).max(LIMITS.windowRows).default(100),

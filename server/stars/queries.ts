@@ -1,0 +1,114 @@
+import type { EntityManager } from "typeorm";
+import { STORED_KEYS } from "#server/scan/index-columns.ts";
+import { blankKey, columnsOf } from "#shared/catalogue/columns.ts";
+import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.ts";
+import { METHOD_KEYS } from "../database/star-table.ts";
+
+/** A row of `star` by its SQL names. */
+export type StoredStar = Record<string, number | string | null> & {
+  star_id: string;
+  designation: string;
+  source_id: string | null;
+  release: string | null;
+  from_edition: number;
+  flags_bits: number;
+};
+
+export interface Scope {
+  programmeId: string;
+  edition: number;
+}
+
+const IN_EDITION = "programme_id = ? AND from_edition <= ? AND (to_edition IS NULL OR to_edition > ?)";
+const scopeValues = ({ programmeId, edition }: Scope): unknown[] => [programmeId, edition, edition];
+
+const BLANK_KEYS = columnsOf("stellar").flatMap((c) => (c.key === "flags" ? [] : [blankKey(c.key)]));
+const ROW_COLUMNS = [
+  "star_id",
+  "designation",
+  "source_id",
+  "release",
+  "from_edition",
+  "flags_bits",
+  ...STORED_KEYS,
+  ...BLANK_KEYS,
+  ...METHOD_KEYS.map((key) => `${key}_method`),
+]
+  .map((name) => `\`${name}\``)
+  .join(", ");
+
+/** As digits and not as quoted text: comparing a text with a 64-bit number goes through a double. */
+const idList = (ids: readonly string[]): string => ids.map(BigInt).join(", ");
+
+/** Rows of those stars as the edition knows them, in no order. */
+export const findStars = (
+  manager: EntityManager,
+  scope: Scope,
+  ids: readonly string[],
+): Promise<StoredStar[]> =>
+  ids.length === 0
+    ? Promise.resolve([])
+    : manager.query(
+        `SELECT ${ROW_COLUMNS} FROM star WHERE ${IN_EDITION} AND star_id IN (${idList(ids)})`,
+        scopeValues(scope),
+      );
+
+export type StoredEntry = Record<string, number | string | null> & {
+  extract_id: string;
+  extract_number: number;
+  extract_name: string;
+  row_number: number;
+  designation: string | null;
+  source_id: string | null;
+  release: string | null;
+};
+
+/** What the extracts in force say of a star. */
+export const findEntries = (
+  manager: EntityManager,
+  programmeId: string,
+  starId: string,
+): Promise<StoredEntry[]> =>
+  manager.query(
+    `SELECT e.*, x.number AS extract_number, x.name AS extract_name
+     FROM entry e JOIN extract x ON x.extract_id = e.extract_id
+     WHERE e.programme_id = ? AND e.star_id = ${BigInt(starId)} AND x.state = 'committed'
+     ORDER BY x.number, e.row_number LIMIT 50`,
+    [programmeId],
+  );
+
+const likePrefix = (text: string): string => `${text.replaceAll(/[\\%_]/g, "\\$&")}%`;
+
+/**
+ * Ids of stars whose designation or identifier begins so, in the catalogue's spelling or in that of any extract in
+ * force. Exact spellings come first.
+ */
+export const findBySpelling = async (
+  manager: EntityManager,
+  scope: Scope,
+  text: string,
+  most: number,
+): Promise<string[]> => {
+  const prefix = likePrefix(text);
+  const parts = ["designation", "source_id"].flatMap((column) => [
+    `(SELECT star_id, \`${column}\` AS spelling FROM star
+      WHERE ${IN_EDITION} AND \`${column}\` LIKE ? ORDER BY \`${column}\` LIMIT ${most})`,
+    `(SELECT e.star_id, e.\`${column}\` AS spelling FROM entry e JOIN extract x ON x.extract_id = e.extract_id
+      WHERE e.programme_id = ? AND e.\`${column}\` LIKE ? AND e.star_id IS NOT NULL AND x.state = 'committed'
+      ORDER BY e.\`${column}\` LIMIT ${most})`,
+  ]);
+  const values = [...scopeValues(scope), prefix, scope.programmeId, prefix];
+  const rows = await manager.query<{ star_id: string }[]>(
+    `SELECT star_id, MAX(spelling = ?) AS is_exact, MIN(spelling) AS spelling FROM (${parts.join(" UNION ALL ")}) found
+     GROUP BY star_id ORDER BY is_exact DESC, spelling, star_id LIMIT ${most}`,
+    [text, ...values, ...values],
+  );
+  return rows.map((row) => String(row.star_id));
+};
+
+export const editionMadeAt = async (
+  manager: EntityManager,
+  programmeId: string,
+  number: number,
+): Promise<Date | null> =>
+  (await manager.findOneBy(CatalogueEdition, { programmeId, number }))?.madeAt ?? null;
