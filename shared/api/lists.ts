@@ -14,7 +14,6 @@ export const targetList = z.object({
   catalogueEdition: z.int(),
   /** The view it was made from, as search parameters; opens the workbench on it. */
   viewParams: z.string(),
-  selectionName: z.string().nullable(),
   merit: z
     .object({ versionId: id, name: z.string(), number: z.int(), terms: z.array(z.string()) })
     .nullable(),

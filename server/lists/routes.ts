@@ -1,0 +1,109 @@
+import { z } from "zod";
+import {
+  listCreateBody,
+  listMember,
+  listPatchBody,
+  listStateBody,
+  memberPatchBody,
+  targetList,
+} from "#shared/api/lists.ts";
+import { windowQuery } from "#shared/api/stars.ts";
+import type { Routes } from "../http/route.ts";
+import { makeList } from "./make.ts";
+import {
+  changeList,
+  changeMember,
+  deleteList,
+  listLists,
+  moveList,
+  readList,
+  readMembers,
+} from "./service.ts";
+
+const ALL = "/programmes/:programmeId/lists";
+const ONE = `${ALL}/:listId`;
+const oneList = z.object({ list: targetList });
+
+const addMemberRoutes = (routes: Routes): void => {
+  routes.add(
+    {
+      method: "get",
+      path: `${ONE}/members`,
+      access: "list.read",
+      query: windowQuery,
+      answer: z.object({ members: z.array(listMember), count: z.int() }),
+    },
+    ({ deps, programmeId, params, query }) => readMembers(deps, programmeId, params.listId ?? "", query),
+  );
+  routes.add(
+    {
+      method: "patch",
+      path: `${ONE}/members/:starId`,
+      access: "list.edit",
+      body: memberPatchBody,
+      answer: z.object({ member: listMember, list: targetList }),
+    },
+    ({ deps, programmeId, caller, params, body }) =>
+      changeMember(
+        deps,
+        programmeId,
+        caller,
+        { listId: params.listId ?? "", starId: params.starId ?? "" },
+        body,
+      ),
+  );
+};
+
+export const addListRoutes = (routes: Routes): void => {
+  routes.add(
+    { method: "get", path: ALL, access: "list.read", answer: z.object({ lists: z.array(targetList) }) },
+    async ({ deps, programmeId }) => ({
+      lists: await listLists(deps, programmeId),
+    }),
+  );
+  routes.add(
+    {
+      method: "post",
+      path: ALL,
+      access: "list.make",
+      body: listCreateBody,
+      status: 201,
+      answer: z.object({ list: targetList, note: z.string().nullable() }),
+    },
+    async ({ deps, programmeId, caller, body }) => {
+      const { listId, note } = await makeList(deps, programmeId, caller, body);
+      return { list: await readList(deps, programmeId, listId), note };
+    },
+  );
+  routes.add(
+    { method: "get", path: ONE, access: "list.read", answer: oneList },
+    async ({ deps, programmeId, params }) => ({
+      list: await readList(deps, programmeId, params.listId ?? ""),
+    }),
+  );
+  routes.add(
+    { method: "patch", path: ONE, access: "list.edit", body: listPatchBody, answer: oneList },
+    async ({ deps, programmeId, caller, params, body }) => ({
+      list: await changeList(deps, programmeId, caller, params.listId ?? "", body),
+    }),
+  );
+  routes.add(
+    { method: "delete", path: ONE, access: "list.make" },
+    async ({ deps, programmeId, caller, params }) => {
+      await deleteList(deps, programmeId, caller, params.listId ?? "");
+    },
+  );
+  routes.add(
+    {
+      method: "post",
+      path: `${ONE}/state`,
+      access: "list.send-to-review",
+      body: listStateBody,
+      answer: oneList,
+    },
+    async ({ deps, programmeId, caller, params, body }) => ({
+      list: await moveList(deps, programmeId, caller, params.listId ?? "", body),
+    }),
+  );
+  addMemberRoutes(routes);
+};
