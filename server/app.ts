@@ -1,7 +1,9 @@
 import express, { type Express, Router } from "express";
 import { signedInPerson } from "./auth/passport.ts";
 import { addAuthRoutes } from "./auth/routes.ts";
+import { addCatalogueRoutes } from "./catalogue/routes.ts";
 import type { Deps } from "./deps.ts";
+import { addExtractRoutes } from "./extracts/routes.ts";
 import { addHandoverRoutes } from "./handover/routes.ts";
 import { clientFiles } from "./http/client-files.ts";
 import { csrfProtection } from "./http/csrf.ts";
@@ -34,6 +36,8 @@ const SUBJECTS: readonly ((routes: Routes) => void)[] = [
   addMailRoutes,
   addInterfaceRoutes,
   addJobRoutes,
+  addExtractRoutes,
+  addCatalogueRoutes,
   addInstrumentRoutes,
   addHandoverRoutes,
   addListRoutes,

@@ -123,9 +123,7 @@ const attempt = async (deps: Deps, claimed: Claim, stopping?: AbortSignal): Prom
   if (job.cancelRequested) controller.abort(new JobCancelled());
   const letGo = keepLease(deps, job, owner, controller);
   try {
-    const handle = HANDLERS[job.kind as JobKind];
-    if (!handle) throw new Error(`No one does jobs of kind ${job.kind}.`);
-    await handle(startRun(deps, claimed, controller));
+    await HANDLERS[job.kind as JobKind](startRun(deps, claimed, controller));
     await inTransaction(deps.db, async (tx) => {
       if (await isLeaseHeld(tx, job.id, owner)) await endJob(tx, job.id, "done", null);
     });

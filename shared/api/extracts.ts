@@ -18,6 +18,8 @@ export const columnCard = z.object({
   unit: z.string(),
   /** Texts that stand for "no value" in this column, besides the empty cell. */
   blankMarks: z.array(z.string()),
+  /** Suspected marks of which the curator says that they are numbers. */
+  keptNumbers: z.array(z.string()).optional(),
 });
 export type ColumnCard = z.infer<typeof columnCard>;
 
@@ -34,6 +36,12 @@ export const readingPlan = z.object({
   raUnit: z.enum(["deg", "hour"]).nullable(),
 });
 export type ReadingPlan = z.infer<typeof readingPlan>;
+
+/**
+ * How a plan answers an Ask, by its code: `epoch-missing` → `epoch` (or a column that gives it); `ra-unit` → `raUnit`;
+ * `blank-mark` (column and answers `blank:<text>` or `number:<text>`) → that text in the card's `blankMarks` or
+ * `keptNumbers`; `unit-unknown` → the card's `unit`.
+ */
 
 /** What the server suggests for a column, and why. */
 export const columnSuggestion = columnCard.extend({

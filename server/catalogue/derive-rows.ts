@@ -1,0 +1,38 @@
+import type { Recipe } from "#shared/science/recipes.ts";
+import type { Value } from "../database/bulk.ts";
+import { stellarColumns } from "../database/star-table.ts";
+import { deriveColumns } from "../derive/derive.ts";
+import { allocateGiven, GIVEN_KEYS, type StellarColumns } from "../derive/star-columns.ts";
+import { GIVEN } from "./adopt.ts";
+
+const STELLAR: readonly string[] = Object.keys(stellarColumns());
+
+/** Columns of a star's row after its keys. */
+export const STAR_VALUES: readonly string[] = [...GIVEN, ...STELLAR];
+
+const arrayOf = (derived: StellarColumns, key: string): ArrayLike<number> => {
+  if (key === "flags_bits") return derived.flagBits;
+  if (key === "flags") return derived.flags;
+  const found = derived.values[key] ?? derived.blanks[key] ?? derived.methods[key];
+  if (!found) throw new Error(`Nothing derives the column ${key}.`);
+  return found;
+};
+
+/** Whole rows of values, in the order of `STAR_VALUES`, from adopted ones. */
+export const deriveRows = (adopted: readonly Value[][], recipe: Recipe): Value[][] => {
+  const given = allocateGiven(adopted.length);
+  for (const key of GIVEN_KEYS) {
+    const at = GIVEN.indexOf(key);
+    const column = given[key];
+    if (column) for (let i = 0; i < adopted.length; i++) column[i] = Number(adopted[i]?.[at] ?? Number.NaN);
+  }
+  const derived = deriveColumns(given, adopted.length, recipe);
+  const columns = STELLAR.map((key) => arrayOf(derived, key));
+  return adopted.map((row, i) => [
+    ...row,
+    ...columns.map((column) => {
+      const value = column[i] ?? Number.NaN;
+      return Number.isNaN(value) ? null : value;
+    }),
+  ]);
+};

@@ -1,0 +1,173 @@
+import type { EntityManager } from "typeorm";
+import { findRecipe } from "#shared/science/recipes.ts";
+import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.ts";
+import { Programme } from "../database/entities/programme.entity.ts";
+import { inTransaction } from "../database/transaction.ts";
+import { conflict, notFound } from "../errors.ts";
+import { type JobRun, LeaseLost, WorkerStopping } from "../jobs/job-run.ts";
+import { writeLine } from "../logbook/service.ts";
+import { buildScanIndex } from "../scan/build.ts";
+import { removeInvisibleStars } from "./clean.ts";
+import { Fingerprint } from "./fingerprint.ts";
+import { instrumentPairs } from "./instrument-pairs.ts";
+import { type Basis, type Changes, prepareStars } from "./prepare.ts";
+
+export interface EditionPlan {
+  /** "extract 2, Northern motions" */
+  reason: string;
+  /** Key of the recipe; by default the programme's. */
+  recipe?: string;
+  withExtract?: string;
+  withoutExtract?: string;
+  /** Ids of the stars that may come out differently, in blocks of at most 10,000. */
+  stars: () => AsyncIterable<string[]>;
+  total: number;
+  /** What else happens in the transaction that puts the edition in force. */
+  commit: (tx: EntityManager, edition: number, changes: Changes) => Promise<void>;
+}
+
+const programmeOf = async (run: JobRun): Promise<Programme> => {
+  const programme = await run.deps.db.manager.findOneBy(Programme, { id: run.job.programmeId ?? "0" });
+  if (!programme) throw notFound("This programme");
+  return programme;
+};
+
+const prepareAll = async (
+  run: JobRun,
+  basis: Basis,
+  plan: EditionPlan,
+  fingerprint: Fingerprint,
+): Promise<Changes> => {
+  const changes: Changes = { added: 0, ended: 0 };
+  let done = 0;
+  await run.progress(0, plan.total, "Deriving", "stars");
+  for await (const ids of plan.stars()) {
+    const { added, ended } = await prepareStars(run, basis, ids, fingerprint);
+    changes.added += added;
+    changes.ended += ended;
+    done += ids.length;
+    await run.progress(done, plan.total, "Deriving", "stars");
+  }
+  return changes;
+};
+
+const buildIndices = async (
+  run: JobRun,
+  programmeId: string,
+  edition: number,
+  recipe: string,
+): Promise<void> => {
+  const base = { programmeId, edition, recipe, cardVersionId: null, campaignVersionId: null };
+  const pairs = await instrumentPairs(run.deps.db.manager, programmeId);
+  for (const key of [base, ...pairs.map((pair) => ({ ...base, ...pair }))])
+    await buildScanIndex(run.deps, key, (done, total) =>
+      run.progress(done, total, "Preparing the table", "stars"),
+    );
+};
+
+/** Puts the prepared edition in force: one small transaction, and nothing before it shows. */
+const putInForce = async (
+  run: JobRun,
+  plan: EditionPlan,
+  before: Programme,
+  values: { recipe: string; stars: number; fingerprint: string; changes: Changes },
+): Promise<void> => {
+  const { deps, job } = run;
+  const edition = before.edition + 1;
+  await inTransaction(deps.db, async (tx) => {
+    await run.holdLease(tx);
+    const result = await tx.query<{ affectedRows: number }>(
+      "UPDATE programme SET edition = ?, recipe = ? WHERE programme_id = ? AND edition = ?",
+      [edition, values.recipe, before.id, before.edition],
+    );
+    if (result.affectedRows !== 1)
+      throw conflict("edition-moved", "Another edition of the catalogue came into force meanwhile.", {
+        hint: "Begin it again.",
+      });
+    await tx.insert(CatalogueEdition, {
+      programmeId: before.id,
+      number: edition,
+      reason: plan.reason.slice(0, 200),
+      recipe: values.recipe,
+      stars: values.stars,
+      fingerprint: values.fingerprint,
+      madeAt: deps.now(),
+      madeBy: job.personId,
+    });
+    await plan.commit(tx, edition, values.changes);
+    const [person] = await tx.query<{ name: string }[]>("SELECT name FROM person WHERE person_id = ?", [
+      job.personId,
+    ]);
+    await writeLine(tx, {
+      programmeId: before.id,
+      person: job.personId !== null && person ? { id: job.personId, name: person.name } : null,
+      action: "catalogue.make-edition",
+      subject: { type: "catalogue", id: String(edition), name: `Edition ${edition}` },
+      after: {
+        reason: plan.reason,
+        stars: values.stars,
+        recipe: values.recipe,
+        fingerprint: values.fingerprint,
+      },
+      at: deps.now(),
+    });
+  });
+};
+
+/** Makes the next catalogue edition. Whatever stops it, the edition in force stays as it was. */
+export const makeEdition = async (run: JobRun, plan: EditionPlan): Promise<void> => {
+  const { deps } = run;
+  const programme = await programmeOf(run);
+  const recipeKey = plan.recipe ?? programme.recipe;
+  const basis: Basis = {
+    programmeId: programme.id,
+    edition: programme.edition,
+    recipe: findRecipe(recipeKey),
+    withExtract: plan.withExtract,
+    withoutExtract: plan.withoutExtract,
+  };
+  await removeInvisibleStars(deps.db, programme.id, programme.edition);
+  const last = await deps.db.manager.findOneBy(CatalogueEdition, {
+    programmeId: programme.id,
+    number: programme.edition,
+  });
+  const fingerprint = new Fingerprint(last?.fingerprint);
+  const changes = await prepareAll(run, basis, plan, fingerprint);
+  await buildIndices(run, programme.id, programme.edition + 1, recipeKey);
+  await run.progress(1, 1, "Finishing", "steps");
+  await putInForce(run, plan, programme, {
+    recipe: recipeKey,
+    stars: (last?.stars ?? 0) + changes.added - changes.ended,
+    fingerprint: fingerprint.toString(),
+    changes,
+  });
+};
+
+/**
+ * Runs work that prepares rows nobody sees yet, and removes them when it does not come to its end. A worker that
+ * stops, or lost its lease, leaves that to the next attempt.
+ */
+export const orCleanUp = async (
+  run: JobRun,
+  work: () => Promise<void>,
+  clean: () => Promise<void>,
+): Promise<void> => {
+  try {
+    await work();
+  } catch (error) {
+    const reason: unknown = run.signal.aborted ? run.signal.reason : error;
+    if (!(reason instanceof LeaseLost) && !(reason instanceof WorkerStopping))
+      await clean().catch((problem: unknown) =>
+        run.deps.log.warn("catalogue", "Prepared rows are left for the next attempt to remove", {
+          error: problem,
+        }),
+      );
+    throw error;
+  }
+};
+
+/** What `orCleanUp` removes of an edition that did not come into force. */
+export const removePrepared = async (run: JobRun): Promise<void> => {
+  const programme = await programmeOf(run);
+  await removeInvisibleStars(run.deps.db, programme.id, programme.edition);
+};
