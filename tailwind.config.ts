@@ -15,6 +15,7 @@ export default {
         faint: color("faint"),
         rule: color("rule"),
         hair: color("hair"),
+        edge: color("edge"),
         mark: color("mark"),
         "mark-soft": color("mark-soft"),
         blue: color("blue"),

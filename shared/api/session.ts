@@ -42,12 +42,12 @@ export type Session = z.infer<typeof session>;
 
 /** POST /api/session → 200 { session }. DELETE /api/session → 204. DELETE /api/sessions (everywhere) → 204. */
 export const signInBody = z.strictObject({
-  email: z.string().min(1).max(LIMITS.emailCharacters),
-  password: z.string().min(1).max(LIMITS.passwordCharacters.most),
+  email: z.string().min(1, "Type your e-mail address.").max(LIMITS.emailCharacters),
+  password: z.string().min(1, "Type your password.").max(LIMITS.passwordCharacters.most),
 });
 /** PUT /api/me/password → 204; other sessions end. */
 export const passwordChangeBody = z.strictObject({
-  current: z.string().min(1).max(LIMITS.passwordCharacters.most),
+  current: z.string().min(1, "Type the password you sign in with now.").max(LIMITS.passwordCharacters.most),
   next: password,
 });
 /** PATCH /api/me → { session } */

@@ -1,4 +1,5 @@
 import { type ErrorBody, errorBody } from "#shared/api/common.ts";
+import type { Session } from "#shared/api/session.ts";
 
 /** A refusal or failure of the server, or of the way to it, as screens show it. */
 export class ApiError extends Error {
@@ -26,10 +27,16 @@ const UNREACHABLE: ErrorBody["error"] = {
   hint: "What you see may be out of date. Check the connection and try again.",
 };
 
-/** Goes with every request that changes something; renewed with each session answer. */
-let csrfToken = "";
-export const setCsrfToken = (token: string): void => {
-  csrfToken = token;
+/** Of the session answered last: the token goes with every request that changes something. */
+let known: { csrfToken: string; personId: string | null } = { csrfToken: "", personId: null };
+export const keepSession = ({ csrfToken, person }: Session): void => {
+  known = { csrfToken, personId: person?.id ?? null };
+};
+
+let signedOut = (): void => undefined;
+/** Says what happens when the server no longer knows the person: the application leads to the sign-in page. */
+export const whenSignedOut = (leave: () => void): void => {
+  signedOut = leave;
 };
 
 export const readError = async (response: Response): Promise<ApiError> => {
@@ -48,15 +55,9 @@ export const readError = async (response: Response): Promise<ApiError> => {
 
 type Method = "GET" | "POST" | "PUT" | "PATCH" | "DELETE";
 
-/** Sends JSON and reads JSON; throws ApiError. The shape is the one the contract in shared/api states. */
-export const request = async <T>(
-  method: Method,
-  path: string,
-  body?: unknown,
-  signal?: AbortSignal,
-): Promise<T> => {
+const once = async <T>(method: Method, path: string, body?: unknown, signal?: AbortSignal): Promise<T> => {
   const headers: Record<string, string> = { Accept: "application/json" };
-  if (method !== "GET") headers["X-CSRF-Token"] = csrfToken;
+  if (method !== "GET") headers["X-CSRF-Token"] = known.csrfToken;
   if (body !== undefined) headers["Content-Type"] = "application/json";
   const response = await fetch(`/api${path}`, {
     method,
@@ -72,6 +73,37 @@ export const request = async <T>(
   return (response.status === 204 ? undefined : await response.json()) as T;
 };
 
+const isOfSession = (error: unknown): error is ApiError =>
+  error instanceof ApiError && (error.code === "stale-page" || error.code === "signed-out");
+
+/**
+ * Reads the session anew, and answers whether the same request may be sent again: as a visitor's, or as the same
+ * person's. Another person may have signed in meanwhile in this browser; nothing is done in their name.
+ */
+const isStillTheirs = async (): Promise<boolean> => {
+  const before = known.personId;
+  const { session } = await once<{ session: Session }>("GET", "/session");
+  keepSession(session);
+  return before === null || session.person?.id === before;
+};
+
+/** Tries once more where only the session's token was old. */
+const withSession = async <T>(attempt: () => Promise<T>): Promise<T> => {
+  try {
+    return await attempt().catch(async (error: unknown) => {
+      if (isOfSession(error) && (await isStillTheirs())) return attempt();
+      throw error;
+    });
+  } catch (error) {
+    if (error instanceof ApiError && error.code === "signed-out") signedOut();
+    throw error;
+  }
+};
+
+/** Sends JSON and reads JSON; throws ApiError. The shape is the one the contract in shared/api states. */
+export const request = <T>(method: Method, path: string, body?: unknown, signal?: AbortSignal): Promise<T> =>
+  withSession(() => once<T>(method, path, body, signal));
+
 export const get = <T>(path: string, signal?: AbortSignal): Promise<T> =>
   request<T>("GET", path, undefined, signal);
 
@@ -81,12 +113,19 @@ export const sendFile = <T>(
   file: Blob,
   onProgress: (sent: number) => void,
   signal: AbortSignal,
+): Promise<T> => withSession(() => sendFileOnce<T>(path, file, onProgress, signal));
+
+const sendFileOnce = <T>(
+  path: string,
+  file: Blob,
+  onProgress: (sent: number) => void,
+  signal: AbortSignal,
 ): Promise<T> =>
   new Promise((resolve, reject) => {
     const upload = new XMLHttpRequest();
     upload.open("PUT", `/api${path}`);
     upload.setRequestHeader("Content-Type", "application/octet-stream");
-    upload.setRequestHeader("X-CSRF-Token", csrfToken);
+    upload.setRequestHeader("X-CSRF-Token", known.csrfToken);
     upload.upload.onprogress = (event) => onProgress(event.loaded);
     upload.onerror = () => reject(new ApiError(0, UNREACHABLE));
     upload.onabort = () => reject(new DOMException("The upload was cancelled.", "AbortError"));

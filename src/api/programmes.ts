@@ -1,4 +1,10 @@
-import { infiniteQueryOptions, queryOptions, useMutation, useQueryClient } from "@tanstack/react-query";
+import {
+  infiniteQueryOptions,
+  type QueryClient,
+  queryOptions,
+  useMutation,
+  useQueryClient,
+} from "@tanstack/react-query";
 import type { Job } from "#shared/api/jobs.ts";
 import type { Invitation, LogbookLine, Member, Programme } from "#shared/api/programmes.ts";
 import type { Role } from "#shared/policy/roles.ts";
@@ -10,6 +16,12 @@ export const programmeKeys = {
   all: (programmeId: string) => ["programme", programmeId] as const,
   part: (programmeId: string, ...part: unknown[]) => ["programme", programmeId, ...part] as const,
 };
+
+/** The programmes the person is a member of. */
+export const programmesOptions = queryOptions({
+  queryKey: ["programmes"],
+  queryFn: async () => (await get<{ programmes: Programme[] }>("/programmes")).programmes,
+});
 
 const base = (programmeId: string): string => `/programmes/${programmeId}`;
 
@@ -52,16 +64,34 @@ export const useProgrammeChange = <V, R>(programmeId: string, send: (input: V) =
   });
 };
 
+/** The session carries the names of one's programmes and the roles in them. */
+const refreshOwn = async (client: QueryClient): Promise<void> => {
+  await client.invalidateQueries({ queryKey: programmesOptions.queryKey });
+  await client.invalidateQueries({ queryKey: sessionOptions.queryKey });
+};
+
+/** A change that may touch what the person at hand may do, or what the programme is called. */
+const useOwnChange = <V, R>(programmeId: string, send: (input: V) => Promise<R>) => {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: send,
+    onSuccess: async () => {
+      await refreshOwn(client);
+      await client.invalidateQueries({ queryKey: programmeKeys.all(programmeId) });
+    },
+  });
+};
+
 export const useCreateProgramme = () => {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (body: { name: string; description: string }) =>
       request<{ programme: Programme }>("POST", "/programmes", body),
-    onSuccess: () => client.invalidateQueries({ queryKey: sessionOptions.queryKey }),
+    onSuccess: () => refreshOwn(client),
   });
 };
 export const useEditProgramme = (programmeId: string) =>
-  useProgrammeChange(programmeId, (body: { name?: string; description?: string; version: number }) =>
+  useOwnChange(programmeId, (body: { name?: string; description?: string; version: number }) =>
     request<{ programme: Programme }>("PATCH", base(programmeId), body),
   );
 export const useChooseRecipe = (programmeId: string) =>
@@ -69,7 +99,7 @@ export const useChooseRecipe = (programmeId: string) =>
     request<{ job: Job }>("PUT", `${base(programmeId)}/recipe`, { recipe }),
   );
 export const useSetRoles = (programmeId: string) =>
-  useProgrammeChange(programmeId, ({ personId, roles }: { personId: string; roles: Role[] }) =>
+  useOwnChange(programmeId, ({ personId, roles }: { personId: string; roles: Role[] }) =>
     request("PATCH", `${base(programmeId)}/members/${personId}`, { roles }),
   );
 export const useRemoveMember = (programmeId: string) =>
@@ -78,9 +108,22 @@ export const useRemoveMember = (programmeId: string) =>
   );
 export const useInvite = (programmeId: string) =>
   useProgrammeChange(programmeId, (body: { email: string; roles: Role[] }) =>
-    request("POST", `${base(programmeId)}/invitations`, body),
+    request<{ invitation: Invitation }>("POST", `${base(programmeId)}/invitations`, body),
   );
 export const useWithdrawInvitation = (programmeId: string) =>
   useProgrammeChange(programmeId, (id: string) =>
     request("DELETE", `${base(programmeId)}/invitations/${id}`),
   );
+
+/** Leaves the programme; `away` brings the person elsewhere before its data is forgotten. */
+export const useLeaveProgramme = (programmeId: string, away: () => Promise<void> | void) => {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (_: undefined) => request<void>("DELETE", `${base(programmeId)}/members/me`),
+    onSuccess: async () => {
+      await away();
+      await refreshOwn(client);
+      client.removeQueries({ queryKey: programmeKeys.all(programmeId) });
+    },
+  });
+};

@@ -1,9 +1,10 @@
 import { queryOptions, useMutation, useQueryClient, useSuspenseQuery } from "@tanstack/react-query";
 import type { Link, Mail, Session } from "#shared/api/session.ts";
-import { get, request, setCsrfToken } from "./client.ts";
+import { paths } from "#src/app/paths.ts";
+import { get, keepSession, request } from "./client.ts";
 
 const adopt = ({ session }: { session: Session }): Session => {
-  setCsrfToken(session.csrfToken);
+  keepSession(session);
   return session;
 };
 
@@ -31,22 +32,20 @@ export const useAcceptInvitation = (token: string) =>
   useSessionChange((body: { name: string; password: string }) =>
     request("POST", `/invitations/${token}`, body),
   );
+/** For someone who has an account and is signed in with it. */
+export const useJoin = (token: string) =>
+  useSessionChange((_: undefined) => request("POST", `/invitations/${token}/join`));
 export const useResetPassword = (token: string) =>
   useSessionChange((body: { password: string }) => request("POST", `/password-resets/${token}`, body));
 export const useChangeMe = () =>
   useSessionChange((body: { name?: string; theme?: string }) => request("PATCH", "/me", body));
 
-/** Leaves nothing of one person's data for the next. */
-const useLeave = (path: string) => {
-  const client = useQueryClient();
-  return useMutation({
-    mutationFn: () => request<void>("DELETE", path),
-    onSuccess: async () => {
-      client.clear();
-      window.location.assign("/sign-in");
-    },
+/** Leaves nothing of one person's data for the next; `next` is where signing in again leads. */
+const useLeave = (path: string) =>
+  useMutation({
+    mutationFn: (_next: string | void) => request<void>("DELETE", path),
+    onSuccess: (_answer, next) => window.location.assign(paths.signIn.to(next ?? undefined, "signed-out")),
   });
-};
 export const useSignOut = () => useLeave("/session");
 export const useSignOutEverywhere = () => useLeave("/sessions");
 
@@ -67,4 +66,5 @@ export const linkOptions = (kind: "invitations" | "password-resets", token: stri
 export const mailboxOptions = queryOptions({
   queryKey: ["mailbox"],
   queryFn: async () => (await get<{ mails: Mail[] }>("/mailbox")).mails,
+  refetchInterval: 10_000,
 });

@@ -2,10 +2,14 @@
 export const paths = {
   signIn: {
     pattern: "/sign-in",
-    to: (next?: string) => (next ? `/sign-in?next=${encodeURIComponent(next)}` : "/sign-in"),
+    /** `next`: where signing in leads; `why`: what the page says first. */
+    to: (next?: string, why?: "signed-out" | "ended"): string => {
+      const params = new URLSearchParams({ ...(next ? { next } : {}), ...(why ? { why } : {}) });
+      return params.size === 0 ? "/sign-in" : `/sign-in?${params}`;
+    },
   },
   forgottenPassword: { pattern: "/forgotten-password", to: () => "/forgotten-password" },
-  invitation: { pattern: "/invitations/:token" },
+  invitation: { pattern: "/invitations/:token", to: (token: string) => `/invitations/${token}` },
   passwordReset: { pattern: "/password-resets/:token" },
   me: { pattern: "/me", to: () => "/me" },
   mailbox: { pattern: "/mailbox", to: () => "/mailbox" },

@@ -72,7 +72,7 @@ export const PersonMenu = ({ programme, onHelp }: Props) => {
       ))}
       <MenuLine />
       <MenuItem onSelect={onHelp}>Keys and conventions</MenuItem>
-      {installation.hasMailbox ? (
+      {installation.hasMailbox && person?.isInstallationAdministrator ? (
         <MenuItem onSelect={() => navigate(paths.mailbox.to())}>Local mailbox</MenuItem>
       ) : null}
       <MenuItem onSelect={() => navigate(paths.me.to())}>My account</MenuItem>

@@ -1,0 +1,69 @@
+import { type FormEvent, useState } from "react";
+import type { z } from "zod";
+import { ApiError } from "#src/api/client.ts";
+
+type Messages = Readonly<Record<string, string>>;
+
+interface Parts<V, B> {
+  /** The contract's own schema: the same rules, in the same words, as the server's. */
+  schema: z.ZodType<B>;
+  initial: V;
+  send: (body: B) => Promise<unknown>;
+}
+
+export interface FormState<V> {
+  values: V;
+  set: (change: Partial<V>) => void;
+  /** What is wrong with a field, in words, by its name. */
+  fields: Messages;
+  /** The last refusal as a whole; a new object with each, so that it can be told from the one before. */
+  problem: unknown;
+  isBusy: boolean;
+  submit: (event?: FormEvent) => void;
+}
+
+const messagesOf = (error: z.ZodError): Messages => {
+  const fields: Record<string, string> = {};
+  for (const issue of error.issues) fields[issue.path.join(".")] ??= issue.message;
+  return fields;
+};
+
+const notReady = (fields: Messages): ApiError => {
+  const many = Object.keys(fields).length;
+  return new ApiError(0, {
+    code: "unreadable-request",
+    message: `${many === 1 ? "One field needs" : `${many} fields need`} another look, so nothing was sent yet.`,
+    fields,
+  });
+};
+
+/** Keeps what is typed, checks it, sends it once, and keeps what was refused and why. */
+export const useForm = <V extends object, B>({ schema, initial, send }: Parts<V, B>): FormState<V> => {
+  const [values, setValues] = useState(initial);
+  const [problem, setProblem] = useState<unknown>(null);
+  const [isBusy, setBusy] = useState(false);
+  const attempt = async () => {
+    const parsed = schema.safeParse(values);
+    if (!parsed.success) return setProblem(notReady(messagesOf(parsed.error)));
+    setBusy(true);
+    try {
+      await send(parsed.data);
+      setProblem(null);
+    } catch (error) {
+      setProblem(error);
+    } finally {
+      setBusy(false);
+    }
+  };
+  return {
+    values,
+    set: (change) => setValues((before) => ({ ...before, ...change })),
+    fields: problem instanceof ApiError ? problem.fields : {},
+    problem,
+    isBusy,
+    submit: (event) => {
+      event?.preventDefault();
+      if (!isBusy) void attempt();
+    },
+  };
+};
