@@ -12,9 +12,14 @@ export class Slot {
     private readonly methods: Uint8Array,
   ) {}
 
+  /** A number that is not finite, from a given value far out of bounds, is no value: the database holds none either. */
   value(i: number, value: number, error: number): void {
+    if (!Number.isFinite(value)) {
+      this.blank(i, "not-finite");
+      return;
+    }
     this.values[i] = value;
-    this.errors[i] = error;
+    this.errors[i] = Number.isFinite(error) ? error : Number.NaN;
   }
 
   blank(i: number, reason: BlankKey): void {

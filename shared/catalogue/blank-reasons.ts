@@ -167,6 +167,13 @@ export const BLANK_REASONS = [
     "out of range",
     "The light share is a fraction of the light, above 0 and at most 1; the one given is not.",
   ),
+  reason(
+    28,
+    "not-finite",
+    "out-of-range",
+    "out of range",
+    "The given values lead to no finite number; one of them is far from what a star can have.",
+  ),
 ] as const satisfies readonly BlankReason[];
 
 export type BlankKey = (typeof BLANK_REASONS)[number]["key"];

@@ -1,0 +1,150 @@
+import { describe, expect, test } from "vitest";
+import { deriveColumns } from "#server/derive/derive.ts";
+import type { StellarKey } from "#server/derive/star-columns.ts";
+import { MASS_SCATTER, RADIUS_SCATTER } from "#shared/science/cool-dwarfs.ts";
+import { DEFAULT_RECIPE, PRACTICE_RECIPE, type Recipe } from "#shared/science/recipes.ts";
+import { type Given, PRACTICE_STARS } from "./practice-stars.ts";
+import { derived } from "./support.ts";
+
+const DRAWS = 40_000;
+
+/** Normal deviates from a fixed seed (mulberry32, Box–Muller). */
+const normalDeviates = (seed: number): (() => number) => {
+  let state = seed;
+  const uniform = (): number => {
+    state = (state + 0x6d2b79f5) | 0;
+    let t = Math.imul(state ^ (state >>> 15), 1 | state);
+    t = (t + Math.imul(t ^ (t >>> 7), 61 | t)) ^ t;
+    return ((t ^ (t >>> 14)) >>> 0) / 4294967296;
+  };
+  return () => Math.sqrt(-2 * Math.log(1 - uniform())) * Math.cos(2 * Math.PI * uniform());
+};
+
+const deviation = (values: Float64Array): number => {
+  const mean = values.reduce((sum, v) => sum + v, 0) / values.length;
+  return Math.sqrt(values.reduce((sum, v) => sum + (v - mean) ** 2, 0) / (values.length - 1));
+};
+
+/**
+ * Spread of the derived values when every given value with an error is drawn from its own normal distribution. The
+ * scatter of the relations is no input and so is not in it.
+ */
+const spread = (given: Given, recipe: Recipe, keys: readonly StellarKey[]): Record<string, number> => {
+  const normal = normalDeviates(20_260_101);
+  const drawn = Object.fromEntries(
+    Object.entries(given).map(([key, value]) => {
+      const error = key.endsWith("_err") ? 0 : (given[`${key}_err`] ?? 0);
+      return [key, Float64Array.from({ length: DRAWS }, () => value + error * normal())];
+    }),
+  );
+  const { values } = deriveColumns(drawn, DRAWS, recipe);
+  return Object.fromEntries(keys.map((key) => [key, deviation(values[key] ?? new Float64Array(0))]));
+};
+
+/** The first-order error with the scatter of the relations taken off again: what the inputs alone contribute. */
+const fromInputs = (relative: number, ...scatters: number[]): number =>
+  Math.sqrt(relative ** 2 - scatters.reduce((sum, s) => sum + s ** 2, 0));
+
+describe("first-order errors against Monte Carlo", () => {
+  /** Errors large enough to outweigh the scatter of the relations, small enough to stay linear. */
+  const star: Given = { ...PRACTICE_STARS.A, ks_mag_err: 0.06, parallax_err: 0.6, teff_given_err: 60 };
+  const one = derived(star, PRACTICE_RECIPE);
+  const seen = spread(star, PRACTICE_RECIPE, [
+    "distance",
+    "abs_ks",
+    "radius",
+    "mass",
+    "density",
+    "luminosity",
+    "hz_inner",
+    "hz_outer_period",
+    "earth_distance",
+    "earth_period",
+    "transit_probability",
+    "transit_duration",
+    "earth_depth",
+  ]);
+
+  /** Powers with which radius and mass enter, and so their scatters. */
+  test.each<[StellarKey, number, number]>([
+    ["distance", 0, 0],
+    ["abs_ks", 0, 0],
+    ["radius", 1, 0],
+    ["mass", 0, 1],
+    ["density", -3, 1],
+    ["luminosity", 2, 0],
+    ["hz_inner", 1, 0],
+    ["hz_outer_period", 1.5, -0.5],
+    ["earth_distance", 1, 0],
+    ["earth_period", 1.5, -0.5],
+    ["transit_duration", 1.5, -0.5],
+    ["earth_depth", -2, 0],
+  ])("%s", (key, radiusPower, massPower) => {
+    const scale = key === "abs_ks" ? 1 : one.value(key);
+    const expected = (seen[key] ?? Number.NaN) / scale;
+    const found = fromInputs(one.error(key) / scale, radiusPower * RADIUS_SCATTER, massPower * MASS_SCATTER);
+    expect(Math.abs(found / expected - 1)).toBeLessThan(0.04);
+  });
+
+  test("where luminosity is R² T⁴ the probability owes nothing to the radius: R★ / a is set by temperature", () => {
+    const relative = one.error("transit_probability") / one.value("transit_probability");
+    expect(relative).toBeCloseTo((2 * 60) / 3350, 4);
+    expect((seen.transit_probability ?? 0) / one.value("transit_probability")).toBeCloseTo(relative, 3);
+  });
+});
+
+describe("what quantities share is not counted twice", () => {
+  /** No Ks scatter of its own to hide behind: radius from M_Ks, luminosity from M_G, one parallax for both. */
+  const star: Given = {
+    parallax: 50,
+    parallax_err: 2,
+    ks_mag: 7.485,
+    ks_mag_err: 0,
+    g_mag: 10.795,
+    g_mag_err: 0,
+    teff_given: 3560,
+    teff_given_err: 0,
+  };
+
+  test("a parallax moves radius and luminosity alike, so their ratio moves less", () => {
+    const one = derived(star);
+    expect(one.method("radius")).toBe("abs-ks");
+    expect(one.method("luminosity")).toBe("correction-g");
+    const seen = spread(star, DEFAULT_RECIPE, ["radius", "luminosity", "transit_probability"]);
+    const lightScatter = 0.4 * Math.LN10 * 0.05;
+    const found = fromInputs(
+      one.error("transit_probability") / one.value("transit_probability"),
+      RADIUS_SCATTER,
+      0.5 * lightScatter,
+    );
+    const expected = (seen.transit_probability ?? 0) / one.value("transit_probability");
+    expect(Math.abs(found / expected - 1)).toBeLessThan(0.15);
+    const asIfIndependent = Math.hypot(
+      (seen.radius ?? 0) / one.value("radius"),
+      (0.5 * (seen.luminosity ?? 0)) / one.value("luminosity"),
+    );
+    expect(expected).toBeLessThan(0.5 * asIfIndependent);
+  });
+
+  test("density through M Ks is surer than mass and radius on their own would make it", () => {
+    const one = derived({ ...PRACTICE_STARS.A, ks_mag_err: 0.1 }, PRACTICE_RECIPE);
+    const relative = (key: string) => one.error(key) / one.value(key);
+    expect(relative("density")).toBeLessThan(Math.hypot(relative("mass"), 3 * relative("radius")));
+  });
+});
+
+describe("values without errors", () => {
+  test("stand, with no error of their own", () => {
+    const star = derived(PRACTICE_STARS.A, PRACTICE_RECIPE);
+    expect(star.value("luminosity")).toBeCloseTo(0.01269, 5);
+    expect(star.error("luminosity")).toBeNaN();
+    expect(star.reason("luminosity")).toBeUndefined();
+    expect(star.error("radius")).toBeGreaterThan(0);
+  });
+
+  test("an error below zero is none", () => {
+    const star = derived({ ...PRACTICE_STARS.A, ks_mag_err: -0.02 }, PRACTICE_RECIPE);
+    expect(star.error("abs_ks")).toBeNaN();
+    expect(star.value("radius")).toBeCloseTo(0.3344, 4);
+  });
+});
