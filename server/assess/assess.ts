@@ -77,8 +77,9 @@ export const assessStar = (
 ): Assessment => {
   result.noiseBlank = noiseBlank(card, star.magnitude);
   result.noise1h = result.noiseBlank === PRESENT ? noiseInOneHour(card, star.magnitude) : Number.NaN;
-  result.transits = transitsInCampaign(campaign, star.earthPeriod);
-  result.transitsBlank = Number.isNaN(result.transits) ? NEEDS_ORBIT : PRESENT;
+  result.transitsBlank = star.earthPeriod > 0 ? PRESENT : NEEDS_ORBIT;
+  result.transits =
+    result.transitsBlank === PRESENT ? transitsInCampaign(campaign, star.earthPeriod) : Number.NaN;
   result.rMin = Number.NaN;
   result.rMinError = Number.NaN;
   result.rMinBlank = rMinBlank(star, campaign, result);
