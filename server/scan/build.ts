@@ -26,6 +26,7 @@ export interface BuildOptions extends ScanKey {
 
 const MEMORY = "512MB";
 const PROGRESS_ROWS = 20_480;
+const FLUSH_ROWS = 10_240;
 
 /** The recipe that the edition was, or is about to be, derived by. */
 export const recipeOf = async (
@@ -71,6 +72,8 @@ const copyStars = async (
   const append = async (): Promise<void> => {
     done += batch.length;
     batch.appendTo(appender);
+    // In small parts: what the appender holds is written without a pause.
+    if (done % FLUSH_ROWS === 0) appender.flushSync();
     if (done % PROGRESS_ROWS === 0) await onProgress(done, total);
     // Rows that are already here would otherwise be worked off without a pause.
     await nextTurn();

@@ -27,9 +27,14 @@ export const compileCuts = (cuts: readonly Cut[], parameters: Parameters): Compi
 export const passes = (sql: string, cut: Cut): string =>
   `coalesce(${sql}, ${cut.blanks === "keep" ? "true" : "false"})`;
 
-/** The condition that all usable cuts together make. */
+/** The condition that all usable cuts together make. A bare condition drops blanks, and is the quickest. */
 export const whereSql = (cuts: readonly CompiledCut[]): string =>
-  cuts.flatMap(({ sql, cut }) => (sql === null ? [] : [passes(sql, cut)])).join(" AND ") || "true";
+  cuts
+    .flatMap(({ sql, cut }) => {
+      if (sql === null) return [];
+      return [cut.blanks === "drop" ? sql : passes(sql, cut)];
+    })
+    .join(" AND ") || "true";
 
 /** Whether the index can sort by it; merit needs a figure of merit. */
 export const canSortBy = (key: string, hasMerit: boolean): boolean =>

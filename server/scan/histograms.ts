@@ -12,22 +12,37 @@ interface Kept {
   blanks: number;
 }
 
-/** The bins of the selection, within the limits that were kept for the whole catalogue. */
+const BLANK_BIN = -1;
+
+/**
+ * The bins of the selection, within the limits that were kept for the whole catalogue: one pass for all columns. Each
+ * row of the answer has the bin of exactly one of them.
+ */
 const selectedBins = async (
   connection: DuckDBConnection,
-  kept: Kept,
+  kept: readonly Kept[],
   where: string,
   values: number[],
-): Promise<number[]> => {
-  const bins = new Array<number>(BINS).fill(0);
-  if (!kept.stars.some((n) => n > 0)) return bins;
-  const bin = binSql(kept.column_key, kept.low, kept.high, kept.is_log);
+): Promise<number[][]> => {
+  const bins = kept.map(() => new Array<number>(BINS).fill(0));
+  const filled = kept.flatMap((k, i) => (k.stars.some((n) => n > 0) ? [{ ...k, i }] : []));
+  if (filled.length === 0) return bins;
+  // Greatest and least pass over a blank; it is set apart before them.
+  const binned = filled.map(
+    (k, n) =>
+      `CASE WHEN "${k.column_key}" IS NULL THEN ${BLANK_BIN} ELSE ${binSql(k.column_key, k.low, k.high, k.is_log)} END AS b${n}`,
+  );
+  const names = filled.map((_, n) => `b${n}`);
   const result = await connection.runAndReadAll(
-    `SELECT ${bin} AS bin, count(*)::DOUBLE FROM star
-     WHERE "${kept.column_key}" IS NOT NULL AND ${where} GROUP BY bin`,
+    `SELECT count(*)::DOUBLE, ${names.join(", ")} FROM (SELECT ${binned.join(", ")} FROM star WHERE ${where})
+     GROUP BY GROUPING SETS (${names.map((name) => `(${name})`).join(", ")})`,
     values,
   );
-  for (const [index, n] of result.getRowsJS() as [number, number][]) bins[index] = n;
+  for (const [stars, ...cells] of result.getRowsJS() as [number, ...(number | null)[]][]) {
+    const n = cells.findIndex((bin) => bin !== null);
+    const [column, bin] = [bins[filled[n]?.i ?? -1], cells[n] ?? BLANK_BIN];
+    if (column && bin !== BLANK_BIN) column[bin] = stars;
+  }
   return bins;
 };
 
@@ -40,19 +55,16 @@ export const readHistograms = async (
 ): Promise<Histogram[]> => {
   const result = await connection.runAndReadAll("SELECT * FROM histogram");
   const all = new Map((result.getRowObjectsJS() as unknown as Kept[]).map((kept) => [kept.column_key, kept]));
-  const histograms: Histogram[] = [];
-  for (const key of new Set(keys.filter((k) => HISTOGRAM_KEYS.includes(k)))) {
-    const kept = all.get(key);
-    if (!kept) continue;
-    histograms.push({
-      key,
-      low: kept.low,
-      high: kept.high,
-      isLog: kept.is_log,
-      all: kept.stars,
-      selected: await selectedBins(connection, kept, where, values),
-      blanks: kept.blanks,
-    });
-  }
-  return histograms;
+  const wanted = [...new Set(keys)].filter((key) => HISTOGRAM_KEYS.includes(key));
+  const kept = wanted.flatMap((key) => all.get(key) ?? []);
+  const selected = await selectedBins(connection, kept, where, values);
+  return kept.map((k, i) => ({
+    key: k.column_key,
+    low: k.low,
+    high: k.high,
+    isLog: k.is_log,
+    all: k.stars,
+    selected: selected[i] ?? [],
+    blanks: k.blanks,
+  }));
 };

@@ -107,10 +107,37 @@ const plainConditionSql = (tree: ConditionTree, parameters: Parameters): string 
   }
 };
 
+const usesSame = (a: Tree, b: Tree): boolean => {
+  const [left, right] = [columnsUsed(a), new Set(columnsUsed(b))];
+  return left.length === right.size && left.every((key) => right.has(key));
+};
+
+/** Whether the SQL is null by itself as soon as one column is; then nothing needs to be said about it. */
+const isStrict = (tree: Tree): boolean => {
+  switch (tree.kind) {
+    case "number":
+    case "column":
+      return true;
+    case "negate":
+    case "not":
+      return isStrict(tree.of);
+    case "call":
+      return tree.name !== "min" && tree.name !== "max" && tree.args.every(isStrict);
+    case "choice":
+      return false;
+    case "arithmetic":
+    case "compare":
+      return isStrict(tree.left) && isStrict(tree.right);
+    case "both":
+    case "either":
+      return isStrict(tree.left) && isStrict(tree.right) && usesSame(tree.left, tree.right);
+  }
+};
+
 /** Blank as soon as one column is, whatever the rest would say. */
 const unlessBlank = (tree: Tree, sql: string): string => {
   const columns = columnsUsed(tree);
-  if (columns.length === 0) return sql;
+  if (columns.length === 0 || isStrict(tree)) return sql;
   const present = columns.map((key) => `${columnSql(key)} IS NOT NULL`).join(" AND ");
   return `(CASE WHEN ${present} THEN ${sql} END)`;
 };

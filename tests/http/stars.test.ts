@@ -210,6 +210,8 @@ describe("histograms", () => {
       expect(sum(h.all) + h.blanks).toBe(6);
     }
     expect(sum(body.histograms[0].selected)).toBe(2);
+    const whole = (await read("histograms", {}, "&columns=teff,g_mag,distance")).body.histograms;
+    for (const h of whole) expect(h.selected).toEqual(h.all);
   });
 });
 
