@@ -1,5 +1,5 @@
 import type { IncomingMessage } from "node:http";
-import { PassThrough } from "node:stream";
+import { PassThrough, type Readable } from "node:stream";
 import { Extract } from "../database/entities/extract.entity.ts";
 import { inTransaction } from "../database/transaction.ts";
 import type { Deps } from "../deps.ts";
@@ -133,26 +133,20 @@ const noteFailure = async (deps: Deps, extract: Extract, error: unknown): Promis
     );
 };
 
-/** Streams the file in. It is kept whole, with its hash, or not at all. */
-export const receiveOriginal = async (
+/** Takes the file from a stream. It is kept whole, with its hash, or not at all. */
+export const storeOriginal = async (
   deps: Deps,
   programmeId: string,
   person: Person,
   id: string,
-  req: IncomingMessage,
+  body: Readable,
 ): Promise<void> => {
   const extract = await findExtractRow(deps.db.manager, programmeId, id);
   if (!extract) throw notFound("This extract");
   if (extract.state !== "receiving") throw alreadyReceived();
-  if (req.readableEnded)
-    throw new AppError(415, "not-a-stream", "The file came as JSON and was not taken.", {
-      hint: "Send it as application/octet-stream.",
-    });
   const key = `programmes/${programmeId}/extracts/${id}/original-${crypto.randomUUID()}`;
-  const limitBytes = deps.config.uploadBytes;
   try {
-    if (Number(req.headers["content-length"] ?? 0) > limitBytes) throw new FileTooLargeError(limitBytes);
-    const written = await deps.files.write(key, bodyOf(req), { limitBytes });
+    const written = await deps.files.write(key, body, { limitBytes: deps.config.uploadBytes });
     refuseWrongLength(extract, written);
     await refuseSameBytes(deps, extract, written);
     await keep(deps, person, extract, key, written);
@@ -161,4 +155,22 @@ export const receiveOriginal = async (
     await noteFailure(deps, extract, error);
     throw error;
   }
+};
+
+/** Takes the file from a request's body. */
+export const receiveOriginal = async (
+  deps: Deps,
+  programmeId: string,
+  person: Person,
+  id: string,
+  req: IncomingMessage,
+): Promise<void> => {
+  if (req.readableEnded)
+    throw new AppError(415, "not-a-stream", "The file came as JSON and was not taken.", {
+      hint: "Send it as application/octet-stream.",
+    });
+  const limitBytes = deps.config.uploadBytes;
+  // Said before the first byte is read; a body that announces less than it sends is stopped at the limit.
+  if (Number(req.headers["content-length"] ?? 0) > limitBytes) throw new FileTooLargeError(limitBytes);
+  await storeOriginal(deps, programmeId, person, id, bodyOf(req));
 };

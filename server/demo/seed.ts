@@ -1,0 +1,150 @@
+import { readFile } from "node:fs/promises";
+import { dirname, join } from "node:path";
+import { fileURLToPath } from "node:url";
+import type { DataSource } from "typeorm";
+import { campaignBody, cardBody } from "#shared/api/instruments.ts";
+import { meritBody } from "#shared/api/merits.ts";
+import { selectionBody } from "#shared/api/selections.ts";
+import { viewToParams } from "#shared/catalogue/view.ts";
+import type { Role } from "#shared/policy/roles.ts";
+import type { Config } from "../config.ts";
+import { Person } from "../database/entities/person.entity.ts";
+import { inTransaction } from "../database/transaction.ts";
+import type { Deps } from "../deps.ts";
+import { makeCampaign, makeCard } from "../instruments/service.ts";
+import { makeList } from "../lists/make.ts";
+import { moveList, readList } from "../lists/service.ts";
+import { createLog } from "../log.ts";
+import { makeMerit } from "../merit/service.ts";
+import { addMember } from "../people/membership.ts";
+import { createProgramme } from "../programmes/service.ts";
+import { makeSelection } from "../selections/service.ts";
+import { FolderStorage } from "../storage/folder-storage.ts";
+import { bringExtract } from "./bring-extract.ts";
+import { activateDemoPeople, type DemoPerson, makeDemoPeople } from "./people.ts";
+
+export { demoSignIns } from "./people.ts";
+
+const FOLDER = join(dirname(fileURLToPath(import.meta.url)), "../../data-demo");
+const LISTED = 150;
+const ABOUT =
+  "An invented sky to practise on: none of its stars exist. Two overlapping extracts of an invented release, two instruments, one list in review.";
+
+const readJson = async (name: string): Promise<unknown> =>
+  JSON.parse(await readFile(join(FOLDER, name), "utf8"));
+
+/** Nobody can sign in before the demo is whole; so people who are all inactive are the mark of one cut short. */
+export const needsSeed = async (db: DataSource): Promise<boolean> =>
+  !(await db.manager.existsBy(Person, { isActive: true }));
+
+/** Takes away what a seed that was cut short left; only ever called where nobody could sign in yet. */
+const empty = async (db: DataSource): Promise<void> => {
+  for (const { tableName } of db.entityMetadatas) await db.query(`TRUNCATE TABLE \`${tableName}\``);
+};
+
+const personWith = (people: readonly DemoPerson[], role: Role): Person => {
+  const found = people.find(({ roles }) => roles[0] === role);
+  if (!found) throw new Error(`The demo has nobody with the role ${role}.`);
+  return found.person;
+};
+
+const makeProgramme = async (deps: Deps, people: readonly DemoPerson[]): Promise<string> => {
+  const administrator = personWith(people, "administrator");
+  const programme = await createProgramme(
+    deps,
+    { ...administrator, isInstallationAdministrator: true },
+    { name: "Small Suns", description: ABOUT, isInvented: true },
+  );
+  await inTransaction(deps.db, async (tx) => {
+    for (const { person, roles } of people)
+      await addMember(tx, { programmeId: programme.id, person, roles, by: administrator, at: deps.now() });
+  });
+  return programme.id;
+};
+
+/** Cards, campaigns, figure of merit and selections; answers the versions that the list is made with. */
+const makeTools = async (deps: Deps, programmeId: string, people: readonly DemoPerson[]) => {
+  const team = personWith(people, "instrument-team");
+  const scientist = personWith(people, "scientist");
+  await makeCard(deps, programmeId, team, cardBody.parse(await readJson("practice-30.json")));
+  const heron = await makeCard(deps, programmeId, team, cardBody.parse(await readJson("heron-04.json")));
+  await makeCampaign(deps, programmeId, team, campaignBody.parse(await readJson("practice-180d.json")));
+  const nights = await makeCampaign(
+    deps,
+    programmeId,
+    team,
+    campaignBody.parse(await readJson("sixty-nights.json")),
+  );
+  const merit = await makeMerit(
+    deps,
+    programmeId,
+    scientist,
+    meritBody.parse(await readJson("small-suns-warm-rocks.json")),
+  );
+  const selections = selectionBody.array().parse(await readJson("selections.json"));
+  for (const selection of selections) await makeSelection(deps, programmeId, scientist, selection);
+  return {
+    card: heron.versionId,
+    campaign: nights.versionId,
+    merit: merit.versionId,
+    cuts: selections[0]?.cuts ?? [],
+  };
+};
+
+const bringExtracts = async (deps: Deps, programmeId: string, curator: Person): Promise<void> => {
+  const release = "Invented Survey 1";
+  await bringExtract(deps, programmeId, curator, join(FOLDER, "astrometry.csv"), {
+    name: "Astrometry and magnitudes",
+    origin: "Invented: made by npm run generate with seed 2027. None of these stars exist.",
+    release,
+    epoch: null,
+  });
+  await bringExtract(deps, programmeId, curator, join(FOLDER, "spectra.csv"), {
+    name: "Spectra and light shares",
+    origin: "Invented: made by npm run generate with seed 2027, layout spectra. Positions are for J2000.0.",
+    release,
+    epoch: 2000,
+  });
+};
+
+const makeDemoList = async (
+  deps: Deps,
+  programmeId: string,
+  scientist: Person,
+  { card, campaign, merit, cuts }: Awaited<ReturnType<typeof makeTools>>,
+): Promise<void> => {
+  const view = viewToParams({
+    edition: null,
+    card,
+    campaign,
+    merit,
+    cuts,
+    sort: { key: "merit", direction: "desc" },
+  });
+  const { listId } = await makeList(deps, programmeId, scientist, {
+    name: "Winter first light",
+    note: "The first list to try the Heron telescope on.",
+    view: view.toString(),
+    first: LISTED,
+  });
+  const { version } = await readList(deps, programmeId, listId);
+  await moveList(deps, programmeId, scientist, listId, { state: "in-review", version });
+};
+
+/** Fills an empty database with the practice programme, through the same services that people's requests go through. */
+export const seedDemo = async (db: DataSource, config: Config): Promise<void> => {
+  const deps: Deps = {
+    config,
+    log: createLog("error", "seed"),
+    db,
+    files: new FolderStorage(config.folders.files),
+    now: () => new Date(),
+  };
+  await empty(db);
+  const people = await makeDemoPeople(db.manager, deps.now());
+  const programmeId = await makeProgramme(deps, people);
+  const tools = await makeTools(deps, programmeId, people);
+  await bringExtracts(deps, programmeId, personWith(people, "curator"));
+  await makeDemoList(deps, programmeId, personWith(people, "scientist"), tools);
+  await activateDemoPeople(db, people);
+};
