@@ -119,7 +119,7 @@ export const useWithdrawInvitation = (programmeId: string) =>
 export const useLeaveProgramme = (programmeId: string, away: () => Promise<void> | void) => {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (_: undefined) => request<void>("DELETE", `${base(programmeId)}/members/me`),
+    mutationFn: () => request<void>("DELETE", `${base(programmeId)}/members/me`),
     onSuccess: async () => {
       await away();
       await refreshOwn(client);

@@ -34,19 +34,19 @@ export const useAcceptInvitation = (token: string) =>
   );
 /** For someone who has an account and is signed in with it. */
 export const useJoin = (token: string) =>
-  useSessionChange((_: undefined) => request("POST", `/invitations/${token}/join`));
+  useSessionChange<void>(() => request("POST", `/invitations/${token}/join`));
 export const useResetPassword = (token: string) =>
   useSessionChange((body: { password: string }) => request("POST", `/password-resets/${token}`, body));
 export const useChangeMe = () =>
   useSessionChange((body: { name?: string; theme?: string }) => request("PATCH", "/me", body));
 
-/** Leaves nothing of one person's data for the next; `next` is where signing in again leads. */
-const useLeave = (path: string) =>
+/** A page loaded anew keeps nothing of one person's data for the next; `next` is where signing in again leads. */
+const useLeave = (path: string, next?: string) =>
   useMutation({
-    mutationFn: (_next: string | void) => request<void>("DELETE", path),
-    onSuccess: (_answer, next) => window.location.assign(paths.signIn.to(next ?? undefined, "signed-out")),
+    mutationFn: () => request<void>("DELETE", path),
+    onSuccess: () => window.location.assign(paths.signIn.to(next, "signed-out")),
   });
-export const useSignOut = () => useLeave("/session");
+export const useSignOut = (next?: string) => useLeave("/session", next);
 export const useSignOutEverywhere = () => useLeave("/sessions");
 
 export const useChangePassword = () =>

@@ -19,6 +19,8 @@ export interface FormState<V> {
   /** The last refusal as a whole; a new object with each, so that it can be told from the one before. */
   problem: unknown;
   isBusy: boolean;
+  /** Takes the refusal off the screen, once it was dealt with. */
+  forget: () => void;
   submit: (event?: FormEvent) => void;
 }
 
@@ -61,6 +63,7 @@ export const useForm = <V extends object, B>({ schema, initial, send }: Parts<V,
     fields: problem instanceof ApiError ? problem.fields : {},
     problem,
     isBusy,
+    forget: () => setProblem(null),
     submit: (event) => {
       event?.preventDefault();
       if (!isBusy) void attempt();

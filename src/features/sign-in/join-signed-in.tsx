@@ -17,7 +17,7 @@ export const JoinSignedIn = ({ link, token }: Props) => {
   const before = useSession();
   const join = useJoin(token);
   const enter = async () => {
-    const { session } = await join.mutateAsync(undefined);
+    const { session } = await join.mutateAsync();
     navigate(joinedProgramme(before, session, link.programme), { replace: true });
   };
   return (
@@ -38,7 +38,7 @@ export const JoinSignedIn = ({ link, token }: Props) => {
 
 /** Somebody else is signed in in this browser. */
 export const OtherAccount = ({ link, token, email }: Props & { email: string }) => {
-  const signOut = useSignOut();
+  const signOut = useSignOut(paths.invitation.to(token));
   return (
     <div className="flex flex-col gap-4">
       <p>
@@ -48,11 +48,7 @@ export const OtherAccount = ({ link, token, email }: Props & { email: string }) 
       </p>
       <ErrorNotice error={signOut.error} />
       <div>
-        <Button
-          kind="main"
-          isBusy={signOut.isPending}
-          onClick={() => signOut.mutate(paths.invitation.to(token))}
-        >
+        <Button kind="main" isBusy={signOut.isPending} onClick={() => signOut.mutate()}>
           Sign out
         </Button>
       </div>

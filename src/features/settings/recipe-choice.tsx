@@ -1,0 +1,64 @@
+import { useQuery } from "@tanstack/react-query";
+import { useState } from "react";
+import type { Programme } from "#shared/api/programmes.ts";
+import { activeJobsOptions } from "#src/api/jobs.ts";
+import { useChooseRecipe } from "#src/api/programmes.ts";
+import { JobProgress } from "#src/lib/job-progress.tsx";
+import { useCan } from "#src/lib/rights.ts";
+import { Button } from "#src/ui/button.tsx";
+import { ErrorNotice } from "#src/ui/error-notice.tsx";
+import { RECIPES } from "./recipe-differences.ts";
+import { RecipeTable } from "./recipe-table.tsx";
+
+const nameOf = (key: string): string => RECIPES.find((recipe) => recipe.key === key)?.name ?? key;
+
+/** The recompute that goes on: found again after the page was loaded anew. */
+const useRecompute = (programmeId: string, isAllowed: boolean) => {
+  const [asked, setAsked] = useState<string>();
+  const { data } = useQuery({ ...activeJobsOptions(programmeId), enabled: isAllowed });
+  return { jobId: asked ?? data?.find(({ kind }) => kind === "recompute")?.id, setAsked };
+};
+
+/** The recipe in force, what another would change, and the recompute that brings it into force. */
+export const RecipeChoice = ({ programme }: { programme: Programme }) => {
+  const can = useCan();
+  const choose = useChooseRecipe(programme.id);
+  const { jobId, setAsked } = useRecompute(programme.id, can("job.read"));
+  const [wanted, setWanted] = useState(programme.recipe);
+  const recompute = () => choose.mutate(wanted, { onSuccess: ({ job }) => setAsked(job.id) });
+  return (
+    <div className="flex flex-col gap-4">
+      <p>
+        The catalogue is derived by the recipe <span className="font-medium">{nameOf(programme.recipe)}</span>
+        .
+      </p>
+      <RecipeTable
+        inForce={programme.recipe}
+        wanted={wanted}
+        onWant={can("programme.choose-recipe") ? setWanted : undefined}
+      />
+      {can("programme.choose-recipe") ? (
+        <>
+          <p className="text-[13px] text-soft">
+            Another recipe derives every star anew and makes the next catalogue edition. Until it is ready the
+            present edition stays in use; editions and lists made before keep their values.
+          </p>
+          <ErrorNotice error={choose.error} />
+          <div>
+            <Button isBusy={choose.isPending} disabled={wanted === programme.recipe} onClick={recompute}>
+              Recompute with {nameOf(wanted)}
+            </Button>
+          </div>
+        </>
+      ) : null}
+      {jobId ? (
+        <JobProgress
+          key={jobId}
+          programmeId={programme.id}
+          jobId={jobId}
+          done={`The catalogue is derived by the recipe ${nameOf(programme.recipe)} now.`}
+        />
+      ) : null}
+    </div>
+  );
+};

@@ -1,0 +1,41 @@
+import { DEFAULT_RECIPE, PRACTICE_RECIPE, type Recipe } from "#shared/science/recipes.ts";
+
+export const RECIPES: readonly Recipe[] = [DEFAULT_RECIPE, PRACTICE_RECIPE];
+
+const yesNo = (is: boolean): string => (is ? "yes" : "no");
+
+/** Each setting of a recipe in the reader's words. */
+const SETTINGS: readonly { label: string; of: (recipe: Recipe) => string }[] = [
+  {
+    label: "Distance needs a parallax error of at most",
+    of: ({ parallaxFractionLimit }) => `${parallaxFractionLimit * 100} %`,
+  },
+  { label: "Parallax offset taken off", of: ({ parallaxZeroPointMas }) => `${parallaxZeroPointMas} mas` },
+  { label: "RUWE above which a star may be two", of: ({ ruweLimit }) => String(ruweLimit) },
+  { label: "[Fe/H] enters radius and mass", of: ({ usesFeh }) => yesNo(usesFeh) },
+  { label: "Colour gives a missing temperature", of: ({ usesColourTeff }) => yesNo(usesColourTeff) },
+  {
+    label: "Luminosity comes from",
+    of: ({ luminosity }) =>
+      luminosity === "bolometric-correction"
+        ? "magnitude and bolometric correction"
+        : "radius and temperature",
+  },
+  { label: "Radius outside the cool-dwarf relations", of: ({ usesSunlike }) => yesNo(usesSunlike) },
+  {
+    label: "Duration of a transit",
+    of: ({ duration }) => (duration === "central" ? "central transit" : "mean over all impact parameters"),
+  },
+];
+
+export interface RecipeDifference {
+  label: string;
+  /** In the order of the recipes. */
+  values: string[];
+}
+
+/** The settings in which the recipes differ. */
+export const recipeDifferences = (recipes: readonly Recipe[] = RECIPES): RecipeDifference[] =>
+  SETTINGS.map(({ label, of }) => ({ label, values: recipes.map(of) })).filter(
+    ({ values }) => new Set(values).size > 1,
+  );
