@@ -3,98 +3,111 @@ import type { DuckDBConnection } from "@duckdb/node-api";
 import type { LadderStep } from "#shared/api/stars.ts";
 import type { Cut } from "#shared/catalogue/view.ts";
 import { Parameters } from "#shared/expression/to-sql.ts";
-import { type CompiledCut, compileCuts, passes } from "./compile.ts";
+import { type CompiledCut, compileCuts, passes, whereSql } from "./compile.ts";
 
-/** What one pass over the index says of the cuts of a view. Labels are not part of it: they change no star. */
+/** Which stars a view holds, as numbers. */
 export interface Tally {
   total: number;
   count: number;
   /** SHA-256 of the set of stars. */
   hash: string;
-  steps: Omit<LadderStep, "label">[];
 }
+
+/** What each cut does. Labels are not part of it: they change no star. */
+export type Steps = Omit<LadderStep, "label">[];
 
 /** Number, exclusive or and sum of the stars' identity hashes: the same in whatever order they are met. */
 const hashOf = (count: bigint, xor: bigint, sum: bigint): string =>
   createHash("sha256").update(`${count}:${xor}:${sum}`).digest("hex");
 
-/** `p0`, `p1` … say whether each cut in turn lets a star pass, `b0` … whether it is blank there. */
-const tallySql = (cuts: readonly CompiledCut[]): string => {
-  const used = cuts.flatMap(({ sql, cut }, i) => (sql === null ? [] : [{ sql, cut, i }]));
-  const tested = used.map(({ sql, i }) => `${sql} AS c${i}`);
-  const decided = used.flatMap(({ cut, i }) => [
-    `${passes(`c${i}`, cut)} AS p${i}`,
-    `c${i} IS NULL AS b${i}`,
-  ]);
-  const reached = used.map((_, n) =>
-    used
-      .slice(0, n + 1)
-      .map(({ i }) => `p${i}`)
-      .join(" AND "),
-  );
-  const all = reached.at(-1) ?? "true";
-  const columns = [
-    "count(*) AS total",
-    `count(*) FILTER (${all}) AS stars`,
-    `coalesce(bit_xor(identity_hash) FILTER (${all}), 0) AS xor_of_hashes`,
-    `coalesce(sum(identity_hash) FILTER (${all}), 0) AS sum_of_hashes`,
-    ...used.flatMap(({ i }, n) => [
-      `count(*) FILTER (${reached[n]}) AS left${i}`,
-      `count(*) FILTER (NOT p${i}) AS alone${i}`,
-      `count(*) FILTER (b${i}) AS blank${i}`,
-    ]),
-  ];
-  const inner = `SELECT ${["identity_hash", ...tested].join(", ")} FROM star`;
-  return `SELECT ${columns.join(", ")} FROM (SELECT ${["identity_hash", ...decided].join(", ")} FROM (${inner}))`;
-};
+export const EMPTY_TALLY: Tally = { total: 0, count: 0, hash: hashOf(0n, 0n, 0n) };
 
-const stepsOf = (
-  cuts: readonly CompiledCut[],
-  total: number,
-  number: (name: string) => number,
-): Tally["steps"] => {
-  let before = total;
-  return cuts.map(({ cut, sql, refusal }, i) => {
-    const step = { expression: cut.expression, blanks: cut.blanks };
-    if (sql === null)
-      return {
-        ...step,
-        left: before,
-        fell: 0,
-        alone: 0,
-        blank: 0,
-        error: refusal && {
-          message: refusal.message,
-          hint: refusal.hint,
-          ...(refusal.position === null ? {} : { position: refusal.position }),
-        },
-      };
-    const left = number(`left${i}`);
-    const fell = before - left;
-    before = left;
-    return { ...step, left, fell, alone: number(`alone${i}`), blank: number(`blank${i}`), error: null };
-  });
-};
+type Row = Record<string, bigint | number>;
+
+const readRows = async (connection: DuckDBConnection, sql: string, values: number[]): Promise<Row[]> =>
+  (await connection.runAndReadAll(sql, values)).getRowObjectsJS() as unknown as Row[];
 
 export const readTally = async (connection: DuckDBConnection, cuts: readonly Cut[]): Promise<Tally> => {
   const p = new Parameters();
-  const compiled = compileCuts(cuts, p);
-  const result = await connection.runAndReadAll(tallySql(compiled), p.values);
-  const row = (result.getRowObjectsJS()[0] ?? {}) as Record<string, bigint>;
-  const big = (name: string): bigint => BigInt(row[name] ?? 0);
-  const number = (name: string): number => Number(big(name));
+  const where = whereSql(compileCuts(cuts, p));
+  const [row] = await readRows(
+    connection,
+    `SELECT (SELECT count(*) FROM star) AS total, count(*) AS stars, coalesce(bit_xor(identity_hash), 0) AS xor_of_hashes,
+       coalesce(sum(identity_hash), 0) AS sum_of_hashes FROM star WHERE ${where}`,
+    p.values,
+  );
+  const big = (name: string): bigint => BigInt(row?.[name] ?? 0);
   return {
-    total: number("total"),
-    count: number("stars"),
+    total: Number(big("total")),
+    count: Number(big("stars")),
     hash: hashOf(big("stars"), big("xor_of_hashes"), big("sum_of_hashes")),
-    steps: stepsOf(compiled, number("total"), number),
   };
 };
 
-/** Before the first edition there are no stars, and the cuts are still read. */
-export const emptyTally = (cuts: readonly Cut[]): Tally => ({
-  total: 0,
-  count: 0,
-  hash: hashOf(0n, 0n, 0n),
-  steps: stepsOf(compileCuts(cuts, new Parameters()), 0, () => 0),
+interface UsedCut {
+  sql: string;
+  cut: Cut;
+  i: number;
+}
+
+const usedCuts = (cuts: readonly CompiledCut[]): UsedCut[] =>
+  cuts.flatMap(({ sql, cut }, i) => (sql === null ? [] : [{ sql, cut, i }]));
+
+/**
+ * Stars by the first cut that drops them, and of those how many are known and how many hold, cut by cut: counts
+ * of plain columns in one pass, from which everything the ladder says follows.
+ */
+const ladderSql = (used: readonly UsedCut[]): string => {
+  const tested = used.map(({ sql, i }) => `${sql} AS c${i}`);
+  const dropping = used.map(({ cut, i }, n) => `WHEN NOT ${passes(`c${i}`, cut)} THEN ${n}`);
+  const counts = used.flatMap(({ i }) => [`count(c${i}) AS known${i}`, `count_if(c${i}) AS holds${i}`]);
+  return `SELECT ${["first_drop", "count(*) AS stars", ...counts].join(", ")}
+    FROM (SELECT *, CASE ${dropping.join(" ")} ELSE ${used.length} END AS first_drop
+      FROM (SELECT ${tested.join(", ")} FROM star)) GROUP BY first_drop`;
+};
+
+const refusedStep = ({ cut, refusal }: CompiledCut, left: number): Steps[number] => ({
+  expression: cut.expression,
+  blanks: cut.blanks,
+  left,
+  fell: 0,
+  alone: 0,
+  blank: 0,
+  error: refusal && {
+    message: refusal.message,
+    hint: refusal.hint,
+    ...(refusal.position === null ? {} : { position: refusal.position }),
+  },
 });
+
+const stepsOf = (cuts: readonly CompiledCut[], rows: readonly Row[]): Steps => {
+  const sum = (name: string): number => rows.reduce((all, row) => all + Number(row[name] ?? 0), 0);
+  const total = sum("stars");
+  let left = total;
+  let n = 0;
+  return cuts.map((compiled, i) => {
+    const { cut, sql } = compiled;
+    if (sql === null) return refusedStep(compiled, left);
+    const fell = Number(rows.find((row) => Number(row.first_drop) === n)?.stars ?? 0);
+    n++;
+    left -= fell;
+    const blank = total - sum(`known${i}`);
+    const passing = sum(`holds${i}`) + (cut.blanks === "keep" ? blank : 0);
+    const { expression, blanks } = cut;
+    return { expression, blanks, left, fell, alone: total - passing, blank, error: null };
+  });
+};
+
+/** Without a connection there are no stars, and the cuts are still read. */
+export const readLadder = async (
+  connection: DuckDBConnection | null,
+  cuts: readonly Cut[],
+  total: number,
+): Promise<Steps> => {
+  const p = new Parameters();
+  const compiled = compileCuts(cuts, p);
+  const used = usedCuts(compiled);
+  const isAsked = connection !== null && used.length > 0;
+  const rows = isAsked ? await readRows(connection, ladderSql(used), p.values) : [{ stars: total }];
+  return stepsOf(compiled, rows);
+};

@@ -9,7 +9,7 @@ import { findIndex, type IndexFile } from "./index-file.ts";
 import { readerOf, readIds } from "./reader.ts";
 import { Remembered } from "./remembered.ts";
 import { type ResolvedView, resolveView } from "./resolve.ts";
-import { emptyTally, readTally, type Tally } from "./tally.ts";
+import { EMPTY_TALLY, readLadder, readTally, type Steps, type Tally } from "./tally.ts";
 
 /** Orders kept in memory: 8 bytes a star. Longer ones are asked for window by window. */
 const ORDER_BYTES = 20_000_000;
@@ -19,6 +19,7 @@ const TOP_ROWS = 1_000;
 
 class Memory {
   readonly tallies = new Remembered<Tally>({ entries: 100, weight: 100 }, () => 1);
+  readonly ladders = new Remembered<Steps>({ entries: 100, weight: 100 }, () => 1);
   readonly orders = new Remembered<BigInt64Array>(
     { entries: 8, weight: ORDER_BYTES },
     (order) => order.byteLength,
@@ -50,13 +51,20 @@ export class OpenView {
     return JSON.stringify([this.index?.path, this.index?.identity, cuts]);
   }
 
-  /** Counts and fingerprint, and what each cut does. */
   private tally(): Promise<Tally> {
-    const { cuts } = this.resolved.view;
-    if (!this.index) return Promise.resolve(emptyTally(cuts));
+    if (!this.index) return Promise.resolve(EMPTY_TALLY);
     return memoryOf(this.deps).tallies.get(this.setKey, () =>
-      this.ask((c) => readTally(c, cuts), emptyTally(cuts)),
+      this.ask((c) => readTally(c, this.resolved.view.cuts), EMPTY_TALLY),
     );
+  }
+
+  private steps(): Promise<Steps> {
+    const { cuts } = this.resolved.view;
+    if (!this.index) return readLadder(null, cuts, 0);
+    return memoryOf(this.deps).ladders.get(this.setKey, async () => {
+      const total = await this.total();
+      return this.ask((c) => readLadder(c, cuts, total), []);
+    });
   }
 
   async count(): Promise<number> {
@@ -68,8 +76,9 @@ export class OpenView {
     return (await this.tally()).total;
   }
 
+  /** What each cut leaves, lets fall, would drop alone, and finds blank. */
   async ladder(): Promise<LadderStep[]> {
-    const { steps } = await this.tally();
+    const steps = await this.steps();
     return steps.map((step, i) => ({ ...step, label: this.resolved.view.cuts[i]?.label ?? "" }));
   }
 
