@@ -1,0 +1,258 @@
+import { createColumnHelper, tableFeatures, useTable } from "@tanstack/react-table";
+import {
+  type CSSProperties,
+  type KeyboardEvent,
+  type ReactNode,
+  useEffect,
+  useMemo,
+  useRef,
+  useState,
+} from "react";
+import { announce } from "../live-region.tsx";
+import { HeadCell } from "./head-cell.tsx";
+import { moveBy } from "./keys.ts";
+import type { CellPlace, GridColumn, GridSort } from "./types.ts";
+import { useRowWindow } from "./use-row-window.ts";
+
+/** Label, unit and picture. */
+export const HEAD_HEIGHT = 66;
+
+const features = tableFeatures({});
+
+interface Props<Row> {
+  /** Says what the grid holds: "Stars, 412 of 238 448, sorted by merit". */
+  label: string;
+  columns: readonly GridColumn<Row>[];
+  /** Rows of the whole result. */
+  count: number;
+  /** The row at that place from 0; undefined while it is being read. */
+  rowAt: (index: number) => Row | undefined;
+  rowKey: (row: Row) => string;
+  rowLabel: (row: Row) => string;
+  rowHeight: number;
+  sort: GridSort | null;
+  onSort: (key: string) => void;
+  onOpen: (row: Row) => void;
+  /** Key of the row that is open beside the grid. */
+  openKey: string | null;
+  /** Tells which rows are on screen, so that they can be read. */
+  onRange: (first: number, last: number) => void;
+  /** A row to bring into view when it changes, from 0. */
+  goTo?: number | null;
+  onGoToRow: () => void;
+  isBusy?: boolean;
+}
+
+const frozenOffsets = <Row,>(columns: readonly GridColumn<Row>[]): readonly (number | null)[] => {
+  let left = 0;
+  return columns.map((column) => {
+    if (!column.isFrozen) return null;
+    const at = left;
+    left += column.width;
+    return at;
+  });
+};
+
+const cellStyle = (width: number, left: number | null, isHead: boolean): CSSProperties => ({
+  width,
+  minWidth: width,
+  ...(left === null ? {} : { position: "sticky", left, zIndex: isHead ? 3 : 1 }),
+});
+
+/**
+ * A table of any length by the ARIA grid pattern: one tab stop, arrows move, the focused row stays mounted, rows are read
+ * as they come into view.
+ */
+export const Grid = <Row,>(props: Props<Row>): ReactNode => {
+  const {
+    label,
+    columns,
+    count,
+    rowAt,
+    rowKey,
+    rowLabel,
+    rowHeight,
+    sort,
+    onSort,
+    onOpen,
+    openKey,
+    onRange,
+    goTo = null,
+    onGoToRow,
+    isBusy,
+  } = props;
+  const scroller = useRef<HTMLDivElement>(null);
+  const [active, setActive] = useState<CellPlace>({ row: -1, column: 0 });
+  const wantsFocus = useRef(false);
+  const { virtualizer, track, place } = useRowWindow({
+    rows: count,
+    rowHeight,
+    headHeight: HEAD_HEIGHT,
+    scroller,
+    focusedRow: active.row,
+  });
+  const shown = virtualizer.getVirtualItems();
+  const first = shown[0]?.index ?? 0;
+  const last = shown.at(-1)?.index ?? 0;
+  useEffect(() => onRange(first, last), [first, last, onRange]);
+
+  const loaded = shown.flatMap(({ index }) => {
+    const row = rowAt(index);
+    return row === undefined ? [] : [{ index, row }];
+  });
+  const definitions = useMemo(() => {
+    const helper = createColumnHelper<typeof features, { index: number; row: Row }>();
+    return helper.columns(
+      columns.map((column) =>
+        helper.display({ id: column.key, cell: ({ row }) => column.cell(row.original.row) }),
+      ),
+    );
+  }, [columns]);
+  const table = useTable({
+    features,
+    columns: definitions,
+    data: loaded,
+    getRowId: ({ index }) => String(index),
+  });
+  const modelRows = new Map(table.getRowModel().rows.map((row) => [row.original.index, row]));
+
+  // A shorter result must not leave the focus on a row that is gone.
+  const activeRow = Math.min(active.row, count - 1);
+  useEffect(() => {
+    if (!wantsFocus.current) return;
+    const cell = scroller.current?.querySelector<HTMLElement>(
+      `[data-row="${activeRow}"][data-column="${active.column}"]`,
+    );
+    if (!cell) return;
+    wantsFocus.current = false;
+    cell.focus({ preventScroll: true });
+    cell.scrollIntoView({ inline: "nearest", block: "nearest" });
+  });
+  useEffect(() => {
+    if (goTo === null || goTo < 0 || goTo >= count) return;
+    virtualizer.scrollToIndex(goTo, { align: "center" });
+    setActive((now) => ({ ...now, row: goTo }));
+  }, [goTo, count, virtualizer]);
+
+  const moveTo = (to: CellPlace) => {
+    wantsFocus.current = true;
+    setActive(to);
+    if (to.row >= 0) virtualizer.scrollToIndex(to.row, { align: "auto" });
+  };
+  const enter = () => {
+    const column = columns[active.column];
+    if (activeRow < 0 && column?.canSort) onSort(column.key);
+    const row = activeRow < 0 ? undefined : rowAt(activeRow);
+    if (row !== undefined) onOpen(row);
+  };
+  const onKeyDown = (event: KeyboardEvent) => {
+    const isCtrl = event.ctrlKey || event.metaKey;
+    const page = Math.max(
+      1,
+      Math.floor(((scroller.current?.clientHeight ?? 600) - HEAD_HEIGHT) / rowHeight) - 1,
+    );
+    const to = moveBy(
+      event.key,
+      isCtrl,
+      { row: activeRow, column: active.column },
+      { rows: count, columns: columns.length, page },
+    );
+    if (to) {
+      moveTo(to);
+      if (to.row !== activeRow) announce(sayRow(to.row));
+    } else if (event.key === "Enter" || (event.key === " " && activeRow >= 0)) enter();
+    else if (isCtrl && event.key.toLowerCase() === "g") onGoToRow();
+    else return;
+    event.preventDefault();
+    event.stopPropagation();
+  };
+  const sayRow = (index: number): string => {
+    const row = index < 0 ? undefined : rowAt(index);
+    return index < 0
+      ? "Column heads"
+      : `Row ${index + 1} of ${count}${row === undefined ? "" : `, ${rowLabel(row)}`}`;
+  };
+
+  const offsets = frozenOffsets(columns);
+  const width = columns.reduce((sum, column) => sum + column.width, 0);
+  return (
+    <div
+      ref={scroller}
+      role="grid"
+      tabIndex={-1}
+      aria-label={label}
+      aria-rowcount={count + 1}
+      aria-colcount={columns.length}
+      aria-busy={isBusy || undefined}
+      onKeyDown={onKeyDown}
+      className="relative min-h-0 grow overflow-auto font-mono text-[12.5px] outline-none"
+    >
+      <div
+        role="row"
+        aria-rowindex={1}
+        className="sticky top-0 z-10 flex"
+        style={{ height: HEAD_HEIGHT, minWidth: width }}
+      >
+        {columns.map((column, i) => (
+          <HeadCell
+            key={column.key}
+            column={column as unknown as GridColumn<never>}
+            index={i}
+            sort={sort}
+            isActive={activeRow < 0 && active.column === i}
+            style={cellStyle(column.width, offsets[i] ?? null, true)}
+            onSort={onSort}
+            onFocus={() => setActive({ row: -1, column: i })}
+          />
+        ))}
+        <div className="grow border-b border-rule bg-sheet" />
+      </div>
+      <div role="presentation" className="relative" style={{ height: track, minWidth: width }}>
+        {shown.map(({ index, start }) => {
+          const row = rowAt(index);
+          const isOpen = row !== undefined && rowKey(row) === openKey;
+          const cells = modelRows.get(index)?.getAllCells();
+          const ground = isOpen ? "bg-sel" : "bg-paper";
+          return (
+            // biome-ignore lint/a11y/useKeyWithClickEvents: the grid answers for its rows' keys
+            <div
+              key={index}
+              role="row"
+              tabIndex={-1}
+              aria-rowindex={index + 2}
+              aria-selected={isOpen}
+              onClick={() => row !== undefined && onOpen(row)}
+              className={`absolute top-0 left-0 flex w-full cursor-pointer border-b border-hair ${ground}`}
+              style={{ height: rowHeight, transform: `translateY(${place(start)}px)`, minWidth: width }}
+            >
+              {columns.map((column, i) => (
+                <div
+                  key={column.key}
+                  role={column.isRowHeader ? "rowheader" : "gridcell"}
+                  tabIndex={activeRow === index && active.column === i ? 0 : -1}
+                  aria-colindex={i + 1}
+                  data-row={index}
+                  data-column={i}
+                  onFocus={() => setActive({ row: index, column: i })}
+                  style={cellStyle(column.width, offsets[i] ?? null, false)}
+                  className={`flex-none overflow-hidden px-2.5 whitespace-nowrap ${ground} ${column.isText ? "text-left" : "text-right"}`}
+                >
+                  <span
+                    className="flex h-full items-center"
+                    style={{ justifyContent: column.isText ? "flex-start" : "flex-end" }}
+                  >
+                    {cells?.[i] ? (
+                      <table.FlexRender cell={cells[i]} />
+                    ) : column.isRowHeader ? (
+                      <span className="text-faint">loading</span>
+                    ) : null}
+                  </span>
+                </div>
+              ))}
+            </div>
+          );
+        })}
+      </div>
+    </div>
+  );
+};
