@@ -19,6 +19,8 @@ export const LIMITS = {
   windowRows: 500,
   /** Stars in one target list. */
   listStars: 100_000,
+  /** Stars that a map draws one by one; more are counted in cells. */
+  skyPoints: 20_000,
   /** Sign-in attempts per address and account in the window below. */
   signInAttempts: 10,
   signInWindowMinutes: 15,

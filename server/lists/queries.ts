@@ -96,5 +96,17 @@ export const findMembersAfter = (
     .limit(limit)
     .getMany();
 
+/** Position of each member as it was put there, in order of place; null where it has none. */
+export const findPositions = (
+  tx: EntityManager,
+  listId: string,
+): Promise<{ ra: number | null; declination: number | null }[]> =>
+  tx.query(
+    `SELECT CAST(JSON_VALUE(m.row, '$.values.ra') AS DOUBLE) AS ra,
+        CAST(JSON_VALUE(m.row, '$.values.dec') AS DOUBLE) AS declination
+      FROM list_member m WHERE m.target_list_id = ? ORDER BY m.place`,
+    [listId],
+  );
+
 export const findMember = (tx: EntityManager, listId: string, starId: string): Promise<ListMember | null> =>
   tx.findOne(ListMember, { where: { listId, starId }, lock: { mode: "pessimistic_write" } });

@@ -3,6 +3,7 @@ import {
   listCreateBody,
   listMember,
   listPatchBody,
+  listSky,
   listStateBody,
   memberPatchBody,
   targetList,
@@ -19,6 +20,7 @@ import {
   readList,
   readMembers,
 } from "./service.ts";
+import { readSky } from "./sky.ts";
 
 const ALL = "/programmes/:programmeId/lists";
 const ONE = `${ALL}/:listId`;
@@ -104,6 +106,10 @@ export const addListRoutes = (routes: Routes): void => {
     async ({ deps, programmeId, caller, params, body }) => ({
       list: await moveList(deps, programmeId, caller, params.listId ?? "", body),
     }),
+  );
+  routes.add(
+    { method: "get", path: `${ONE}/sky`, access: "list.read", answer: z.object({ sky: listSky }) },
+    async ({ deps, programmeId, params }) => ({ sky: await readSky(deps, programmeId, params.listId ?? "") }),
   );
   addMemberRoutes(routes);
 };

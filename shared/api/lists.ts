@@ -62,6 +62,19 @@ export const memberPatchBody = z
     message: "Say why in at least 10 characters: the reason stays with the star.",
   });
 
+/**
+ * GET …/lists/:id/sky → { sky }: where its stars are, ICRS degrees. Up to LIMITS.skyPoints stars one by one, `[ra, dec]`
+ * in order of place; more are counted in cells of equal area, `[ra, dec, stars]` at their middle.
+ */
+export const listSky = z.object({
+  stars: z.int(),
+  /** Stars without a position, which cannot be drawn. */
+  without: z.int(),
+  points: z.array(z.tuple([z.number(), z.number()])),
+  cells: z.array(z.tuple([z.number(), z.number(), z.int()])),
+});
+export type ListSky = z.infer<typeof listSky>;
+
 /** GET …/lists/:id/export?format=csv|ecsv → the file. */
 export const EXPORT_FORMATS = ["csv", "ecsv"] as const;
 export const exportQuery = z.object({ format: z.enum(EXPORT_FORMATS) });

@@ -1,5 +1,5 @@
 import { queryOptions } from "@tanstack/react-query";
-import type { ListMember, MEMBER_STATES, TargetList } from "#shared/api/lists.ts";
+import type { ListMember, ListSky, MEMBER_STATES, TargetList } from "#shared/api/lists.ts";
 import { get, request } from "./client.ts";
 import { programmeKeys, useProgrammeChange } from "./programmes.ts";
 
@@ -33,6 +33,14 @@ export const readListMembers = async (
       signal,
     )
   ).members;
+
+/** Members neither come nor go, so the picture of where they are stays. */
+export const listSkyOptions = (programmeId: string, listId: string) =>
+  queryOptions({
+    queryKey: programmeKeys.part(programmeId, "lists", listId, "sky"),
+    queryFn: async () => (await get<{ sky: ListSky }>(`${base(programmeId)}/${listId}/sky`)).sky,
+    staleTime: Number.POSITIVE_INFINITY,
+  });
 
 export const exportPath = (programmeId: string, listId: string, format: "csv" | "ecsv"): string =>
   `/api${base(programmeId)}/${listId}/export?format=${format}`;
