@@ -5,7 +5,7 @@ import { type DuckDBConnection, DuckDBInstance, type DuckDBResult } from "@duckd
 import type { Deps } from "../deps.ts";
 
 /** Of all indexes together that this process has open. */
-const MEMORY = "128MB";
+const MEMORY = "96MB";
 const MOST_ATTACHED = 6;
 const MOST_AT_ONCE = 3;
 
