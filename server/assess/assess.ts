@@ -5,9 +5,6 @@ import { brightestUsable, noiseInOneHour } from "#shared/science/noise.ts";
 import { scaledAxis } from "#shared/science/orbit.ts";
 import type { Recipe } from "#shared/science/recipes.ts";
 
-/** Reach by period is drawn by both sides and so lies in shared; it is an assessment all the same. */
-export { reachByPeriod } from "#shared/science/reach.ts";
-
 /** What the assessment of one star needs; NaN is blank. */
 export interface AssessedStar {
   /** Magnitude in the passband of the card, mag. */

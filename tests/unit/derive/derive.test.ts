@@ -186,6 +186,15 @@ describe("default recipe", () => {
     expect(derived({ ...COOL, teff_given: 0 }).method("teff")).toBe("cool-colour");
   });
 
+  test("where both colour relations hold, 4000 K is where the one for cool dwarfs takes over", () => {
+    // BP − RP 1.95 is inside both; the relation of stars like the Sun gives less than 4000 K there.
+    const cool = derived({ ...COOL, bp_mag: 11.67, g_mag: 10.2 });
+    expect([cool.method("teff"), Math.round(cool.value("teff"))]).toEqual(["cool-colour", 3962]);
+    const warm = derived({ ...COOL, bp_mag: 11.32, g_mag: 9.9 });
+    expect(warm.method("teff")).toBe("sunlike-colour");
+    expect(warm.value("teff")).toBeGreaterThan(4000);
+  });
+
   test("BP and RP of stars that saturate give no temperature", () => {
     const bright = { ...SUNLIKE, bp_mag: 4.9, rp_mag: 4.1 };
     expect(derived(bright).reason("teff")).toBe("outside-teff-relation");
