@@ -79,29 +79,38 @@ export const findEntries = (
 
 const likePrefix = (text: string): string => `${text.replaceAll(/[\\%_]/g, "\\$&")}%`;
 
+const SPELLINGS = ["designation", "source_id"] as const;
+
+const ofCatalogue = (column: string, most: number): string =>
+  `(SELECT star_id, \`${column}\` AS spelling FROM star
+    WHERE ${IN_EDITION} AND \`${column}\` LIKE ? ORDER BY \`${column}\` LIMIT ${most})`;
+
+const ofExtracts = (column: string, most: number): string =>
+  `(SELECT e.star_id, e.\`${column}\` AS spelling FROM entry e JOIN extract x ON x.extract_id = e.extract_id
+    WHERE e.programme_id = ? AND e.\`${column}\` LIKE ? AND e.star_id IS NOT NULL AND x.state = 'committed'
+    ORDER BY e.\`${column}\` LIMIT ${most})`;
+
 /**
- * Ids of stars whose designation or identifier begins so, in the catalogue's spelling or in that of any extract in
- * force. Exact spellings come first.
+ * Ids of stars whose designation or identifier begins so, in the catalogue's spelling or, for who may read them, in
+ * that of any extract in force. Exact spellings come first.
  */
 export const findBySpelling = async (
   manager: EntityManager,
   scope: Scope,
   text: string,
   most: number,
+  mayReadExtracts: boolean,
 ): Promise<string[]> => {
   const prefix = likePrefix(text);
-  const parts = ["designation", "source_id"].flatMap((column) => [
-    `(SELECT star_id, \`${column}\` AS spelling FROM star
-      WHERE ${IN_EDITION} AND \`${column}\` LIKE ? ORDER BY \`${column}\` LIMIT ${most})`,
-    `(SELECT e.star_id, e.\`${column}\` AS spelling FROM entry e JOIN extract x ON x.extract_id = e.extract_id
-      WHERE e.programme_id = ? AND e.\`${column}\` LIKE ? AND e.star_id IS NOT NULL AND x.state = 'committed'
-      ORDER BY e.\`${column}\` LIMIT ${most})`,
+  const parts = SPELLINGS.flatMap((column) => [
+    { sql: ofCatalogue(column, most), values: [...scopeValues(scope), prefix] },
+    ...(mayReadExtracts ? [{ sql: ofExtracts(column, most), values: [scope.programmeId, prefix] }] : []),
   ]);
-  const values = [...scopeValues(scope), prefix, scope.programmeId, prefix];
   const rows = await manager.query<{ star_id: string }[]>(
-    `SELECT star_id, MAX(spelling = ?) AS is_exact, MIN(spelling) AS spelling FROM (${parts.join(" UNION ALL ")}) found
+    `SELECT star_id, MAX(spelling = ?) AS is_exact, MIN(spelling) AS spelling
+     FROM (${parts.map((part) => part.sql).join(" UNION ALL ")}) found
      GROUP BY star_id ORDER BY is_exact DESC, spelling, star_id LIMIT ${most}`,
-    [text, ...values, ...values],
+    [text, ...parts.flatMap((part) => part.values)],
   );
   return rows.map((row) => String(row.star_id));
 };

@@ -77,7 +77,12 @@ export const addStarRoutes = (routes: Routes): void => {
       answer: z.object({ matches: z.array(starMatch) }),
     },
     async (context) => ({
-      matches: await findMatches(context.deps, await viewOf(context), context.query.q),
+      matches: await findMatches(
+        context.deps,
+        await viewOf(context),
+        context.query.q,
+        can(context.actor, "extract.read"),
+      ),
     }),
   );
 

@@ -104,9 +104,17 @@ export const readSheet = async (
   };
 };
 
-/** Stars by designation, identifier or any spelling that an extract uses, with their place where they have one. */
-export const findMatches = async (deps: Deps, view: OpenView, text: string): Promise<StarMatch[]> => {
-  const ids = await findBySpelling(deps.db.manager, scopeOf(view), text, MOST_MATCHES);
+/**
+ * Stars by designation or identifier, with their place where they have one; by an extract's own spelling too for who
+ * may read extracts.
+ */
+export const findMatches = async (
+  deps: Deps,
+  view: OpenView,
+  text: string,
+  mayReadExtracts: boolean,
+): Promise<StarMatch[]> => {
+  const ids = await findBySpelling(deps.db.manager, scopeOf(view), text, MOST_MATCHES, mayReadExtracts);
   const rows = await findStars(deps.db.manager, scopeOf(view), ids);
   const byId = new Map(rows.map((row) => [String(row.star_id), row]));
   const places = await view.placesOf([...byId.keys()]);

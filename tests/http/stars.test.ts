@@ -1,5 +1,6 @@
 import { rm } from "node:fs/promises";
 import { beforeAll, describe, expect, test } from "vitest";
+import { Extract } from "#server/database/entities/extract.entity.ts";
 import { JobRow } from "#server/database/entities/job.entity.ts";
 import type { Programme } from "#server/database/entities/programme.entity.ts";
 import { starSheet, starWindow, type ViewSummary, viewSummary } from "#shared/api/stars.ts";
@@ -260,6 +261,42 @@ describe("finding a star", () => {
     expect(await found("bare 100%")).toHaveLength(1);
     expect(await found("%")).toEqual([]);
     expect(await found("_")).toEqual([]);
+  });
+});
+
+describe("the extracts' own words", () => {
+  test("find a star and stand on its sheet, for who may read extracts alone", async () => {
+    const { manager } = app.deps.db;
+    const extract = await manager.save(
+      manager.create(Extract, {
+        programmeId: programme.id,
+        number: 1,
+        name: "Southern dwarfs",
+        state: "committed",
+        fileName: "south.csv",
+        bytes: "1",
+        uploadedBy: "1",
+        createdAt: new Date(),
+      }),
+    );
+    await app.deps.db.query(
+      "INSERT INTO entry (extract_id, `row_number`, programme_id, star_id, designation, ks_mag, teff_given) VALUES (?, 12, ?, ?, ?, 7.9, 3360)",
+      [extract.id, programme.id, ids[0], "SD 417"],
+    );
+    const { agent: guest } = await app.asPerson("guest", programme);
+    const matches = async (by: Agent) => (await read("find", {}, "&q=sd%204", by)).body.matches;
+    expect(await matches(agent)).toMatchObject([{ id: ids[0], designation: "Practice A" }]);
+    expect(await matches(guest)).toEqual([]);
+    const sheet = async (by: Agent) => starSheet.parse((await read(ids[0] ?? "", {}, "", by)).body.star);
+    expect((await sheet(agent)).entries).toMatchObject([
+      {
+        extractName: "Southern dwarfs",
+        rowNumber: 12,
+        designation: "SD 417",
+        values: { ks_mag: 7.9, teff: 3360 },
+      },
+    ]);
+    expect((await sheet(guest)).entries).toEqual([]);
   });
 });
 
