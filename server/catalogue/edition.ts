@@ -19,7 +19,7 @@ export interface EditionPlan {
   recipe?: string;
   withExtract?: string;
   withoutExtract?: string;
-  /** Ids of the stars that may come out differently, in blocks of at most 10,000. */
+  /** Ids of the stars that may come out differently, in blocks of a few thousand. */
   stars: () => AsyncIterable<string[]>;
   total: number;
   /** What else happens in the transaction that puts the edition in force. */

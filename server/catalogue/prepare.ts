@@ -22,6 +22,9 @@ export interface Changes {
 
 type Row = Record<string, Value>;
 
+/** Looks the listed ids up one by one in the index: as a derived table they would be joined by a scan. */
+const BY_INDEX = "SET STATEMENT in_predicate_conversion_threshold = 0 FOR";
+
 const list = (columns: readonly string[], alias: string): string =>
   columns.map((c) => `${alias}.\`${c}\``).join(", ");
 const ENTRY_COLUMNS = list(GIVEN, "e");
@@ -30,7 +33,7 @@ const STAR_COLUMNS = list(STAR_VALUES, "s");
 /** What the extracts that count say of those stars, the preferred first: the extract committed last. */
 const entriesOf = async (run: JobRun, basis: Basis, ids: string[]): Promise<Map<string, Value[][]>> => {
   const rows = await run.deps.db.query<Row[]>(
-    `SELECT e.star_id, e.extract_id, x.edition, ${ENTRY_COLUMNS}
+    `${BY_INDEX} SELECT e.star_id, e.extract_id, x.edition, ${ENTRY_COLUMNS}
      FROM entry e FORCE INDEX (entry_star) JOIN extract x ON x.extract_id = e.extract_id
      WHERE e.star_id IN (?) AND x.programme_id = ?
        AND (x.state = 'committed' OR x.extract_id = ?) AND x.extract_id <> ?`,
@@ -53,7 +56,7 @@ const entriesOf = async (run: JobRun, basis: Basis, ids: string[]): Promise<Map<
 const textsInForce = async (run: JobRun, basis: Basis, ids: string[]): Promise<Map<string, string>> => {
   if (basis.edition === 0) return new Map();
   const rows = await run.deps.db.query<Row[]>(
-    `SELECT s.star_id, ${STAR_COLUMNS} FROM star s
+    `${BY_INDEX} SELECT s.star_id, ${STAR_COLUMNS} FROM star s FORCE INDEX (PRIMARY)
      WHERE s.programme_id = ? AND s.star_id IN (?) AND s.from_edition <= ? AND s.to_edition IS NULL`,
     [basis.programmeId, ids, basis.edition],
   );
@@ -67,7 +70,8 @@ const textOf = (values: readonly Value[]): string => values.map(encodeValue).joi
 const close = async (run: JobRun, basis: Basis, ids: string[]): Promise<void> => {
   if (ids.length === 0) return;
   await run.deps.db.query(
-    "UPDATE star SET to_edition = ? WHERE programme_id = ? AND star_id IN (?) AND from_edition <= ? AND to_edition IS NULL",
+    `${BY_INDEX} UPDATE star FORCE INDEX (PRIMARY) SET to_edition = ?
+     WHERE programme_id = ? AND star_id IN (?) AND from_edition <= ? AND to_edition IS NULL`,
     [basis.edition + 1, basis.programmeId, ids, basis.edition],
   );
 };

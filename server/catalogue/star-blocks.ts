@@ -1,6 +1,7 @@
 import type { DataSource } from "typeorm";
 
-const BLOCK = 10_000;
+/** Bounds the memory of the worker and the size of one transaction. */
+const BLOCK = 5_000;
 
 /** The stars that an extract speaks of, block by block. */
 export async function* starsOfExtract(db: DataSource, extractId: string): AsyncGenerator<string[]> {

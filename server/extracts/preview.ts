@@ -21,8 +21,8 @@ const suggestedPlan = (sample: Sample, columns: ExtractPreview["columns"]): Read
 });
 
 /** What the mapping screen shows first. */
-export const previewOf = (sample: Sample): ExtractPreview => {
-  const columns = suggestColumns(sample);
+export const previewOf = async (sample: Sample): Promise<ExtractPreview> => {
+  const columns = await suggestColumns(sample);
   const findings = planFindings(sample, suggestedPlan(sample, columns));
   const asking = new Set(findings.filter((f) => f.level === "ask").map((f) => f.column));
   return {

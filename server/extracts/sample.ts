@@ -5,11 +5,13 @@ import { detectEncoding, type Encoding, notATable, textDecoder } from "../format
 import type { FileStorage } from "../storage/storage.ts";
 
 /** Bytes looked at: the beginning, some pieces spread over the rest, and the end. */
-const HEAD = 256 * 1024;
+const HEAD = 128 * 1024;
 const LONGEST_HEAD = 1024 * 1024;
 const PIECE = 24 * 1024;
 const PIECES = 6;
 const TAIL = 48 * 1024;
+/** Rows of the beginning that are looked at: enough to judge by, few enough to answer at once. */
+const HEAD_ROWS = 800;
 const NAME_CHARACTERS = 200;
 
 export interface Sample {
@@ -123,6 +125,7 @@ export const readSample = async (
   const [first, ...body] = records.length > 0 ? records : last.record ? [last.record] : [];
   const { header, renamed } = uniqueNames(first?.cells ?? []);
 
+  body.splice(HEAD_ROWS);
   let cutLine: CsvRecord | null = null;
   if (last.record && records.length > 0) {
     if (last.isQuoteOpen || last.record.cells.length < header.length) cutLine = last.record;

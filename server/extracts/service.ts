@@ -172,7 +172,7 @@ export const savePlan = async (
   refuseStale(row, input.version);
   const sample = await sampleFor(deps, row, input.plan);
   const findings = planFindings(sample, input.plan);
-  await writePlan(deps, person, row, input.version, { plan: input.plan, preview: previewOf(sample) });
+  await writePlan(deps, person, row, input.version, { plan: input.plan, preview: await previewOf(sample) });
   return { ...(await showExtract(deps, programmeId, id)), findings };
 };
 

@@ -1,3 +1,4 @@
+import { setImmediate as nextTurn } from "node:timers/promises";
 import Fuse from "fuse.js";
 import type { ColumnSuggestion } from "#shared/api/extracts.ts";
 import {
@@ -16,6 +17,7 @@ const SAMPLE_CHARACTERS = 60;
 /** A search by likeness is for a person's eye: of wide files only the first columns get one. */
 const MOST_LIKENESSES = 150;
 const LEAST_LIKENESS_CHARACTERS = 5;
+const COLUMNS_PER_TURN = 8;
 
 interface HeaderReading {
   key: string | undefined;
@@ -88,7 +90,7 @@ const isLongNumbers = (texts: string[]): boolean =>
   texts.length > 0 && texts.every((t) => LONG_NUMBER.test(t));
 
 /** What each column seems to mean, and why. Nothing is taken for what it merely resembles. */
-export const suggestColumns = (sample: Sample): ColumnSuggestion[] => {
+export const suggestColumns = async (sample: Sample): Promise<ColumnSuggestion[]> => {
   const readings = sample.header.map(readHeader);
   const chosen = choose(readings);
   const taken = new Set(chosen.keys());
@@ -105,7 +107,7 @@ export const suggestColumns = (sample: Sample): ColumnSuggestion[] => {
     asks: false,
   });
 
-  return sample.header.map((header, index) => {
+  const suggest = (header: string, index: number): ColumnSuggestion => {
     const { key, unit: spelled } = readings[index] ?? { key: undefined, unit: "" };
     const meaning = key === undefined ? undefined : findMeaning(key);
     if (key !== undefined && meaning) {
@@ -138,5 +140,13 @@ export const suggestColumns = (sample: Sample): ColumnSuggestion[] => {
         ? `The header resembles a spelling of ${findMeaning(like)?.label ?? like}; say so if it is one.`
         : "No quantity of the catalogue has a header like this.",
     );
-  });
+  };
+
+  const suggestions: ColumnSuggestion[] = [];
+  for (const [index, header] of sample.header.entries()) {
+    // A search by likeness takes its time: other people's requests get their turn in between.
+    if (index % COLUMNS_PER_TURN === 0) await nextTurn();
+    suggestions.push(suggest(header, index));
+  }
+  return suggestions;
 };

@@ -90,7 +90,7 @@ const keep = async (
   written: Written,
 ): Promise<void> => {
   const sample = await readSample(deps.files, key, written.bytes);
-  const preview = previewOf(sample);
+  const preview = await previewOf(sample);
   await inTransaction(deps.db, async (tx) => {
     const row = await lockExtract(tx, extract.programmeId, extract.id);
     if (!row) throw notFound("This extract");
