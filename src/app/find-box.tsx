@@ -28,7 +28,7 @@ export const FindBox = ({ programmeId }: { programmeId: string }) => {
           placeholder="Find a star"
           value={text}
           onChange={(event) => setText(event.target.value)}
-          className="w-44 rounded border border-edge bg-sheet py-1.5 pr-8 pl-2.5 text-ink xl:w-60"
+          className="w-44 rounded border border-edge bg-sheet py-1.5 pr-8 pl-2.5 text-ink 2xl:w-60"
         />
         <kbd className="pointer-events-none absolute top-1.5 right-2.5 font-mono text-soft">/</kbd>
       </form>

@@ -17,7 +17,7 @@ const SCREENS: readonly { screen: Screen; label: string; action: Action }[] = [
 export const Navigation = ({ programme }: { programme: Session["programmes"][number] }) => (
   <nav
     aria-label="Screens of the programme"
-    className="order-last min-w-0 basis-full overflow-x-auto lg:order-none lg:basis-auto lg:grow"
+    className="order-last min-w-0 basis-full overflow-x-auto xl:order-none xl:basis-auto xl:grow"
   >
     <ul className="flex gap-5">
       {SCREENS.filter(({ action }) => can(programme, action)).map(({ screen, label }) => (

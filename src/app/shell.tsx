@@ -61,16 +61,22 @@ export const Shell = () => {
           Shortlight
         </Link>
         {programme ? <Navigation programme={programme} /> : <div className="grow" />}
-        {programme ? <FindBox programmeId={programme.id} /> : null}
+        {programme ? (
+          <div className="max-xl:order-2">
+            <FindBox programmeId={programme.id} />
+          </div>
+        ) : null}
         {programme?.isInvented ? (
           <span
-            className="rounded-full border border-rule px-2 py-0.5 text-xs text-soft"
+            className="rounded-full border border-rule px-2 py-0.5 text-xs whitespace-nowrap text-soft max-xl:order-2"
             title="None of the stars of this programme exist"
           >
             invented sky
           </span>
         ) : null}
-        <PersonMenu programme={programme} onHelp={showHelp} />
+        <div className="max-xl:order-1 max-xl:ml-auto">
+          <PersonMenu programme={programme} onHelp={showHelp} />
+        </div>
       </header>
       <div id="content" tabIndex={-1} className="min-h-0 grow overflow-auto outline-none">
         <Suspense fallback={<Loading />}>

@@ -13,7 +13,8 @@ interface Parts<V, B> {
 
 export interface FormState<V> {
   values: V;
-  set: (change: Partial<V>) => void;
+  /** What was wrong with a field is forgotten once the field changes. */
+  set: (change: Partial<V> | ((now: V) => Partial<V>)) => void;
   /** What is wrong with a field, in words, by its name. */
   fields: Messages;
   /** The last refusal as a whole; a new object with each, so that it can be told from the one before. */
@@ -39,12 +40,24 @@ const notReady = (fields: Messages): ApiError => {
   });
 };
 
+/** The messages beside fields that are as they were when they were refused. */
+const stillWrong = <V extends object>(problem: unknown, refused: V, values: V): Messages => {
+  if (!(problem instanceof ApiError)) return {};
+  const isAsRefused = ([name]: [string, string]) => {
+    const key = name.split(".")[0] as keyof V;
+    return refused[key] === values[key];
+  };
+  return Object.fromEntries(Object.entries(problem.fields).filter(isAsRefused));
+};
+
 /** Keeps what is typed, checks it, sends it once, and keeps what was refused and why. */
 export const useForm = <V extends object, B>({ schema, initial, send }: Parts<V, B>): FormState<V> => {
   const [values, setValues] = useState(initial);
   const [problem, setProblem] = useState<unknown>(null);
+  const [refused, setRefused] = useState(initial);
   const [isBusy, setBusy] = useState(false);
   const attempt = async () => {
+    setRefused(values);
     const parsed = schema.safeParse(values);
     if (!parsed.success) return setProblem(notReady(messagesOf(parsed.error)));
     setBusy(true);
@@ -59,8 +72,9 @@ export const useForm = <V extends object, B>({ schema, initial, send }: Parts<V,
   };
   return {
     values,
-    set: (change) => setValues((before) => ({ ...before, ...change })),
-    fields: problem instanceof ApiError ? problem.fields : {},
+    set: (change) =>
+      setValues((now) => ({ ...now, ...(typeof change === "function" ? change(now) : change) })),
+    fields: stillWrong(problem, refused, values),
     problem,
     isBusy,
     forget: () => setProblem(null),

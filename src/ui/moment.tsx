@@ -10,7 +10,7 @@ export const Moment = ({ at, isShort = false }: { at: string; isShort?: boolean 
   const utc = `${date.toISOString().slice(0, 16).replace("T", " ")} UTC`;
   const own = `${local(date)} local time`;
   return (
-    <time dateTime={at} title={own} className="font-mono text-[13px] whitespace-nowrap">
+    <time dateTime={at} title={own} className="font-mono text-[13px] sm:whitespace-nowrap">
       {isShort || date.getTimezoneOffset() === 0 ? utc : `${utc} (${own})`}
     </time>
   );

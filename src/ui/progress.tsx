@@ -13,9 +13,9 @@ export const Progress = ({ label, done, total, unit }: Props) => {
   const share = total ? Math.min(1, done / total) : undefined;
   return (
     <div>
-      <div className="flex justify-between gap-4">
+      <div className="flex flex-wrap justify-between gap-x-4">
         <span>{label}</span>
-        <span className="font-mono text-[13px] text-soft">
+        <span className="font-mono text-[13px] whitespace-nowrap text-soft">
           {total === null ? `${count(done)} ${unit}` : `${count(done)} of ${count(total)} ${unit}`}
         </span>
       </div>

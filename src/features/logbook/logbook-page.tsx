@@ -12,7 +12,7 @@ import { Page } from "#src/ui/page.tsx";
 import { LogbookRow } from "./logbook-row.tsx";
 
 const HEADS = [
-  { label: "Line", isNumber: true },
+  { label: "Line", isNumber: true, isWideOnly: true },
   { label: "When" },
   { label: "Who" },
   { label: "What" },

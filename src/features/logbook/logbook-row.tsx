@@ -23,7 +23,7 @@ const DifferenceText = ({ name, before, after }: Difference) => (
 
 const Opened = ({ line, differences }: { line: LogbookLine; differences: readonly Difference[] }) => (
   <tr>
-    <td />
+    <td className="max-sm:hidden" />
     <td colSpan={4}>
       <dl>
         {differences.map((difference) => (
@@ -44,12 +44,12 @@ export const LogbookRow = ({ line }: { line: LogbookLine }) => {
   return (
     <>
       <tr>
-        <td className="text-right font-mono text-[13px] text-soft">{count(line.sequence)}</td>
+        <td className="text-right font-mono text-[13px] text-soft max-sm:hidden">{count(line.sequence)}</td>
         <td>
           <Moment at={line.at} isShort />
         </td>
-        <td className="min-w-24 wrap-anywhere">{line.actor}</td>
-        <td className="min-w-40 wrap-anywhere">{deedOf(line)}</td>
+        <td className="min-w-16 wrap-anywhere">{line.actor}</td>
+        <td className="min-w-20 wrap-anywhere">{deedOf(line)}</td>
         <td>
           <button
             type="button"
@@ -59,7 +59,7 @@ export const LogbookRow = ({ line }: { line: LogbookLine }) => {
           >
             {isOpen ? "Hide" : "Show"}
             <span className="sr-only"> line {line.sequence}</span>
-            <span className="ml-2 inline-block font-mono text-xs text-soft no-underline">
+            <span className="ml-2 inline-block font-mono text-xs text-soft no-underline max-sm:hidden">
               {line.hash.slice(0, SHORT_HASH)}
             </span>
           </button>

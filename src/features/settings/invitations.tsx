@@ -24,7 +24,7 @@ interface RowProps {
 
 const InvitationRow = ({ invitation, isBusy, onWithdraw }: RowProps) => (
   <tr>
-    <td className="min-w-36 wrap-anywhere">
+    <td className="min-w-24 wrap-anywhere">
       {invitation.email}
       <span className="block text-[13px] text-soft">
         {invitation.roles.map((role) => ROLE_LABELS[role]).join(", ")}

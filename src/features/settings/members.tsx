@@ -25,19 +25,19 @@ interface RowProps {
 
 const MemberRow = ({ member, isOneself, onDo }: RowProps) => (
   <tr>
-    <td className="min-w-36 wrap-anywhere">
+    <td className="min-w-24 wrap-anywhere">
       <span className="font-medium">{member.person.name}</span>
       {isOneself ? <span className="text-soft"> (you)</span> : null}{" "}
       {member.state === "deactivated" ? <Pill tone="warning">cannot sign in</Pill> : null}
       <span className="block text-[13px] text-soft">{member.person.email}</span>
     </td>
     <td>{member.roles.map((role) => ROLE_LABELS[role]).join(", ")}</td>
-    <td>
+    <td className="max-sm:hidden">
       <Moment at={member.since} isShort />
     </td>
     {onDo ? (
       <td>
-        <span className="flex gap-1.5">
+        <span className="flex gap-1.5 max-sm:flex-col">
           <Button
             aria-label={`Change the roles of ${member.person.name}`}
             onClick={() => onDo({ what: "roles", member })}
@@ -67,7 +67,7 @@ export const Members = ({ programmeId }: { programmeId: string }) => {
   const stop = () => setDoing(null);
   if (members.isPending) return <Loading />;
   if (!members.data) return <ErrorNotice error={members.error} onRetry={() => void members.refetch()} />;
-  const heads = [{ label: "Member" }, { label: "Roles" }, { label: "Since" }];
+  const heads = [{ label: "Member" }, { label: "Roles" }, { label: "Since", isWideOnly: true }];
   return (
     <>
       <LedgerTable

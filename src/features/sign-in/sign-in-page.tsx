@@ -25,7 +25,8 @@ const useSignInForm = (next: string | undefined) => {
     initial: { email: "", password: "" },
     send: async (body) => {
       const { session } = await signIn.mutateAsync(body).catch((error: unknown) => {
-        form.set({ password: "" });
+        // What was typed while the answer was on its way stays.
+        form.set((now) => (now.password === body.password ? { password: "" } : {}));
         throw error;
       });
       if (session.person?.theme) showTheme(session.person.theme);
