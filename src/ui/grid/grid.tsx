@@ -40,6 +40,8 @@ interface Props<Row> {
   /** A row to bring into view when it changes, from 0. */
   goTo?: number | null;
   onGoToRow: () => void;
+  /** A single letter pressed inside the grid, in lower case. */
+  onLetter?: (letter: string) => void;
   isBusy?: boolean;
 }
 
@@ -79,6 +81,7 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
     onRange,
     goTo = null,
     onGoToRow,
+    onLetter,
     isBusy,
   } = props;
   const scroller = useRef<HTMLDivElement>(null);
@@ -162,6 +165,8 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
       if (to.row !== activeRow) announce(sayRow(to.row));
     } else if (event.key === "Enter" || (event.key === " " && activeRow >= 0)) enter();
     else if (isCtrl && event.key.toLowerCase() === "g") onGoToRow();
+    else if (onLetter && !isCtrl && !event.altKey && !event.shiftKey && /^[a-z]$/.test(event.key))
+      onLetter(event.key);
     else return;
     event.preventDefault();
     event.stopPropagation();

@@ -1,0 +1,190 @@
+import { useQuery } from "@tanstack/react-query";
+import type { StarSheet as Sheet } from "#shared/api/stars.ts";
+import { blankReason } from "#shared/catalogue/blank-reasons.ts";
+import { type Column, errorKey, findColumn } from "#shared/catalogue/columns.ts";
+import { flagsIn } from "#shared/catalogue/flags.ts";
+import type { ViewSpec } from "#shared/catalogue/view.ts";
+import { cellText, count, fixed } from "#shared/format/numbers.ts";
+import { declinationText, rightAscensionText } from "#shared/format/sexagesimal.ts";
+import { sheetOptions } from "#src/api/stars.ts";
+import { ErrorNotice } from "#src/ui/error-notice.tsx";
+import { Loading } from "#src/ui/loading.tsx";
+import { Pill } from "#src/ui/pill.tsx";
+import { SectionTitle } from "#src/ui/section-title.tsx";
+import { ReachPicture } from "./reach-picture.tsx";
+import { TransitPicture } from "./transit-picture.tsx";
+
+/** What the sheet tells of a star, in order. */
+const TOLD = [
+  "distance",
+  "teff",
+  "radius",
+  "mass",
+  "luminosity",
+  "hz_inner",
+  "hz_outer",
+  "earth_distance",
+  "earth_period",
+  "transit_probability",
+  "transit_duration",
+  "earth_depth",
+  "noise_1h",
+  "transits",
+  "r_min",
+];
+
+const unitOf = (column: Column): string => (column.unitLabel === "–" ? "" : ` ${column.unitLabel}`);
+
+const Quantity = ({ column, star }: { column: Column; star: Sheet }) => {
+  const value = star.values[column.key];
+  const reason = value === undefined ? blankReason(star.blanks[column.key] ?? 1) : null;
+  if (reason && star.blanks[column.key] === undefined && column.stage === "instrument") return null;
+  return (
+    <>
+      <dt className="text-soft" title={column.description}>
+        {column.label}
+      </dt>
+      <dd className="text-right font-mono">
+        {value === undefined ? (
+          <span className="text-faint">{reason?.word}</span>
+        ) : (
+          `${cellText(column, value, star.values[errorKey(column.key)])}${unitOf(column)}`
+        )}
+      </dd>
+      {reason ? <dd className="col-span-2 -mt-0.5 mb-1 text-xs text-soft">{reason.sentence}</dd> : null}
+    </>
+  );
+};
+
+const Flags = ({ star }: { star: Sheet }) => {
+  const flags = flagsIn(star.flagBits);
+  return (
+    <p className="mt-1.5 mb-3 flex flex-wrap gap-1">
+      {flags.length === 0 ? <Pill tone="calm">no flags</Pill> : null}
+      {flags.map((flag) => (
+        <Pill key={flag.key} tone={flag.isWarning ? "warning" : "plain"} title={flag.sentence}>
+          {flag.word}
+          {flag.key === "shared-light" && star.values.light_share !== undefined
+            ? ` ${fixed(star.values.light_share, 3)}`
+            : ""}
+        </Pill>
+      ))}
+    </p>
+  );
+};
+
+const Position = ({ star }: { star: Sheet }) => {
+  const { ra, dec, epoch } = star.values;
+  if (ra === undefined || dec === undefined)
+    return <p className="text-xs text-soft">No position is given.</p>;
+  return (
+    <p className="font-mono text-[12.5px]">
+      {rightAscensionText(ra)} {declinationText(dec)}
+      <span className="text-soft">
+        {epoch === undefined ? " (no epoch given)" : ` (ICRS, J${epoch.toFixed(1)})`}
+      </span>
+    </p>
+  );
+};
+
+const Origins = ({ star }: { star: Sheet }) => (
+  <>
+    <SectionTitle>Where the values come from</SectionTitle>
+    <dl className="grid grid-cols-[auto_1fr] gap-x-3 gap-y-1 text-xs">
+      {Object.entries(star.methods).map(([key, word]) => (
+        <div key={key} className="contents">
+          <dt>{findColumn(key)?.label ?? key}</dt>
+          <dd className="text-soft">{word}</dd>
+        </div>
+      ))}
+    </dl>
+    {star.entries.map((entry) => (
+      <details
+        key={`${entry.extractId}-${entry.rowNumber}`}
+        className="mt-2 border-t border-hair pt-1.5 text-xs"
+      >
+        <summary>
+          Extract {entry.extractNumber}, {entry.extractName}, row {count(entry.rowNumber)}
+        </summary>
+        <dl className="mt-1 grid grid-cols-[1fr_auto] gap-x-3 font-mono">
+          {entry.sourceId === null ? null : (
+            <>
+              <dt className="font-sans text-soft">Identifier{entry.release ? `, ${entry.release}` : ""}</dt>
+              <dd>{entry.sourceId}</dd>
+            </>
+          )}
+          {Object.entries(entry.values).map(([key, value]) => (
+            <div key={key} className="contents">
+              <dt className="text-soft">{key}</dt>
+              <dd className="text-right">{String(value)}</dd>
+            </div>
+          ))}
+        </dl>
+      </details>
+    ))}
+  </>
+);
+
+const Dropped = ({ star, view }: { star: Sheet; view: ViewSpec }) =>
+  star.droppedBy.length === 0 ? null : (
+    <div className="mb-3 rounded border border-mark p-2.5 text-[13px]">
+      <p className="font-medium">Not in this result.</p>
+      <ul className="mt-1 text-soft">
+        {star.droppedBy.map((i) => (
+          <li key={i}>
+            Cut {i + 1} drops it: <span className="font-mono text-blue">{view.cuts[i]?.expression}</span>
+          </li>
+        ))}
+      </ul>
+    </div>
+  );
+
+interface Props {
+  programmeId: string;
+  view: ViewSpec;
+  starId: string;
+  onClose: () => void;
+}
+
+/** Everything on one star: what is known, how well, what the instrument would see, and where each value comes from. */
+export const StarSheet = ({ programmeId, view, starId, onClose }: Props) => {
+  const { data: star, error, isPending, refetch } = useQuery(sheetOptions(programmeId, view, starId));
+  if (isPending) return <Loading what="Reading the star" />;
+  if (error || !star) return <ErrorNotice error={error} onRetry={() => void refetch()} />;
+  return (
+    <article aria-label={`Star ${star.designation}`} className="p-5">
+      <div className="flex items-baseline justify-between gap-3">
+        <h2 className="font-mono! text-[19px]">{star.designation}</h2>
+        <span className="text-xs whitespace-nowrap text-soft">
+          {star.place === null ? "no place" : `place ${count(star.place)} of ${count(star.count)}`}
+        </span>
+        <button
+          type="button"
+          aria-label="Close the star"
+          onClick={onClose}
+          className="size-6 flex-none rounded text-lg leading-none text-soft hover:text-ink"
+        >
+          ×
+        </button>
+      </div>
+      <Flags star={star} />
+      <Dropped star={star} view={view} />
+      <Position star={star} />
+      <dl className="mt-3 grid grid-cols-[1fr_auto] gap-x-3 gap-y-1 text-[13px]">
+        {TOLD.flatMap((key) => {
+          const column = findColumn(key);
+          return column ? [<Quantity key={key} column={column} star={star} />] : [];
+        })}
+      </dl>
+      <SectionTitle>A transit as this instrument would see it</SectionTitle>
+      <TransitPicture star={star} />
+      <SectionTitle>Smallest planet found, by period</SectionTitle>
+      <ReachPicture star={star} />
+      <Origins star={star} />
+      <p className="mt-5 border-t border-hair pt-3 text-xs text-soft">
+        Chance of transit is geometric; it says nothing about whether planets exist. Habitable zone is a model
+        range of received light, not a promise. RUWE near 1 does not prove a single star.
+      </p>
+    </article>
+  );
+};
