@@ -17,7 +17,6 @@ const SAMPLE_CHARACTERS = 60;
 /** A search by likeness is for a person's eye: of wide files only the first columns get one. */
 const MOST_LIKENESSES = 150;
 const LEAST_LIKENESS_CHARACTERS = 5;
-const COLUMNS_PER_TURN = 8;
 
 interface HeaderReading {
   key: string | undefined;
@@ -145,7 +144,7 @@ export const suggestColumns = async (sample: Sample): Promise<ColumnSuggestion[]
   const suggestions: ColumnSuggestion[] = [];
   for (const [index, header] of sample.header.entries()) {
     // A search by likeness takes its time: other people's requests get their turn in between.
-    if (index % COLUMNS_PER_TURN === 0) await nextTurn();
+    await nextTurn();
     suggestions.push(suggest(header, index));
   }
   return suggestions;
