@@ -219,7 +219,6 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
           const cells = modelRows.get(index)?.getAllCells();
           const ground = isOpen ? "bg-sel" : "bg-paper";
           return (
-            // biome-ignore lint/a11y/useKeyWithClickEvents: the grid answers for its rows' keys
             <div
               key={index}
               role="row"

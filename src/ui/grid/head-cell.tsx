@@ -18,7 +18,6 @@ const ariaSort = (column: string, sort: GridSort | null) =>
 export const HeadCell = ({ column, index, sort, isActive, style, onSort, onFocus }: Props) => {
   const direction = ariaSort(column.key, sort);
   return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: the grid answers for its cells' keys
     <div
       role="columnheader"
       tabIndex={isActive ? 0 : -1}
