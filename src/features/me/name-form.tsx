@@ -18,7 +18,7 @@ export const NameForm = ({ name }: { name: string }) => {
     },
   });
   return (
-    <Form form={form} className="max-w-md" aria-label="Name">
+    <Form form={form} className="max-w-md">
       <TextInput
         label="Name"
         name="name"

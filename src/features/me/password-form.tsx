@@ -23,7 +23,7 @@ export const PasswordForm = ({ email }: { email: string }) => {
     },
   });
   return (
-    <Form form={form} className="max-w-md" aria-label="Password">
+    <Form form={form} className="max-w-md">
       {/* Password managers keep the new password under this name. */}
       <input type="text" autoComplete="username" value={email} readOnly hidden />
       <PasswordInput

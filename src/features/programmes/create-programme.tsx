@@ -20,7 +20,7 @@ const CreateForm = ({ onClose }: { onClose: () => void }) => {
     },
   });
   return (
-    <Form form={form} aria-label="Make programme">
+    <Form form={form}>
       <p className="text-soft">You become its first administrator and can invite the others.</p>
       <TextInput
         label="Name"

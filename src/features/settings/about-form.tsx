@@ -48,7 +48,7 @@ export const AboutForm = ({ programme }: { programme: Programme }) => {
   const theirs = theirsIn(form.problem);
   const { name, description } = form.values;
   return (
-    <Form form={form} className="max-w-xl" aria-label="Programme">
+    <Form form={form} className="max-w-xl">
       {theirs ? (
         <ChangedMeanwhile
           theirs={theirs}

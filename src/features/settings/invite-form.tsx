@@ -46,7 +46,7 @@ export const InviteForm = ({ programmeId }: { programmeId: string }) => {
     },
   });
   return (
-    <Form form={form} className="max-w-xl" aria-label="Invite someone">
+    <Form form={form} className="max-w-xl">
       <TextInput
         label="E-mail address"
         name="email"

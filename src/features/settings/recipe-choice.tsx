@@ -12,20 +12,22 @@ import { RecipeTable } from "./recipe-table.tsx";
 
 const nameOf = (key: string): string => RECIPES.find((recipe) => recipe.key === key)?.name ?? key;
 
-/** The recompute that goes on: found again after the page was loaded anew. */
+/** The recompute that goes on: found again after the page was loaded anew, and kept on screen to its outcome. */
 const useRecompute = (programmeId: string, isAllowed: boolean) => {
-  const [asked, setAsked] = useState<string>();
+  const [jobId, setJobId] = useState<string>();
   const { data } = useQuery({ ...activeJobsOptions(programmeId), enabled: isAllowed });
-  return { jobId: asked ?? data?.find(({ kind }) => kind === "recompute")?.id, setAsked };
+  const active = data?.find(({ kind }) => kind === "recompute")?.id;
+  if (active !== undefined && active !== jobId) setJobId(active);
+  return { jobId, setJobId };
 };
 
 /** The recipe in force, what another would change, and the recompute that brings it into force. */
 export const RecipeChoice = ({ programme }: { programme: Programme }) => {
   const can = useCan();
   const choose = useChooseRecipe(programme.id);
-  const { jobId, setAsked } = useRecompute(programme.id, can("job.read"));
+  const { jobId, setJobId } = useRecompute(programme.id, can("job.read"));
   const [wanted, setWanted] = useState(programme.recipe);
-  const recompute = () => choose.mutate(wanted, { onSuccess: ({ job }) => setAsked(job.id) });
+  const recompute = () => choose.mutate(wanted, { onSuccess: ({ job }) => setJobId(job.id) });
   return (
     <div className="flex flex-col gap-4">
       <p>

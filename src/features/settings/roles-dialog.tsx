@@ -24,7 +24,7 @@ const RolesForm = ({ programmeId, member, onClose }: Props & { member: Member })
     },
   });
   return (
-    <Form form={form} aria-label="Roles">
+    <Form form={form}>
       <RoleBoxes
         roles={form.values.roles}
         error={form.fields.roles}

@@ -45,7 +45,7 @@ const RequestForm = ({ onSent }: { onSent: (email: string) => void }) => {
   });
   const wait = useWait(form.problem);
   return (
-    <Form form={form} aria-label="Forgotten password">
+    <Form form={form}>
       <p className="text-soft">We send a link by which you choose a new one.</p>
       <TextInput
         label="E-mail address"

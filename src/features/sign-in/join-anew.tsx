@@ -30,7 +30,7 @@ export const JoinAnew = ({ link, token, signedInAs }: Props) => {
     },
   });
   return (
-    <Form form={form} aria-label="Join">
+    <Form form={form}>
       <p className="text-soft">
         You sign in with <span className="font-medium text-ink wrap-anywhere">{link.email}</span> from now on.
         {signedInAs ? ` You are signed in as ${signedInAs} here; joining ends that.` : ""}

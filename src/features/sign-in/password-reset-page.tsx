@@ -23,7 +23,7 @@ const ResetForm = ({ link, token }: { link: Link; token: string }) => {
     },
   });
   return (
-    <Form form={form} aria-label="New password">
+    <Form form={form}>
       <p className="text-soft">
         For <span className="font-medium text-ink wrap-anywhere">{link.email}</span>. Sessions that are open
         elsewhere end.

@@ -40,7 +40,7 @@ const SignInForm = ({ next }: { next: string | undefined }) => {
   const form = useSignInForm(next);
   const wait = useWait(form.problem);
   return (
-    <Form form={form} aria-label="Sign in">
+    <Form form={form}>
       <TextInput
         label="E-mail address"
         name="email"
