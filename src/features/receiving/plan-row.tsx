@@ -1,0 +1,155 @@
+import type { ColumnCard, ColumnSuggestion } from "#shared/api/extracts.ts";
+import { findMeaning, KEPT, MEANINGS } from "#shared/catalogue/header-spellings.ts";
+import { unitChoices } from "#shared/units/units.ts";
+
+const BOX =
+  "min-h-7 w-full rounded border border-edge bg-sheet px-1.5 text-[13px] text-ink disabled:border-transparent disabled:bg-transparent disabled:opacity-100";
+/** Stands between blank marks: a comma may be part of one. */
+const BETWEEN = ";";
+
+export const meaningLabel = (key: string): string =>
+  key === KEPT ? "Kept as text" : (findMeaning(key)?.label ?? key);
+
+/** The first text of the column, and the value that is read from it. */
+const Sample = ({ suggestion }: { suggestion: ColumnSuggestion | undefined }) => {
+  const samples = suggestion?.samples ?? [];
+  const [first] = samples;
+  if (!first) return <>–</>;
+  const isSame = first.value === null || String(first.value) === first.text;
+  const all = samples.map((s) => (s.value === null ? s.text : `${s.text} → ${s.value}`)).join("\n");
+  return <span title={all}>{isSame ? first.text : `${first.text} → ${first.value}`}</span>;
+};
+
+/** A text that is taken over when the person leaves it or presses Enter. */
+const LateText = (props: {
+  label: string;
+  value: string;
+  isOff: boolean;
+  placeholder?: string;
+  list?: string;
+  onValue: (value: string) => void;
+}) => (
+  <input
+    key={props.value}
+    aria-label={props.label}
+    defaultValue={props.value}
+    disabled={props.isOff}
+    placeholder={props.placeholder}
+    list={props.list}
+    autoComplete="off"
+    className={`${BOX} font-mono`}
+    onBlur={(event) => {
+      if (event.target.value.trim() !== props.value) props.onValue(event.target.value.trim());
+    }}
+    onKeyDown={(event) => {
+      if (event.key === "Enter") event.currentTarget.blur();
+    }}
+  />
+);
+
+interface Props {
+  card: ColumnCard;
+  suggestion: ColumnSuggestion | undefined;
+  isAsking: boolean;
+  isReadOnly: boolean;
+  onChange: (index: number, change: Partial<ColumnCard>) => void;
+}
+
+/** One column of the file: what stands in it and how it is read. */
+export const PlanRow = ({ card, suggestion, isAsking, isReadOnly, onChange }: Props) => {
+  const meaning = findMeaning(card.means);
+  const isUnused = card.means === KEPT;
+  const isOwn = suggestion !== undefined && suggestion.means !== card.means;
+  const change = (part: Partial<ColumnCard>) => onChange(card.index, part);
+  return (
+    <tr className={isAsking ? "bg-sel" : undefined}>
+      <th scope="row" className="max-w-44 truncate font-mono text-xs font-normal" title={card.header}>
+        {card.header}
+      </th>
+      <td className="max-w-52 truncate font-mono text-xs text-soft">
+        <Sample suggestion={suggestion} />
+      </td>
+      <td className="w-56">
+        <span className="flex items-center gap-1.5">
+          {isAsking ? (
+            <span className="text-mark">
+              <span aria-hidden="true">◆</span>
+              <span className="sr-only">Asks:</span>
+            </span>
+          ) : null}
+          <select
+            aria-label={`Meaning of ${card.header}`}
+            value={card.means}
+            disabled={isReadOnly}
+            className={`${BOX} ${isUnused ? "text-soft" : ""}`}
+            onChange={(event) => change({ means: event.target.value })}
+          >
+            <option value={KEPT}>Kept as text</option>
+            {MEANINGS.map(({ key, label }) => (
+              <option key={key} value={key}>
+                {label}
+              </option>
+            ))}
+          </select>
+        </span>
+      </td>
+      <td className="w-28">
+        {meaning?.kind === "number" ? (
+          <LateText
+            label={`Unit of ${card.header}`}
+            value={card.unit}
+            isOff={isReadOnly}
+            placeholder={meaning.unit === "" ? "none" : "unit?"}
+            list={unitListId(meaning.unit)}
+            onValue={(unit) => change({ unit })}
+          />
+        ) : (
+          <span className="px-2 text-soft">–</span>
+        )}
+      </td>
+      <td className="w-36">
+        {isUnused ? (
+          <span className="px-2 text-soft">–</span>
+        ) : (
+          <LateText
+            label={`Blank marks of ${card.header}, with semicolons between`}
+            value={card.blankMarks.join(`${BETWEEN} `)}
+            isOff={isReadOnly}
+            placeholder="empty"
+            onValue={(text) =>
+              change({
+                blankMarks: [
+                  ...new Set(
+                    text
+                      .split(BETWEEN)
+                      .map((t) => t.trim())
+                      .filter(Boolean),
+                  ),
+                ],
+              })
+            }
+          />
+        )}
+      </td>
+      <td className="max-w-56 truncate font-mono text-[11px] text-soft" title={suggestion?.because}>
+        {isOwn ? "chosen by hand" : suggestion?.because}
+      </td>
+    </tr>
+  );
+};
+
+const unitListId = (canonical: string): string => `units-of-${canonical.replace(/[^a-z0-9]/gi, "-")}`;
+
+/** Suggestions for the unit fields, once for all rows. */
+export const UnitLists = () => {
+  const units = [...new Set(MEANINGS.filter((m) => m.kind === "number").map((m) => m.unit))];
+  return units.map((unit) => (
+    <datalist key={unit} id={unitListId(unit)}>
+      {unitChoices(unit)
+        .filter((choice) => choice !== "")
+        .map((choice) => (
+          <option key={choice} value={choice} />
+        ))}
+    </datalist>
+  ));
+};
