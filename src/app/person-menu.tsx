@@ -29,13 +29,14 @@ export const PersonMenu = ({ programme, onHelp }: Props) => {
   const others = programmes.filter((p) => p.id !== programme?.id);
   return (
     <Menu
-      label={`${programme ? `${programme.name}, ` : ""}${person?.name ?? "menu"}`}
+      // What is seen comes first, so that speaking it finds the button.
+      label={`${programme ? `${programme.name} ` : ""}${initials(person?.name ?? "")}, ${person?.name ?? ""}`}
       trigger={
         <span className="flex items-center gap-3">
           {programme ? (
             <span className="hidden max-w-40 truncate text-soft sm:inline">{programme.name}</span>
           ) : null}
-          <span className="grid size-7 place-items-center rounded-full bg-blue text-[11px] text-sheet">
+          <span className="grid size-7 place-items-center rounded-full bg-blue text-[11px] text-paper">
             {initials(person?.name ?? "")}
           </span>
         </span>
