@@ -35,7 +35,7 @@ export const PersonMenu = ({ programme, onHelp }: Props) => {
         <span className="flex items-center gap-3">
           {programme ? (
             <span className="hidden max-w-40 truncate text-soft sm:inline">{programme.name}</span>
-          ) : null}
+          ) : null}{" "}
           <span className="grid size-7 place-items-center rounded-full bg-blue text-[11px] text-paper">
             {initials(person?.name ?? "")}
           </span>
