@@ -1,6 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import { useState } from "react";
-import { Link, useParams } from "react-router-dom";
+import { Link, useLocation, useParams } from "react-router-dom";
+import { z } from "zod";
 import type { ListMember, TargetList } from "#shared/api/lists.ts";
 import { ApiError } from "#src/api/client.ts";
 import { listOptions } from "#src/api/lists.ts";
@@ -37,16 +38,28 @@ const Head = ({ programmeId, list }: { programmeId: string; list: TargetList }) 
   </header>
 );
 
+/** What the making of the list had to say, where one comes from there. */
+const remarkOf = (state: unknown): string | null => {
+  const parsed = z.object({ remark: z.string() }).safeParse(state);
+  return parsed.success ? parsed.data.remark : null;
+};
+
 const Open = ({ programmeId, list }: { programmeId: string; list: TargetList }) => {
   const mayEdit = useCan()("list.edit");
   const [member, setMember] = useState<ListMember | null>(null);
+  const remark = remarkOf(useLocation().state);
   return (
     <main className="grid min-h-full xl:h-full xl:grid-cols-[minmax(0,1fr)_24rem]">
       <title>{`${list.name} · Shortlight`}</title>
       <div className="flex min-h-0 min-w-0 flex-col gap-4 px-5 py-5 sm:px-7">
         <Head programmeId={programmeId} list={list} />
+        {remark ? (
+          <p role="status" className="rounded bg-sel px-3 py-2">
+            {remark}
+          </p>
+        ) : null}
         <StateLedger list={list} />
-        <div className="grid min-h-0 grow gap-6 lg:grid-cols-[minmax(0,1.4fr)_minmax(0,1fr)] lg:grid-rows-[minmax(24rem,1fr)]">
+        <div className="grid min-h-0 grow gap-6 lg:grid-cols-[minmax(0,1fr)_24rem] lg:grid-rows-[minmax(24rem,1fr)]">
           <MembersCard programmeId={programmeId} list={list} openId={member?.id ?? null} onOpen={setMember} />
           <section
             aria-label="Where they are"

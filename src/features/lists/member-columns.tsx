@@ -5,15 +5,24 @@ import { MeritCell, ValueCell } from "#src/lib/star-cells.tsx";
 import type { GridColumn } from "#src/ui/grid/types.ts";
 import { MEMBER_LABELS, MEMBER_MARKS } from "./list-words.ts";
 
+const INSTRUMENT = ["r_min", "transits"];
 const STELLAR = ["g_mag", "teff", "radius", "distance", "hz_inner", "transit_probability"];
-const INSTRUMENT = ["transits", "r_min"];
+/** Room for a value with its error, px, by column; others are narrow. */
+const WIDTHS: Readonly<Record<string, number>> = {
+  r_min: 122,
+  teff: 104,
+  g_mag: 92,
+  distance: 126,
+  radius: 126,
+  hz_inner: 136,
+};
 
 const valueColumn = (column: Column): GridColumn<ListMember> => ({
   key: column.key,
   label: column.label,
   unit: column.unitLabel,
   description: column.description,
-  width: column.hasError ? 128 : 88,
+  width: WIDTHS[column.key] ?? 88,
   cell: (row) => <ValueCell column={column} row={row} />,
 });
 
@@ -22,7 +31,7 @@ export const memberColumns = (list: TargetList): GridColumn<ListMember>[] => [
   {
     key: "place",
     label: "#",
-    width: 60,
+    width: 52,
     isFrozen: true,
     description: "Place in the list",
     cell: (row) => <span className="text-faint">{count(row.place)}</span>,
@@ -30,7 +39,7 @@ export const memberColumns = (list: TargetList): GridColumn<ListMember>[] => [
   {
     key: "designation",
     label: "Star",
-    width: 128,
+    width: 116,
     isText: true,
     isFrozen: true,
     isRowHeader: true,
@@ -40,7 +49,7 @@ export const memberColumns = (list: TargetList): GridColumn<ListMember>[] => [
   {
     key: "state",
     label: "State",
-    width: 96,
+    width: 86,
     isText: true,
     description: "In, Reserve, Held or Out",
     cell: (row) => (
@@ -57,12 +66,12 @@ export const memberColumns = (list: TargetList): GridColumn<ListMember>[] => [
           label: "Merit",
           unit: "0–100",
           description: "Figure of merit, with the share of each term",
-          width: 158,
+          width: 150,
           cell: (row: ListMember) => <MeritCell row={row} terms={list.merit?.terms ?? []} />,
         },
       ]
     : []),
-  ...[...STELLAR, ...(list.card && list.campaign ? INSTRUMENT : [])].flatMap((key) => {
+  ...[...(list.card && list.campaign ? INSTRUMENT : []), ...STELLAR].flatMap((key) => {
     const column = findColumn(key);
     return column ? [valueColumn(column)] : [];
   }),

@@ -22,7 +22,7 @@ interface Props {
 export const MembersCard = ({ programmeId, list, openId, onOpen }: Props) => {
   const [columns] = useState(() => memberColumns(list));
   const [isGoingTo, setGoingTo] = useState(false);
-  const [goTo, setGoTo] = useState<number | null>(null);
+  const [goTo, setGoTo] = useState<{ row: number } | null>(null);
   const blocks = useBlocks<ListMember>({
     // The version moves with each change of a star, so that its row is read again.
     queryKey: [...membersKey(programmeId, list.id), list.version],
@@ -32,9 +32,9 @@ export const MembersCard = ({ programmeId, list, openId, onOpen }: Props) => {
   return (
     <section
       aria-label="Stars of the list"
-      className="flex h-[70dvh] min-h-80 flex-col overflow-hidden rounded border border-rule bg-sheet lg:h-auto"
+      className="flex h-[70dvh] min-h-80 flex-col overflow-hidden rounded border border-rule lg:h-auto"
     >
-      <div className="px-4 pt-3 pb-2">
+      <div className="bg-sheet px-4 pt-3 pb-2">
         <h2 className="text-[21px]">
           {count(list.stars)} {list.stars === 1 ? "star" : "stars"}
         </h2>
@@ -67,7 +67,7 @@ export const MembersCard = ({ programmeId, list, openId, onOpen }: Props) => {
         count={list.stars}
         onClose={() => setGoingTo(false)}
         onGo={(row) => {
-          setGoTo(row);
+          setGoTo({ row });
           setGoingTo(false);
         }}
       />

@@ -19,7 +19,7 @@ const LOOKS = {
 
 /** The states a list goes through, and where it stands. */
 export const StateLedger = ({ list }: { list: TargetList }) => {
-  const at = ORDER.findIndex((state) => state === list.state);
+  const at = (ORDER as readonly TargetList["state"][]).indexOf(list.state);
   const hasEnded = ENDED.includes(list.state);
   return (
     <ol aria-label="State of the list" className="flex flex-wrap gap-x-4 gap-y-3">

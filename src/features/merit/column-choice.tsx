@@ -12,7 +12,12 @@ const GROUPS: Readonly<Record<ColumnGroup, string>> = {
 };
 
 /** Unit in which a formula reckons, where it is one column; what a person types for the shape is in it. */
-export const unitOf = (expression: string): string => NUMERIC_UNITS.get(expression.trim()) ?? "";
+export const unitOf = (expression: string): string => {
+  const name = expression.trim();
+  const column = NUMERIC_UNITS.get(name) ? findColumn(name.replace(/_err$/, "")) : undefined;
+  // A unit is shown in the stored scale: a column that the table shows in percent reckons in fractions.
+  return column && column.shownFactor === undefined ? column.unitLabel : "";
+};
 
 /** Says in which unit the shape's figures are, where the table shows another. */
 export const unitHint = (expression: string): string | undefined => {

@@ -156,7 +156,12 @@ export const MeritEditor = (props: Props) => {
               Save under another name
             </Button>
           ) : null}
-          <Button type="submit" kind="main" isBusy={form.isBusy} disabled={!isChanged || isOvertaken}>
+          <Button
+            type="submit"
+            kind="main"
+            isBusy={form.isBusy}
+            disabled={(merit !== null && !isChanged) || isOvertaken}
+          >
             {merit ? `Save as version ${merit.number + 1}` : "Save figure of merit"}
           </Button>
         </div>

@@ -100,6 +100,11 @@ export const MeritPage = () => {
             <>
               <h1 className="text-[32px] wrap-anywhere">{title}</h1>
               {merit ? <SavedBy merit={merit} /> : null}
+              {mayEdit ? null : (
+                <p className="mt-1 text-soft">
+                  You can read it. Changing it needs the Scientist or the Lead role.
+                </p>
+              )}
               <div className="mt-5">
                 <MeritEditor
                   key={`${merit?.id ?? NEW} ${opening}`}

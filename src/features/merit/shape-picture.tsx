@@ -1,5 +1,4 @@
 import type { Shape } from "#shared/api/merits.ts";
-import { withoutError } from "#shared/format/numbers.ts";
 import { shapeValue } from "#shared/merit/score.ts";
 
 const WIDTH = 240;
@@ -38,7 +37,8 @@ export const drawnRange = (shape: Shape): readonly [number, number] => {
   return [shape.kind === "loss" ? 0 : from, high + MARGIN * span];
 };
 
-const figure = (value: number): string => withoutError(value, 6);
+/** A figure as it was typed, cut at five digits. */
+const figure = (value: number): string => String(Number(value.toPrecision(5))).replace("-", "\u2212");
 
 /** The shape in words, for those who do not see it. */
 export const shapeWords = (shape: Shape): string => {
@@ -71,9 +71,9 @@ export const ShapePicture = ({ shape, unit }: { shape: Shape | null; unit: strin
     const value = low + ((high - low) * i) / STEPS;
     return `${x(value).toFixed(1)},${y(shapeValue(shape, value)).toFixed(1)}`;
   });
-  const ticks = [...new Set(turns(shape))].filter(
-    (_, i, all) => i === 0 || i === all.length - 1 || all.length <= 3,
-  );
+  const marks = [...new Set(turns(shape))].sort((a, b) => a - b);
+  // Only the ends of a long table: more would run into one another.
+  const ticks = marks.length <= 3 ? marks : [marks[0] ?? 0, marks.at(-1) ?? 0];
   return (
     <svg
       viewBox={`0 0 ${WIDTH} ${HEIGHT}`}

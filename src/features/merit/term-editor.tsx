@@ -42,14 +42,14 @@ const refusalOf = (expression: string): string | undefined => {
 const TermHead = ({ draft, index, count, share, color, disabled, onMove, onRemove }: Props) => (
   <div className="mb-3 flex flex-wrap items-center gap-2">
     <span aria-hidden="true" className="size-3 flex-none" style={{ background: color }} />
-    <h3 className="grow font-medium">
+    <h2 className="grow font-sans! text-sm font-medium">
       {index + 1}. {draft.label.trim() || "New term"}
       {share === null ? null : (
         <span className="ml-2 font-mono text-xs font-normal text-soft">
           {(100 * share).toFixed(0)} % of the weight
         </span>
       )}
-    </h3>
+    </h2>
     {disabled ? null : (
       <>
         <Button aria-label={`Move term ${index + 1} up`} disabled={index === 0} onClick={() => onMove(-1)}>
@@ -111,7 +111,6 @@ export const TermEditor = (props: Props) => {
               )}
             </Field>
           </div>
-          <ShapeFields {...{ draft, path, fields, disabled, onChange }} unit={unitOf(draft.expression)} />
           <div className="flex flex-wrap items-start gap-x-6 gap-y-3">
             <WeightInput
               name={`${path}.weight`}
@@ -120,20 +119,25 @@ export const TermEditor = (props: Props) => {
               disabled={disabled}
               onChange={(weight) => onChange({ weight })}
             />
-            <Select
-              label="A blank value"
-              name={`${path}.blanks`}
-              disabled={disabled}
-              value={draft.blanks}
-              onChange={(event) => onChange({ blanks: event.target.value as Term["blanks"] })}
-            >
-              {Object.entries(BLANKS).map(([rule, words]) => (
-                <option key={rule} value={rule}>
-                  {words}
-                </option>
-              ))}
-            </Select>
-            <div className="pt-7">
+            <ShapeFields {...{ draft, path, fields, disabled, onChange }} unit={unitOf(draft.expression)} />
+          </div>
+          <div className="flex flex-wrap items-end gap-x-6 gap-y-2">
+            <div className="w-56">
+              <Select
+                label="A blank value"
+                name={`${path}.blanks`}
+                disabled={disabled}
+                value={draft.blanks}
+                onChange={(event) => onChange({ blanks: event.target.value as Term["blanks"] })}
+              >
+                {Object.entries(BLANKS).map(([rule, words]) => (
+                  <option key={rule} value={rule}>
+                    {words}
+                  </option>
+                ))}
+              </Select>
+            </div>
+            <div className="pb-1">
               <Checkbox
                 label="Zero here makes the whole merit zero"
                 disabled={disabled}
