@@ -8,7 +8,7 @@ import type {
   StarWindow,
   ViewSummary,
 } from "#shared/api/stars.ts";
-import { type ViewSpec, viewToParams } from "#shared/catalogue/view.ts";
+import { EMPTY_VIEW, type ViewSpec, viewToParams } from "#shared/catalogue/view.ts";
 import { get } from "./client.ts";
 import { programmeKeys } from "./programmes.ts";
 
@@ -26,6 +26,9 @@ const stars = (
 /** Names a view in query keys: two views that ask the same are the same. */
 export const viewKey = (view: ViewSpec): string => viewToParams(view).toString();
 
+/** What does not depend on the order is not read again for another one. */
+const unordered = (view: ViewSpec): ViewSpec => ({ ...view, sort: EMPTY_VIEW.sort });
+
 export const catalogueOptions = (programmeId: string) =>
   queryOptions({
     queryKey: programmeKeys.part(programmeId, "catalogue"),
@@ -35,12 +38,7 @@ export const catalogueOptions = (programmeId: string) =>
 
 export const summaryOptions = (programmeId: string, view: ViewSpec) =>
   queryOptions({
-    queryKey: programmeKeys.part(
-      programmeId,
-      "stars",
-      "summary",
-      viewKey({ ...view, sort: { key: "designation", direction: "asc" } }),
-    ),
+    queryKey: programmeKeys.part(programmeId, "stars", "summary", viewKey(unordered(view))),
     queryFn: async ({ signal }) =>
       (await get<{ summary: ViewSummary }>(stars(programmeId, "summary", view), signal)).summary,
     placeholderData: keepPreviousData,
@@ -65,7 +63,13 @@ export const readWindow = async (
 
 export const histogramsOptions = (programmeId: string, view: ViewSpec, columns: readonly string[]) =>
   queryOptions({
-    queryKey: programmeKeys.part(programmeId, "stars", "histograms", viewKey(view), columns.join()),
+    queryKey: programmeKeys.part(
+      programmeId,
+      "stars",
+      "histograms",
+      viewKey(unordered(view)),
+      columns.join(),
+    ),
     queryFn: async ({ signal }) =>
       (
         await get<{ histograms: Histogram[] }>(

@@ -32,7 +32,7 @@ export const MembersCard = ({ programmeId, list, openId, onOpen }: Props) => {
   return (
     <section
       aria-label="Stars of the list"
-      className="flex h-[70dvh] min-h-80 flex-col overflow-hidden rounded border border-rule lg:h-auto"
+      className="flex h-[70dvh] min-h-80 flex-col overflow-hidden rounded border border-rule 2xl:h-auto"
     >
       <div className="bg-sheet px-4 pt-3 pb-2">
         <h2 className="text-[21px]">

@@ -8,7 +8,8 @@ interface Props {
   programmeId: string;
   view: ViewSpec;
   text: string;
-  onOpen: (starId: string) => void;
+  /** `place` from 1; null where a cut drops the star. */
+  onOpen: (starId: string, place: number | null) => void;
   onClose: () => void;
 }
 
@@ -36,7 +37,7 @@ export const FindResult = ({ programmeId, view, text, onOpen, onClose }: Props) 
                 <li key={match.id}>
                   <button
                     type="button"
-                    onClick={() => onOpen(match.id)}
+                    onClick={() => onOpen(match.id, match.place)}
                     className="font-mono underline decoration-edge underline-offset-4"
                   >
                     {match.designation}

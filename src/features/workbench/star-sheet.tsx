@@ -1,4 +1,5 @@
 import { useQuery } from "@tanstack/react-query";
+import { useEffect, useRef } from "react";
 import type { StarSheet as Sheet } from "#shared/api/stars.ts";
 import { blankReason } from "#shared/catalogue/blank-reasons.ts";
 import { type Column, errorKey, findColumn } from "#shared/catalogue/columns.ts";
@@ -7,6 +8,7 @@ import type { ViewSpec } from "#shared/catalogue/view.ts";
 import { cellText, count, fixed } from "#shared/format/numbers.ts";
 import { declinationText, rightAscensionText } from "#shared/format/sexagesimal.ts";
 import { sheetOptions } from "#src/api/stars.ts";
+import { Button } from "#src/ui/button.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
 import { Loading } from "#src/ui/loading.tsx";
 import { Pill } from "#src/ui/pill.tsx";
@@ -14,35 +16,35 @@ import { SectionTitle } from "#src/ui/section-title.tsx";
 import { ReachPicture } from "./reach-picture.tsx";
 import { TransitPicture } from "./transit-picture.tsx";
 
-/** What the sheet tells of a star, in order. */
-const TOLD = [
-  "distance",
-  "teff",
-  "radius",
-  "mass",
-  "luminosity",
-  "hz_inner",
-  "hz_outer",
-  "earth_distance",
-  "earth_period",
-  "transit_probability",
-  "transit_duration",
-  "earth_depth",
-  "noise_1h",
-  "transits",
-  "r_min",
+/** What the sheet tells of a star, in order, in words that need no key. */
+const TOLD: readonly (readonly [key: string, words: string])[] = [
+  ["distance", "Distance"],
+  ["teff", "Effective temperature"],
+  ["radius", "Radius"],
+  ["mass", "Mass"],
+  ["luminosity", "Luminosity"],
+  ["hz_inner", "Habitable zone from"],
+  ["hz_outer", "Habitable zone to"],
+  ["earth_distance", "Earth's insolation at"],
+  ["earth_period", "Period there"],
+  ["transit_probability", "Transit probability there"],
+  ["transit_duration", "Transit duration there"],
+  ["earth_depth", "Depth of 1 R⊕, no limb darkening"],
+  ["noise_1h", "Noise in one hour"],
+  ["transits", "Transits in the campaign"],
+  ["r_min", "Smallest planet found there"],
 ];
 
 const unitOf = (column: Column): string => (column.unitLabel === "–" ? "" : ` ${column.unitLabel}`);
 
-const Quantity = ({ column, star }: { column: Column; star: Sheet }) => {
+const Quantity = ({ column, words, star }: { column: Column; words: string; star: Sheet }) => {
   const value = star.values[column.key];
   const reason = value === undefined ? blankReason(star.blanks[column.key] ?? 1) : null;
   if (reason && star.blanks[column.key] === undefined && column.stage === "instrument") return null;
   return (
     <>
       <dt className="text-soft" title={column.description}>
-        {column.label}
+        {words}
       </dt>
       <dd className="text-right font-mono">
         {value === undefined ? (
@@ -139,18 +141,7 @@ const Dropped = ({ star, view }: { star: Sheet; view: ViewSpec }) =>
     </div>
   );
 
-interface Props {
-  programmeId: string;
-  view: ViewSpec;
-  starId: string;
-  onClose: () => void;
-}
-
-/** Everything on one star: what is known, how well, what the instrument would see, and where each value comes from. */
-export const StarSheet = ({ programmeId, view, starId, onClose }: Props) => {
-  const { data: star, error, isPending, refetch } = useQuery(sheetOptions(programmeId, view, starId));
-  if (isPending) return <Loading what="Reading the star" />;
-  if (error || !star) return <ErrorNotice error={error} onRetry={() => void refetch()} />;
+const Told = ({ star, view, onClose }: { star: Sheet; view: ViewSpec; onClose: () => void }) => {
   return (
     <article aria-label={`Star ${star.designation}`} className="p-5">
       <div className="flex items-baseline justify-between gap-3">
@@ -171,9 +162,9 @@ export const StarSheet = ({ programmeId, view, starId, onClose }: Props) => {
       <Dropped star={star} view={view} />
       <Position star={star} />
       <dl className="mt-3 grid grid-cols-[1fr_auto] gap-x-3 gap-y-1 text-[13px]">
-        {TOLD.flatMap((key) => {
+        {TOLD.flatMap(([key, words]) => {
           const column = findColumn(key);
-          return column ? [<Quantity key={key} column={column} star={star} />] : [];
+          return column ? [<Quantity key={key} column={column} words={words} star={star} />] : [];
         })}
       </dl>
       <SectionTitle>A transit as this instrument would see it</SectionTitle>
@@ -183,8 +174,41 @@ export const StarSheet = ({ programmeId, view, starId, onClose }: Props) => {
       <Origins star={star} />
       <p className="mt-5 border-t border-hair pt-3 text-xs text-soft">
         Chance of transit is geometric; it says nothing about whether planets exist. Habitable zone is a model
-        range of received light, not a promise. RUWE near 1 does not prove a single star.
+        range of received light, not a promise. Radius recipe: about 3 % scatter, dwarfs only. RUWE near 1
+        does not prove a single star.
       </p>
     </article>
+  );
+};
+
+interface Props {
+  programmeId: string;
+  view: ViewSpec;
+  starId: string;
+  onClose: () => void;
+}
+
+/** Everything on one star: what is known, how well, what the instrument would see, and where each value comes from. */
+export const StarSheet = ({ programmeId, view, starId, onClose }: Props) => {
+  const { data: star, error, isPending, refetch } = useQuery(sheetOptions(programmeId, view, starId));
+  const place = useRef<HTMLDivElement>(null);
+  // Where the sheet lies under the table, opening a star leads to it.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: another star leads there again
+  useEffect(() => {
+    if (!window.matchMedia("(min-width: 64rem)").matches) place.current?.scrollIntoView({ block: "start" });
+  }, [starId]);
+  return (
+    <div ref={place}>
+      {isPending ? <Loading what="Reading the star" /> : null}
+      {error ? (
+        <div className="p-5">
+          <ErrorNotice error={error} onRetry={() => void refetch()} />
+          <Button className="mt-3" onClick={onClose}>
+            Close
+          </Button>
+        </div>
+      ) : null}
+      {star ? <Told star={star} view={view} onClose={onClose} /> : null}
+    </div>
   );
 };

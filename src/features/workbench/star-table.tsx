@@ -19,6 +19,7 @@ import { ListDialog } from "./list-dialog.tsx";
 import { PlainPages } from "./plain-pages.tsx";
 import { starColumns } from "./star-columns.tsx";
 import { TableFooter } from "./table-footer.tsx";
+import { usePlainPages } from "./use-plain-pages.ts";
 import type { Workbench } from "./use-workbench.ts";
 
 interface Props {
@@ -27,7 +28,11 @@ interface Props {
   summary: ViewSummary;
   /** A newer answer is on its way; what is shown still holds for the question before. */
   isStale: boolean;
+  /** The server makes the table ready for this card, campaign and edition. */
+  isPreparing: boolean;
   failure: Error | null;
+  goTo: { row: number } | null;
+  onGoTo: (row: number) => void;
 }
 
 const labelOf = (key: string): string => (key === "merit" ? "merit" : (findColumn(key)?.label ?? key));
@@ -59,14 +64,22 @@ const NoStarPasses = ({ summary }: { summary: ViewSummary }) => {
 };
 
 /** The sentence, the table and what stands under it. */
-export const StarTable = ({ programmeId, workbench, summary, isStale, failure }: Props) => {
+export const StarTable = ({
+  programmeId,
+  workbench,
+  summary,
+  isStale,
+  isPreparing,
+  failure,
+  goTo,
+  onGoTo,
+}: Props) => {
   const { view, screen, ask, show } = workbench;
   const can = useCan();
   const [dialog, setDialog] = useState<"columns" | "list" | "row" | null>(null);
-  const [isPlain, setPlain] = useState(false);
-  const [goTo, setGoTo] = useState<number | null>(null);
+  const [isPlain, setPlain] = usePlainPages();
   const [range, setRange] = useState({ first: 0, last: 0 });
-  const histogramKeys = [...screen.columns.filter((key) => findColumn(key)?.kind !== "text")];
+  const histogramKeys = screen.columns.filter((key) => findColumn(key)?.kind !== "text");
   const { data: histograms = [] } = useQuery(histogramsOptions(programmeId, view, histogramKeys));
   const read = useCallback(
     (offset: number, limit: number, signal: AbortSignal) =>
@@ -81,8 +94,8 @@ export const StarTable = ({ programmeId, workbench, summary, isStale, failure }:
   );
   const { onRange } = blocks;
   const tellRange = useCallback(
-    (first: number, last: number) => {
-      onRange(first, last);
+    (first: number, last: number, focused: number) => {
+      onRange(first, last, focused);
       setRange({ first, last });
     },
     [onRange],
@@ -125,7 +138,23 @@ export const StarTable = ({ programmeId, workbench, summary, isStale, failure }:
           <ErrorNotice error={failure ?? blocks.error} />
         </div>
       ) : null}
-      <div className={`flex min-h-0 grow flex-col border-t border-rule ${isStale ? "opacity-60" : ""}`}>
+      {isPreparing ? (
+        <p role="status" className="px-5 pb-3 text-soft">
+          Preparing the table for this question; what is shown answers the one before…
+        </p>
+      ) : null}
+      {isPlain ? null : (
+        <button
+          type="button"
+          onClick={() => setPlain(true)}
+          className="sr-only focus:not-sr-only focus:px-5 focus:pb-2 focus:text-left focus:underline"
+        >
+          Show as plain pages instead of a grid
+        </button>
+      )}
+      <div
+        className={`flex min-h-0 grow flex-col border-t border-rule ${isStale || blocks.isOld ? "opacity-60" : ""}`}
+      >
         {summary.count === 0 ? (
           <NoStarPasses summary={summary} />
         ) : isPlain ? (
@@ -135,6 +164,8 @@ export const StarTable = ({ programmeId, workbench, summary, isStale, failure }:
             total={summary.count}
             label={label}
             columns={columns}
+            sort={view.sort}
+            onSort={sortBy}
             onOpen={openStar}
           />
         ) : (
@@ -190,7 +221,7 @@ export const StarTable = ({ programmeId, workbench, summary, isStale, failure }:
         <GoToRowDialog
           rows={summary.count}
           onGo={(index) => {
-            setGoTo(index);
+            onGoTo(index);
             setDialog(null);
           }}
           onClose={() => setDialog(null)}

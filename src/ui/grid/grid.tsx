@@ -35,10 +35,10 @@ interface Props<Row> {
   onOpen: (row: Row) => void;
   /** Key of the row that is open beside the grid. */
   openKey: string | null;
-  /** Tells which rows are on screen, so that they can be read. */
-  onRange: (first: number, last: number) => void;
-  /** A row to bring into view when it changes, from 0. */
-  goTo?: number | null;
+  /** Tells which rows are on screen and which holds the focus (−1: the head), so that they can be read. */
+  onRange: (first: number, last: number, focused: number) => void;
+  /** A row to go to, from 0; another object goes there again. */
+  goTo?: { readonly row: number } | null;
   onGoToRow: () => void;
   /** A single letter pressed inside the grid, in lower case. */
   onLetter?: (letter: string) => void;
@@ -87,17 +87,20 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
   const scroller = useRef<HTMLDivElement>(null);
   const [active, setActive] = useState<CellPlace>({ row: -1, column: 0 });
   const wantsFocus = useRef(false);
-  const { virtualizer, track, place } = useRowWindow({
+  const rowsNow = useRef(count);
+  rowsNow.current = count;
+  // A shorter result must not leave the focus on a row that is gone.
+  const activeRow = Math.min(active.row, count - 1);
+  const { virtualizer, track, place, visible } = useRowWindow({
     rows: count,
     rowHeight,
     headHeight: HEAD_HEIGHT,
     scroller,
-    focusedRow: active.row,
+    focusedRow: activeRow,
   });
   const shown = virtualizer.getVirtualItems();
-  const first = shown[0]?.index ?? 0;
-  const last = shown.at(-1)?.index ?? 0;
-  useEffect(() => onRange(first, last), [first, last, onRange]);
+  const { first, last } = visible;
+  useEffect(() => onRange(first, last, activeRow), [first, last, activeRow, onRange]);
 
   const loaded = shown.flatMap(({ index }) => {
     const row = rowAt(index);
@@ -119,8 +122,15 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
   });
   const modelRows = new Map(table.getRowModel().rows.map((row) => [row.original.index, row]));
 
-  // A shorter result must not leave the focus on a row that is gone.
-  const activeRow = Math.min(active.row, count - 1);
+  // Asked while the row is still there: once it is gone, the browser has forgotten that it held the focus.
+  const hadFocus = scroller.current?.contains(document.activeElement) ?? false;
+  useEffect(() => {
+    if (active.row <= activeRow) return;
+    setActive((now) => ({ ...now, row: activeRow }));
+    if (!hadFocus) return;
+    wantsFocus.current = true;
+    announce(`The row is no longer in the table. Row ${activeRow + 1} of ${count}`);
+  }, [active.row, activeRow, count, hadFocus]);
   useEffect(() => {
     if (!wantsFocus.current) return;
     const cell = scroller.current?.querySelector<HTMLElement>(
@@ -132,10 +142,20 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
     cell.scrollIntoView({ inline: "nearest", block: "nearest" });
   });
   useEffect(() => {
-    if (goTo === null || goTo < 0 || goTo >= count) return;
-    virtualizer.scrollToIndex(goTo, { align: "center" });
-    setActive((now) => ({ ...now, row: goTo }));
-  }, [goTo, count, virtualizer]);
+    if (goTo === null) return;
+    const row = Math.max(0, Math.min(rowsNow.current - 1, goTo.row));
+    virtualizer.scrollToIndex(row, { align: "center" });
+    setActive((now) => ({ ...now, row }));
+    wantsFocus.current = true;
+  }, [goTo, virtualizer]);
+  const order = sort ? `${sort.key} ${sort.direction}` : "";
+  const shownOrder = useRef(order);
+  // Another order begins at its best row.
+  useEffect(() => {
+    if (shownOrder.current === order) return;
+    shownOrder.current = order;
+    virtualizer.scrollToOffset(0);
+  }, [order, virtualizer]);
 
   const moveTo = (to: CellPlace) => {
     wantsFocus.current = true;

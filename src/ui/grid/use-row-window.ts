@@ -5,7 +5,8 @@ import { scrollScale } from "./scroll-scale.ts";
 /** Rows that one notch of a wheel moves on a scaled track. */
 const ROWS_PER_NOTCH = 3;
 const NOTCH_PX = 100;
-const OVERSCAN = 12;
+/** Rows kept ready above and below the window. */
+export const OVERSCAN = 12;
 
 interface Options {
   rows: number;
@@ -23,6 +24,8 @@ export interface RowWindow {
   track: number;
   /** Where to draw a row that starts at that offset of the rows, px on the track. */
   place: (start: number) => number;
+  /** First and last row that can be seen, at least in part. */
+  visible: { first: number; last: number };
 }
 
 /** Which rows are on screen, for any number of rows. */
@@ -99,7 +102,9 @@ export const useRowWindow = ({ rows, rowHeight, headHeight, scroller, focusedRow
       if (factor === 1 || event.deltaY === 0 || event.shiftKey || event.ctrlKey) return;
       event.preventDefault();
       const most = rows * rowHeight - (element.clientHeight - headHeight);
-      const by = (event.deltaY / NOTCH_PX) * ROWS_PER_NOTCH * rowHeight;
+      const notches =
+        event.deltaMode === WheelEvent.DOM_DELTA_PIXEL ? event.deltaY / NOTCH_PX : Math.sign(event.deltaY);
+      const by = notches * ROWS_PER_NOTCH * rowHeight;
       goTo(element, Math.max(0, Math.min(most, offsetNow(element) + by)));
     };
     element.addEventListener("wheel", onWheel, { passive: false });
@@ -110,5 +115,12 @@ export const useRowWindow = ({ rows, rowHeight, headHeight, scroller, focusedRow
     const { factor } = scale.current;
     return factor === 1 ? start : start - exact.current.offset + exact.current.scrollTop;
   };
-  return { virtualizer, track: scale.current.track, place };
+  const offset = virtualizer.scrollOffset ?? 0;
+  const height = Math.max(rowHeight, (virtualizer.scrollRect?.height ?? 0) - headHeight);
+  const lastRow = Math.max(0, rows - 1);
+  const visible = {
+    first: Math.min(lastRow, Math.floor(offset / rowHeight)),
+    last: Math.min(lastRow, Math.ceil((offset + height) / rowHeight) - 1),
+  };
+  return { virtualizer, track: scale.current.track, place, visible };
 };
