@@ -1,7 +1,7 @@
 import { useQuery } from "@tanstack/react-query";
 import { useState } from "react";
 import type { Campaign } from "#shared/api/instruments.ts";
-import { count, withoutError } from "#shared/format/numbers.ts";
+import { count, fixed, plainNumber } from "#shared/format/numbers.ts";
 import { campaignsOptions } from "#src/api/instruments.ts";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
@@ -11,11 +11,11 @@ import { CampaignDialog } from "./campaign-dialog.tsx";
 
 const inWords = ({ settings }: Campaign): string =>
   [
-    `${withoutError(settings.lengthDays, 1)} d`,
-    `${withoutError(100 * settings.duty, 1)} % of the time`,
+    `${plainNumber(settings.lengthDays)} d`,
+    `${fixed(100 * settings.duty, 0)} % of the time`,
     settings.leastTransits === 1 ? "1 transit" : `${count(settings.leastTransits)} transits`,
-    `S/N ${withoutError(settings.snrLimit, 1)}`,
-    settings.statistic,
+    `S/N ${plainNumber(settings.snrLimit)}`,
+    settings.statistic === "boxcar" ? "box" : settings.statistic,
   ].join(" · ");
 
 /** The campaigns of the programme: how long is observed, and what counts as found. */

@@ -8,6 +8,7 @@ import { Button } from "#src/ui/button.tsx";
 import { Form } from "#src/ui/form.tsx";
 import { announce } from "#src/ui/live-region.tsx";
 import { Pill } from "#src/ui/pill.tsx";
+import { SectionTitle } from "#src/ui/section-title.tsx";
 import { Campaigns } from "./campaigns.tsx";
 import {
   type CardDraft,
@@ -165,17 +166,19 @@ export const CardEditor = (props: Props) => {
           ) : null}
         </Form>
       </section>
-      <section aria-label="Noise" className="min-w-0 p-5 xl:px-7">
+      <section aria-label="Noise" className="min-w-0 p-5 xl:sticky xl:top-0 xl:self-start xl:px-7">
         <Meaning draft={form.values} magnitude={magnitude} text={text} onText={setText} />
       </section>
-      <aside className="border-rule bg-sheet p-5 xl:border-l" aria-label="Precision and campaigns">
-        {settings ? <PrecisionTable card={settings} magnitude={magnitude} /> : null}
-        <Campaigns programmeId={programmeId} />
-        <h2 className="mt-8 text-[11px] font-semibold tracking-[0.09em] text-soft uppercase">Caution</h2>
-        <p className="mt-1 text-[13px] text-soft">
-          Estimate. The observatory's own tools and rules decide where a telescope may point and how bright a
-          star may be.
-        </p>
+      <aside className="border-rule bg-sheet xl:border-l" aria-label="Precision and campaigns">
+        <div className="p-5 xl:sticky xl:top-0">
+          {settings ? <PrecisionTable card={settings} magnitude={magnitude} /> : null}
+          <Campaigns programmeId={programmeId} />
+          <SectionTitle>Caution</SectionTitle>
+          <p className="text-[13px] text-soft">
+            Estimate. The observatory's own tools and rules decide where a telescope may point and how bright
+            a star may be.
+          </p>
+        </div>
       </aside>
     </main>
   );

@@ -42,8 +42,7 @@ const Passband = ({ form, isReadOnly }: Props) => (
     <Select
       label="Magnitude from"
       name="passband"
-      isInline
-      unit=""
+      hint="The column that holds a star's magnitude in the instrument's passband."
       disabled={isReadOnly}
       value={form.values.passband}
       onChange={(event) => form.set({ passband: event.target.value })}
@@ -58,8 +57,7 @@ const Passband = ({ form, isReadOnly }: Props) => (
       <Select
         label="Photons in"
         name="photonBand"
-        isInline
-        unit=""
+        hint="The band whose photons the detector counts."
         disabled={isReadOnly}
         value={form.values.photonBand}
         onChange={(event) => form.set({ photonBand: event.target.value })}
@@ -112,11 +110,9 @@ export const CardFields = ({ form, isReadOnly }: Props) => (
         </option>
       ))}
     </Select>
-    <div className="flex flex-col gap-2">
-      <Passband form={form} isReadOnly={isReadOnly} />
-    </div>
+    <Passband form={form} isReadOnly={isReadOnly} />
     {GROUPS[form.values.model].map(({ title, fields }) => (
-      <div key={title}>
+      <div key={title} className="-mt-3">
         <SectionTitle>{title}</SectionTitle>
         <div className="flex flex-col gap-2">
           {fields.map((field) => (

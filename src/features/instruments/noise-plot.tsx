@@ -5,7 +5,7 @@ import { brightestUsable, noiseParts } from "#shared/science/noise.ts";
 import { type Axes, axesOf, curve, magnitudeTicks, noiseTicks, PARTS, spread } from "./noise-series.ts";
 import { useWidth } from "./use-width.ts";
 
-const HEIGHT = 480;
+const HEIGHT = 560;
 const TOP = 30;
 const BOTTOM = 44;
 const LEFT = 62;

@@ -44,7 +44,7 @@ export const PrecisionTable = ({ card, magnitude }: { card: CardSettings; magnit
   const isDetector = card.model === "detector";
   const rows = isDetector ? byAperture(card, magnitude) : byMagnitude(card, magnitude);
   const what = isDetector
-    ? `Photon noise alone, ppm at magnitude ${fixed(magnitude, 1)}, this passband and duty of exposure.`
+    ? `Photon noise alone, ppm at magnitude ${fixed(magnitude, 1)}, this passband, exposed as this card does.`
     : "Photon noise alone, ppm, by magnitude.";
   return (
     <section aria-labelledby="precision-title">
