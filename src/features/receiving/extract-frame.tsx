@@ -49,7 +49,7 @@ export const ExtractFrame = ({ extract, planNote, aside, children }: Props) => {
           </p>
           {extract.origin ? <p className="mt-1 wrap-anywhere">Origin: {extract.origin}</p> : null}
           {isDeletable && can("extract.edit") ? (
-            <Button kind="plain" className="mt-1 px-0" onClick={() => setDeleting(true)}>
+            <Button kind="plain" className="mt-1 px-0!" onClick={() => setDeleting(true)}>
               Delete extract
             </Button>
           ) : null}

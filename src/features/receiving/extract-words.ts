@@ -44,3 +44,6 @@ export const questionsLeft = (findings: readonly Finding[]): string => {
   if (open === 0) return "nothing is open";
   return open === 1 ? "1 question left" : `${count(open)} questions left`;
 };
+
+/** A Julian year as it is usually written: 2016.0. */
+export const epochText = (year: number): string => (Number.isInteger(year) ? year.toFixed(1) : String(year));

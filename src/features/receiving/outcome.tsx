@@ -10,6 +10,7 @@ import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
 import { Moment } from "#src/ui/moment.tsx";
+import { epochText } from "./extract-words.ts";
 import { meaningLabel } from "./plan-row.tsx";
 import { RowSum } from "./row-sum.tsx";
 import { WithdrawDialog } from "./withdraw-dialog.tsx";
@@ -40,7 +41,7 @@ const Facts = ({ extract }: { extract: Extract }) => (
     {extract.plan?.epoch == null ? null : (
       <>
         <dt>Epoch of positions</dt>
-        <dd className="font-mono">{extract.plan.epoch}</dd>
+        <dd className="font-mono">{epochText(extract.plan.epoch)}</dd>
       </>
     )}
   </dl>

@@ -1,6 +1,7 @@
 import type { ColumnCard, ExtractPreview, Finding, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning } from "#shared/catalogue/header-spellings.ts";
 import { conversionTo } from "#shared/units/units.ts";
+import { epochText } from "./extract-words.ts";
 
 /** Cards as the file itself suggests them. */
 export const suggestedColumns = (preview: ExtractPreview): ColumnCard[] =>
@@ -90,7 +91,7 @@ export const givenAnswers = (plan: ReadingPlan): Given[] => {
   if (plan.epoch !== null)
     given.push({
       key: "epoch",
-      text: `Positions are of ${Number.isInteger(plan.epoch) ? plan.epoch.toFixed(1) : plan.epoch}.`,
+      text: `Positions are of ${epochText(plan.epoch)}.`,
       again: { ...plan, epoch: null },
     });
   for (const card of plan.columns)

@@ -1,4 +1,5 @@
-import type { ColumnCard, ColumnSuggestion } from "#shared/api/extracts.ts";
+import { useState } from "react";
+import type { ColumnCard, ColumnSuggestion, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning, KEPT, MEANINGS } from "#shared/catalogue/header-spellings.ts";
 import { unitChoices } from "#shared/units/units.ts";
 
@@ -47,16 +48,56 @@ const LateText = (props: {
   />
 );
 
+/**
+ * What the column means. A wide file has thousands of these, so each holds all its choices only once a person comes
+ * near it.
+ */
+const MeaningChoice = (props: {
+  header: string;
+  means: string;
+  isOff: boolean;
+  onMeans: (means: string) => void;
+}) => {
+  const [isNear, setNear] = useState(false);
+  const comeNear = () => setNear(true);
+  const choices = isNear ? [KEPT, ...MEANINGS.map((m) => m.key)] : [props.means];
+  return (
+    <select
+      aria-label={`Meaning of ${props.header}`}
+      value={props.means}
+      disabled={props.isOff}
+      className={`${BOX} ${props.means === KEPT ? "text-soft" : ""}`}
+      onFocus={comeNear}
+      onPointerEnter={comeNear}
+      onPointerDown={comeNear}
+      onChange={(event) => props.onMeans(event.target.value)}
+    >
+      {choices.map((key) => (
+        <option key={key} value={key}>
+          {meaningLabel(key)}
+        </option>
+      ))}
+    </select>
+  );
+};
+
+/** What stands in an empty unit field; the unit of RA may be answered as a question instead. */
+const unitHint = (card: ColumnCard, canonical: string, raUnit: ReadingPlan["raUnit"]): string => {
+  if (card.means === "ra" && raUnit !== null) return raUnit === "hour" ? "hours" : "degrees";
+  return canonical === "" ? "none" : "unit?";
+};
+
 interface Props {
   card: ColumnCard;
   suggestion: ColumnSuggestion | undefined;
+  raUnit: ReadingPlan["raUnit"];
   isAsking: boolean;
   isReadOnly: boolean;
   onChange: (index: number, change: Partial<ColumnCard>) => void;
 }
 
 /** One column of the file: what stands in it and how it is read. */
-export const PlanRow = ({ card, suggestion, isAsking, isReadOnly, onChange }: Props) => {
+export const PlanRow = ({ card, suggestion, raUnit, isAsking, isReadOnly, onChange }: Props) => {
   const meaning = findMeaning(card.means);
   const isUnused = card.means === KEPT;
   const isOwn = suggestion !== undefined && suggestion.means !== card.means;
@@ -77,20 +118,12 @@ export const PlanRow = ({ card, suggestion, isAsking, isReadOnly, onChange }: Pr
               <span className="sr-only">Asks:</span>
             </span>
           ) : null}
-          <select
-            aria-label={`Meaning of ${card.header}`}
-            value={card.means}
-            disabled={isReadOnly}
-            className={`${BOX} ${isUnused ? "text-soft" : ""}`}
-            onChange={(event) => change({ means: event.target.value })}
-          >
-            <option value={KEPT}>Kept as text</option>
-            {MEANINGS.map(({ key, label }) => (
-              <option key={key} value={key}>
-                {label}
-              </option>
-            ))}
-          </select>
+          <MeaningChoice
+            header={card.header}
+            means={card.means}
+            isOff={isReadOnly}
+            onMeans={(means) => change({ means })}
+          />
         </span>
       </td>
       <td className="w-28">
@@ -99,7 +132,7 @@ export const PlanRow = ({ card, suggestion, isAsking, isReadOnly, onChange }: Pr
             label={`Unit of ${card.header}`}
             value={card.unit}
             isOff={isReadOnly}
-            placeholder={meaning.unit === "" ? "none" : "unit?"}
+            placeholder={unitHint(card, meaning.unit, raUnit)}
             list={unitListId(meaning.unit)}
             onValue={(unit) => change({ unit })}
           />
@@ -131,7 +164,7 @@ export const PlanRow = ({ card, suggestion, isAsking, isReadOnly, onChange }: Pr
           />
         )}
       </td>
-      <td className="max-w-56 truncate font-mono text-[11px] text-soft" title={suggestion?.because}>
+      <td className="min-w-40 max-w-72 text-[11.5px] leading-tight text-soft">
         {isOwn ? "chosen by hand" : suggestion?.because}
       </td>
     </tr>

@@ -110,6 +110,7 @@ export const PlanScreen = ({ extract, preview: opened, onReload }: Props) => {
           <p className="mt-1 text-soft">
             <span className="font-mono text-ink">{count(preview.sampledRows)}</span> rows looked at; all are
             read when the extract is committed. Nothing is stored yet.
+            {open > 0 ? ` It can be committed once nothing is open: ${questionsLeft(findings)}.` : ""}
           </p>
         </div>
         {isReadOnly ? null : (

@@ -100,6 +100,7 @@ export const PlanTable = (props: Props) => {
                 key={card.index}
                 card={card}
                 suggestion={suggestions.get(card.index)}
+                raUnit={props.plan.raUnit}
                 isAsking={asking.has(card.header)}
                 isReadOnly={isReadOnly}
                 onChange={onCard}

@@ -27,7 +27,7 @@ const Given = ({ plan, isReadOnly, onPlan }: Pick<Props, "plan" | "isReadOnly" |
           <li key={key} className="flex items-center justify-between gap-3 border-t border-hair py-1.5">
             <span className="wrap-anywhere">{text}</span>
             {isReadOnly ? null : (
-              <Button kind="plain" className="px-1" onClick={() => onPlan(again)}>
+              <Button kind="plain" className="px-1!" onClick={() => onPlan(again)}>
                 Change
               </Button>
             )}
