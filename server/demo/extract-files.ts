@@ -14,7 +14,7 @@ export interface ExtractRange {
 }
 
 const ASTROMETRY_HEADER =
-  "source_id,designation,ra,dec,ref_epoch,parallax,parallax_error,pmra,pmra_error,pmdec,pmdec_error,g_mag,bp_mag,rp_mag,ks_mag,ks_mag_error,ruwe";
+  "source_id,designation,ra,dec,ref_epoch,parallax,parallax_error,pmra,pmra_error,pmdec,pmdec_error,g_mag,bp_mag,rp_mag,ks_mag,ks_mag_error,card_mag,ruwe";
 
 /** Draws for blemishes stand apart from those of the star, so that clean and blemished extracts hold the same sky. */
 const blemishes = (seed: number, index: number): Random => new Random(seed, index, 0xb1e);
@@ -44,6 +44,7 @@ const astrometryLine = (star: InventedStar, random: Random): string => {
     star.rp.toFixed(3),
     star.ks.toFixed(3),
     ksError,
+    star.cardMag.toFixed(2),
     random.chance(0.02) ? "" : star.ruwe.toFixed(3),
   ].join(",");
 };

@@ -23,6 +23,8 @@ export interface InventedStar {
   readonly j: number;
   readonly h: number;
   readonly ks: number;
+  /** In the passband of an invented instrument, somewhat redder than RP. */
+  readonly cardMag: number;
   readonly teff: number;
   readonly logg: number;
   readonly feh: number;
@@ -127,10 +129,15 @@ const giant = (random: Random): Body => {
 const companionBrightening = (random: Random): number =>
   2.5 * Math.log10(1 + 10 ** (-0.4 * random.between(0, 3)));
 
-const sourceNumber = (random: Random): string => {
-  const high = 3_000_000_000 + Math.floor(random.uniform() * 900_000_000);
-  const low = Math.floor(random.uniform() * 1e9);
-  return `${high}${String(low).padStart(9, "0")}`;
+const LOW_DIGITS = 1e9;
+/** Shares no divisor with `LOW_DIGITS`, so that its multiples end differently for each of the first 10⁹ stars. */
+const STRIDE = 61_803_397;
+
+/** Unique within a seed: the last nine digits belong to the star's number alone. */
+const sourceNumber = (random: Random, index: number): string => {
+  const high =
+    3_000_000_000 + Math.floor(random.uniform() * 900_000) * 1000 + Math.floor(random.uniform() * 1000);
+  return `${high}${String(((index + 1) * STRIDE) % LOW_DIGITS).padStart(9, "0")}`;
 };
 
 const place = (random: Random) => ({
@@ -157,7 +164,7 @@ export const inventedStar = (seed: number, index: number): InventedStar => {
     0.018 + 0.02 * 10 ** (0.2 * Math.max(0, g - 13)) * (isBinary ? random.between(1, 4) : 1);
   return {
     designation: `SL ${100_000 + index}`,
-    sourceId: sourceNumber(random),
+    sourceId: sourceNumber(random, index),
     ...place(random),
     ...motion(random, body.distance),
     pmError: parallaxError * 1.1,
@@ -169,6 +176,7 @@ export const inventedStar = (seed: number, index: number): InventedStar => {
     j: ks + 0.83 + random.normal(0, 0.02),
     h: ks + 0.22 + random.normal(0, 0.02),
     ks,
+    cardMag: g - 0.53 * body.bpRp - 0.1,
     teff: body.teff + random.normal(0, 55),
     logg: body.logg + random.normal(0, 0.06),
     feh: random.normal(-0.05, 0.18),

@@ -32,6 +32,10 @@ export interface DemoPerson {
   roles: readonly Role[];
 }
 
+/** Known by address and name. */
+export const isDemoPerson = (person: Pick<Person, "email" | "name">): boolean =>
+  PEOPLE.some(({ email, name }) => email === person.email && name === person.name);
+
 /** Makes the people of the demo; none can sign in before `activateDemoPeople`. */
 export const makeDemoPeople = async (tx: EntityManager, at: Date): Promise<DemoPerson[]> => {
   const passwordHash = await hashPassword(DEMO_PASSWORD);

@@ -21,7 +21,7 @@ import { createProgramme } from "../programmes/service.ts";
 import { makeSelection } from "../selections/service.ts";
 import { FolderStorage } from "../storage/folder-storage.ts";
 import { bringExtract } from "./bring-extract.ts";
-import { activateDemoPeople, type DemoPerson, makeDemoPeople } from "./people.ts";
+import { activateDemoPeople, type DemoPerson, isDemoPerson, makeDemoPeople } from "./people.ts";
 
 export { demoSignIns } from "./people.ts";
 
@@ -33,9 +33,12 @@ const ABOUT =
 const readJson = async (name: string): Promise<unknown> =>
   JSON.parse(await readFile(join(FOLDER, name), "utf8"));
 
-/** Nobody can sign in before the demo is whole; so people who are all inactive are the mark of one cut short. */
+/**
+ * Whether the database is empty, or holds a seed that was cut short: nobody can sign in before the demo is whole, so
+ * nobody but people of the demo, none of them active, is its mark.
+ */
 export const needsSeed = async (db: DataSource): Promise<boolean> =>
-  !(await db.manager.existsBy(Person, { isActive: true }));
+  (await db.manager.find(Person)).every((person) => isDemoPerson(person) && !person.isActive);
 
 /** Takes away what a seed that was cut short left; only ever called where nobody could sign in yet. */
 const empty = async (db: DataSource): Promise<void> => {

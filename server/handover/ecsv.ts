@@ -1,10 +1,24 @@
 import { plainNumber } from "#shared/format/numbers.ts";
 import type { FileColumn } from "./list-columns.ts";
 
+type MetaValue = string | number | readonly string[];
+
 /** ECSV 1.0 (Astropy Proposal for Enhancement 6): comma-delimited, every header line behind "# ". */
 
-/** A YAML scalar in double quotes: JSON's strings are YAML's too. */
-const scalar = (text: string): string => JSON.stringify(text);
+/** Signs that JSON leaves as they are and YAML does not take: control signs and its further line breaks. */
+const NOT_IN_YAML = /[\u007f-\u009f\u2028\u2029\ufeff]/g;
+
+const escaped = (sign: string): string => `\\u${sign.charCodeAt(0).toString(16).padStart(4, "0")}`;
+
+/** A YAML scalar in double quotes: but for those signs, JSON's strings are YAML's too. */
+const scalar = (text: string): string => JSON.stringify(text).replace(NOT_IN_YAML, escaped);
+
+const metaLines = (key: string, value: MetaValue): string[] => {
+  if (typeof value === "number") return [`# - ${key}: ${value}`];
+  if (typeof value === "string") return [`# - ${key}: ${scalar(value)}`];
+  if (value.length === 0) return [`# - ${key}: []`];
+  return [`# - ${key}:`, ...value.map((item) => `#   - ${scalar(item)}`)];
+};
 
 const columnLine = (c: FileColumn): string => {
   const parts = [
@@ -26,32 +40,27 @@ const unitText = (unit: string): string =>
 /** The header: format line, columns, and what the file is. */
 export const ecsvHeader = (
   columns: readonly FileColumn[],
-  meta: Readonly<Record<string, string | number | readonly string[]>>,
-): string => {
-  const metaLines = Object.entries(meta).flatMap(([key, value]) =>
-    Array.isArray(value)
-      ? [`# - ${key}:`, ...value.map((item: string) => `#   - ${scalar(item)}`)]
-      : [`# - ${key}: ${typeof value === "number" ? value : scalar(value as string)}`],
-  );
-  return [
+  meta: Readonly<Record<string, MetaValue>>,
+): string =>
+  [
     "# %ECSV 1.0",
     "# ---",
     "# delimiter: ','",
     "# datatype:",
     ...columns.map(columnLine),
     "# meta: !!omap",
-    ...metaLines,
+    ...Object.entries(meta).flatMap(([key, value]) => metaLines(key, value)),
     "# schema: astropy-2.0",
     columns.map((c) => c.name).join(","),
     "",
   ].join("\n");
-};
 
-/** One cell; a blank is empty, and quotes are doubled. */
+/** One cell; a blank is empty, and quotes are doubled. The format ends a row at every line break, so texts have none. */
 const cell = (value: string | number | null): string => {
   if (value === null) return "";
   if (typeof value === "number") return plainNumber(value);
-  return /[",\s]/.test(value) || value === "" ? `"${value.replaceAll('"', '""')}"` : value;
+  const line = value.replace(/[\r\n\u0085\u2028\u2029]+/g, " ");
+  return /[",\s]/.test(line) || line === "" ? `"${line.replaceAll('"', '""')}"` : line;
 };
 
 export const ecsvLine = (values: readonly (string | number | null)[]): string =>

@@ -9,6 +9,8 @@ export interface FileColumn {
   readonly unit: string;
   readonly ucd: string;
   readonly description: string;
+  /** Its texts are identifiers, which no writer may change. */
+  readonly isIdentifier?: true;
   /** Null is a blank. */
   readonly value: (member: ListMember) => string | number | null;
 }
@@ -58,7 +60,9 @@ const numeric = (c: Column): FileColumn[] => {
 
 const registryColumns = (COLUMNS as readonly Column[]).flatMap((c) => {
   const value = TEXT_VALUES[c.key];
-  return value ? [text(c.key, c.description, value, c.ucd)] : numeric(c);
+  if (!value) return numeric(c);
+  const column = text(c.key, c.description, value, c.ucd);
+  return [c.key === "source_id" ? { ...column, isIdentifier: true as const } : column];
 });
 
 /** A name a column can have in every format: letters, digits and underscores. */
@@ -68,8 +72,11 @@ const columnName = (label: string): string =>
     .replace(/[^a-z0-9]+/g, "_")
     .replace(/^_|_$/g, "");
 
-/** The columns of a list's file, in order; one share for each term of its figure of merit. */
-export const listColumns = (terms: readonly string[]): readonly FileColumn[] => [
+/**
+ * The columns of a list's file, in order; one share for each term of its figure of merit. Where the sky is invented
+ * every row says so, for a format that has no place for it elsewhere.
+ */
+export const listColumns = (terms: readonly string[], isInvented: boolean): readonly FileColumn[] => [
   {
     name: "place",
     datatype: "int64",
@@ -100,4 +107,5 @@ export const listColumns = (terms: readonly string[]): readonly FileColumn[] => 
     }),
   ),
   ...registryColumns,
+  ...(isInvented ? [text("sky", "Invented: this star does not exist", () => "invented", "meta.note")] : []),
 ];

@@ -56,18 +56,28 @@ async function* lines(
   for (;;) {
     const members = (await findMembersAfter(deps.db.manager, list.id, place, BATCH)).map(presentMember);
     if (members.length === 0) return;
-    yield Buffer.from(members.map((member) => line(columns.map((c) => c.value(member)))).join(""));
+    yield Buffer.from(
+      members
+        .map((member) =>
+          line(
+            columns.map((c) => c.value(member)),
+            columns,
+          ),
+        )
+        .join(""),
+    );
     place = members.at(-1)?.place ?? Number.POSITIVE_INFINITY;
   }
 }
 
+/** The watermark of a format that has no header. */
 const fileName = (list: TargetList, format: Format): string =>
   `${
     list.name
       .toLowerCase()
       .replace(/[^a-z0-9]+/g, "-")
       .replace(/^-|-$/g, "") || "target-list"
-  }.${format}`;
+  }-working-copy.${format}`;
 
 export interface ListFile {
   name: string;
@@ -85,7 +95,7 @@ export const exportList = async (
   const list = await readList(deps, programmeId, listId);
   const programme = await deps.db.manager.findOneBy(Programme, { id: programmeId });
   if (!programme) throw notFound("This programme");
-  const columns = listColumns(list.merit?.terms ?? []);
+  const columns = listColumns(list.merit?.terms ?? [], list.isInvented);
   const names = columns.map((c) => c.name);
   const [head, line] =
     format === "csv"

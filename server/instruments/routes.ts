@@ -10,7 +10,9 @@ import {
 import type { Routes } from "../http/route.ts";
 import {
   listCampaigns,
+  listCampaignVersions,
   listCards,
+  listCardVersions,
   makeCampaign,
   makeCard,
   readCampaign,
@@ -22,12 +24,20 @@ import {
 const CARDS = "/programmes/:programmeId/instruments";
 const CAMPAIGNS = "/programmes/:programmeId/campaigns";
 const oneCard = z.object({ card });
+const cards = z.object({ cards: z.array(card) });
 const oneCampaign = z.object({ campaign });
+const campaigns = z.object({ campaigns: z.array(campaign) });
 
 const addCardRoutes = (routes: Routes): void => {
   routes.add(
-    { method: "get", path: CARDS, access: "instrument.read", answer: z.object({ cards: z.array(card) }) },
+    { method: "get", path: CARDS, access: "instrument.read", answer: cards },
     async ({ deps, programmeId }) => ({ cards: await listCards(deps, programmeId) }),
+  );
+  routes.add(
+    { method: "get", path: `${CARDS}/:cardId/versions`, access: "instrument.read", answer: cards },
+    async ({ deps, programmeId, params }) => ({
+      cards: await listCardVersions(deps, programmeId, params.cardId ?? ""),
+    }),
   );
   routes.add(
     { method: "get", path: `${CARDS}/versions/:versionId`, access: "instrument.read", answer: oneCard },
@@ -57,13 +67,19 @@ const addCardRoutes = (routes: Routes): void => {
 
 const addCampaignRoutes = (routes: Routes): void => {
   routes.add(
+    { method: "get", path: CAMPAIGNS, access: "instrument.read", answer: campaigns },
+    async ({ deps, programmeId }) => ({ campaigns: await listCampaigns(deps, programmeId) }),
+  );
+  routes.add(
     {
       method: "get",
-      path: CAMPAIGNS,
+      path: `${CAMPAIGNS}/:campaignId/versions`,
       access: "instrument.read",
-      answer: z.object({ campaigns: z.array(campaign) }),
+      answer: campaigns,
     },
-    async ({ deps, programmeId }) => ({ campaigns: await listCampaigns(deps, programmeId) }),
+    async ({ deps, programmeId, params }) => ({
+      campaigns: await listCampaignVersions(deps, programmeId, params.campaignId ?? ""),
+    }),
   );
   routes.add(
     {

@@ -4,6 +4,7 @@ import { CampaignVersion } from "../database/entities/campaign.entity.ts";
 import { InstrumentCardVersion } from "../database/entities/instrument-card.entity.ts";
 import type { Deps } from "../deps.ts";
 import {
+  allVersions,
   type Editor,
   type Kind,
   newestVersions,
@@ -42,6 +43,9 @@ export const listCards = async (deps: Deps, programmeId: string) =>
 export const readCard = async (deps: Deps, programmeId: string, versionId: string) =>
   presentCard(await versionById(deps, CARDS, programmeId, versionId));
 
+export const listCardVersions = async (deps: Deps, programmeId: string, id: string) =>
+  (await allVersions(deps, CARDS, programmeId, id)).map(presentCard);
+
 export const makeCard = async (
   deps: Deps,
   programmeId: string,
@@ -63,6 +67,9 @@ export const listCampaigns = async (deps: Deps, programmeId: string) =>
 
 export const readCampaign = async (deps: Deps, programmeId: string, versionId: string) =>
   presentCampaign(await versionById(deps, CAMPAIGNS, programmeId, versionId));
+
+export const listCampaignVersions = async (deps: Deps, programmeId: string, id: string) =>
+  (await allVersions(deps, CAMPAIGNS, programmeId, id)).map(presentCampaign);
 
 export const makeCampaign = async (deps: Deps, programmeId: string, editor: Editor, content: CampaignInput) =>
   presentCampaign(await saveFirst(deps, CAMPAIGNS, programmeId, editor, content));

@@ -22,16 +22,6 @@ type Input = z.output<typeof listCreateBody>;
 const identityOf = (row: StarRow): string =>
   row.sourceId === null ? row.designation : `${row.release ?? ""}|${row.sourceId}`;
 
-const readFirst = async (deps: Deps, view: OpenView, first: number): Promise<StarRow[]> => {
-  const rows: StarRow[] = [];
-  while (rows.length < first) {
-    const ids = await view.ids(rows.length, Math.min(BATCH, first - rows.length));
-    if (ids.length === 0) break;
-    rows.push(...(await readRows(deps, view, ids, rows.length + 1)));
-  }
-  return rows;
-};
-
 const rankedBy = (view: OpenView): string => {
   const { sort } = view.resolved.view;
   return sort.key === "merit"
@@ -52,26 +42,40 @@ const requireWhole = async (view: OpenView, ignored: readonly string[]): Promise
   });
 };
 
-const writeMembers = async (
+/**
+ * Copies the first stars of the view as they are now, some at a time so that a long list is never in memory as a whole;
+ * answers their identities.
+ */
+const copyMembers = async (
+  deps: Deps,
   tx: EntityManager,
   listId: string,
-  rows: readonly StarRow[],
-  ranked: string,
-  total: number,
-): Promise<void> => {
-  for (let from = 0; from < rows.length; from += BATCH) {
-    const members = rows.slice(from, from + BATCH).map((row) => ({
+  view: OpenView,
+  first: number,
+): Promise<string[]> => {
+  const cameIn = `of ${await view.count()} by ${rankedBy(view)}`;
+  const identities: string[] = [];
+  while (identities.length < first) {
+    const ids = await view.ids(identities.length, Math.min(BATCH, first - identities.length));
+    if (ids.length === 0) break;
+    const rows = await readRows(deps, view, ids, identities.length + 1, tx);
+    const members = rows.map((row) => ({
       listId,
       starId: row.id,
       place: row.place,
       state: "in" as const,
       reason: "",
-      cameIn: `place ${row.place} of ${total} by ${ranked}`,
+      cameIn: `place ${row.place} ${cameIn}`,
       row: row as unknown as object,
     }));
     await tx.insert(ListMember, members as never);
+    identities.push(...rows.map(identityOf));
   }
+  return identities;
 };
+
+const fingerprintOf = (identities: readonly string[]): string =>
+  createHash("sha256").update(identities.toSorted().join("\n")).digest("hex");
 
 /** Makes a list of the first N stars of a view; they keep the values they are put there on. */
 export const makeList = async (
@@ -88,9 +92,8 @@ export const makeList = async (
     throw unprocessable("no-stars", "No star passes the cuts of this view, so there is nothing to list.", {
       hint: "Loosen a cut and make the list again.",
     });
-  const rows = await readFirst(deps, view, input.first);
   const { edition, recipe, card, campaign, merit } = view.resolved;
-  const listId = await inTransaction(deps.db, async (tx) => {
+  const made = await inTransaction(deps.db, async (tx) => {
     const at = deps.now();
     const list = await tx.save(
       TargetList,
@@ -105,23 +108,29 @@ export const makeList = async (
         campaignVersionId: campaign?.versionId ?? null,
         meritVersionId: merit?.versionId ?? null,
         recipe: recipe.key,
-        fingerprint: createHash("sha256").update(rows.map(identityOf).sort().join("\n")).digest("hex"),
+        fingerprint: fingerprintOf([]),
         madeBy: maker.id,
         madeAt: at,
       }),
     );
-    await writeMembers(tx, list.id, rows, rankedBy(view), count);
+    const identities = await copyMembers(deps, tx, list.id, view, input.first);
+    await tx.query("UPDATE target_list SET fingerprint = ? WHERE target_list_id = ?", [
+      fingerprintOf(identities),
+      list.id,
+    ]);
     await writeLine(tx, {
       programmeId,
       person: maker,
       action: "list.make",
       subject: { type: "list", id: list.id, name: input.name },
-      after: { stars: rows.length, of: count, catalogueEdition: edition, view: list.viewParams },
+      after: { stars: identities.length, of: count, catalogueEdition: edition, view: list.viewParams },
       at,
     });
-    return list.id;
+    return { listId: list.id, stars: identities.length };
   });
   const note =
-    rows.length < input.first ? `Only ${count} stars pass the cuts: the list has all of them.` : null;
-  return { listId, note };
+    made.stars < input.first
+      ? `Only ${made.stars} ${made.stars === 1 ? "star passes" : "stars pass"} the cuts: the list has all of them.`
+      : null;
+  return { listId: made.listId, note };
 };

@@ -43,6 +43,21 @@ export const presentList = (row: ListRecord): TargetList => {
   };
 };
 
+/** The list for who may not read figures of merit: neither its name nor its terms nor an order by it. */
+export const withoutMerit = (list: TargetList): TargetList => {
+  const params = new URLSearchParams(list.viewParams);
+  if (params.get("sort")?.endsWith("merit")) params.delete("sort");
+  params.delete("merit");
+  return { ...list, merit: null, viewParams: params.toString() };
+};
+
+export const memberWithoutMerit = (member: MemberJson): MemberJson => ({
+  ...member,
+  merit: null,
+  shares: [],
+  cameIn: "",
+});
+
 export const presentMember = (member: ListMember): MemberJson => ({
   ...(member.row as StarRow),
   id: member.starId,

@@ -6,11 +6,14 @@ import {
   listSky,
   listStateBody,
   memberPatchBody,
+  type TargetList,
   targetList,
 } from "#shared/api/lists.ts";
 import { windowQuery } from "#shared/api/stars.ts";
+import { type Actor, can } from "#shared/policy/rights.ts";
 import type { Routes } from "../http/route.ts";
 import { makeList } from "./make.ts";
+import { memberWithoutMerit, withoutMerit } from "./present.ts";
 import {
   changeList,
   changeMember,
@@ -26,6 +29,10 @@ const ALL = "/programmes/:programmeId/lists";
 const ONE = `${ALL}/:listId`;
 const oneList = z.object({ list: targetList });
 
+/** What the reader may see of it: a guest sees no figure of merit, here as little as in the catalogue. */
+const seenBy = (actor: Actor, list: TargetList): TargetList =>
+  can(actor, "merit.read") ? list : withoutMerit(list);
+
 const addMemberRoutes = (routes: Routes): void => {
   routes.add(
     {
@@ -35,7 +42,10 @@ const addMemberRoutes = (routes: Routes): void => {
       query: windowQuery,
       answer: z.object({ members: z.array(listMember), count: z.int() }),
     },
-    ({ deps, programmeId, params, query }) => readMembers(deps, programmeId, params.listId ?? "", query),
+    async ({ deps, programmeId, actor, params, query }) => {
+      const { members, count } = await readMembers(deps, programmeId, params.listId ?? "", query);
+      return { members: can(actor, "merit.read") ? members : members.map(memberWithoutMerit), count };
+    },
   );
   routes.add(
     {
@@ -59,8 +69,8 @@ const addMemberRoutes = (routes: Routes): void => {
 export const addListRoutes = (routes: Routes): void => {
   routes.add(
     { method: "get", path: ALL, access: "list.read", answer: z.object({ lists: z.array(targetList) }) },
-    async ({ deps, programmeId }) => ({
-      lists: await listLists(deps, programmeId),
+    async ({ deps, programmeId, actor }) => ({
+      lists: (await listLists(deps, programmeId)).map((list) => seenBy(actor, list)),
     }),
   );
   routes.add(
@@ -79,8 +89,8 @@ export const addListRoutes = (routes: Routes): void => {
   );
   routes.add(
     { method: "get", path: ONE, access: "list.read", answer: oneList },
-    async ({ deps, programmeId, params }) => ({
-      list: await readList(deps, programmeId, params.listId ?? ""),
+    async ({ deps, programmeId, actor, params }) => ({
+      list: seenBy(actor, await readList(deps, programmeId, params.listId ?? "")),
     }),
   );
   routes.add(

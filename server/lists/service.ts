@@ -82,6 +82,7 @@ export const changeList = async (
 ): Promise<ListJson> => {
   await inTransaction(deps.db, async (tx) => {
     const list = await lockAsSeen(tx, programmeId, listId, version);
+    requireOpen(list);
     const before = { name: list.name, note: list.note };
     const after = { name: change.name ?? before.name, note: change.note ?? before.note };
     await tx.save(TargetList, tx.merge(TargetList, list, after));

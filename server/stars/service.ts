@@ -43,8 +43,9 @@ export const readRows = async (
   view: OpenView,
   ids: readonly string[],
   firstPlace: number,
+  tx = deps.db.manager,
 ): Promise<StarRow[]> => {
-  const found = await findStars(deps.db.manager, scopeOf(view), ids);
+  const found = await findStars(tx, scopeOf(view), ids);
   const byId = new Map(found.map((row) => [String(row.star_id), row]));
   const present = rowPresenter(view.resolved);
   return ids.map((id, i) => {

@@ -85,6 +85,23 @@ export const newestVersions = async <Row extends VersionRow>(
   return withNames(tx, rows);
 };
 
+/** Every version of one thing, the newest first. */
+export const allVersions = async <Row extends VersionRow>(
+  deps: Deps,
+  kind: Kind<Row>,
+  programmeId: string,
+  rootId: string,
+): Promise<Saved<Row>[]> => {
+  const tx = deps.db.manager;
+  const rows = await tx
+    .createQueryBuilder(kind.entity, "v")
+    .where(`v.${kind.rootKey} = :rootId AND v.programmeId = :programmeId`, { rootId, programmeId })
+    .orderBy("v.number", "DESC")
+    .getMany();
+  if (rows.length === 0) throw nothing(kind);
+  return withNames(tx, rows);
+};
+
 /** One version by its own id. */
 export const versionById = async <Row extends VersionRow>(
   deps: Deps,

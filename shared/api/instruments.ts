@@ -77,7 +77,7 @@ export const card = z.object({
   savedAt: timestamp,
 });
 export type Card = z.infer<typeof card>;
-/** GET …/instruments → { cards } (latest versions); GET …/instruments/versions/:versionId → { card }; POST → 201 { card }. */
+/** GET …/instruments → { cards } (latest versions); GET …/instruments/:id/versions → { cards } (newest first); GET …/instruments/versions/:versionId → { card }; POST → 201 { card }. */
 export const cardBody = z.strictObject({ name, source: note, settings: cardSettings });
 /** PUT …/instruments/:id → { card }: a new version; `number` is the one the person saw (409 when stale). */
 export const cardSaveBody = cardBody.extend({ number: z.int().positive() });
@@ -99,6 +99,6 @@ export const campaign = z.object({
   savedAt: timestamp,
 });
 export type Campaign = z.infer<typeof campaign>;
-/** GET …/campaigns → { campaigns }; GET …/campaigns/versions/:versionId → { campaign }; POST → 201; PUT …/campaigns/:id → { campaign }. */
+/** GET …/campaigns → { campaigns }; GET …/campaigns/:id/versions → { campaigns } (newest first); GET …/campaigns/versions/:versionId → { campaign }; POST → 201; PUT …/campaigns/:id → { campaign }. */
 export const campaignBody = z.strictObject({ name, settings: campaignSettings });
 export const campaignSaveBody = campaignBody.extend({ number: z.int().positive() });

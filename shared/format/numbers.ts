@@ -47,18 +47,20 @@ export const count = (value: number): string => fixed(value, 0);
 
 /** Scientific notation for what is too small or too large to read: 1.27 × 10⁻⁵. */
 const scientific = (value: number, digits: number): string => {
-  const power = magnitude(value);
-  const superscript = [...String(power)].map((c) => "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(c)] ?? "⁻").join("");
-  return `${fixed(value / 10 ** power, Math.max(0, digits - 1))} × 10${superscript}`;
+  // Rounded before it is split, so that 9.999 × 10⁻⁴ becomes 1.00 × 10⁻³ and never 10.00 × 10⁻⁴.
+  const [mantissa = "", power = ""] = value.toExponential(digits - 1).split("e");
+  const superscript = [...power.replace("+", "")].map((c) => "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(c)] ?? "⁻").join("");
+  return `${fixed(Number(mantissa), digits - 1)} × 10${superscript}`;
 };
 
 /** A number of which no error is known: at most four significant digits and never more decimals than asked. */
 export const withoutError = (value: number, mostDecimals: number): string => {
-  if (value === 0) return fixed(0, 0);
-  const size = Math.abs(value);
+  const rounded = Number(value.toPrecision(MOST_DIGITS_WITHOUT_ERROR));
+  if (rounded === 0) return fixed(0, 0);
+  const size = Math.abs(rounded);
   if (size < SMALLEST_PLAIN || size >= LARGEST_PLAIN) return scientific(value, 3);
-  const byDigits = MOST_DIGITS_WITHOUT_ERROR - 1 - magnitude(value);
-  return fixed(value, Math.max(0, Math.min(mostDecimals, byDigits)));
+  const byDigits = MOST_DIGITS_WITHOUT_ERROR - 1 - magnitude(rounded);
+  return fixed(rounded, Math.max(0, Math.min(mostDecimals, byDigits)));
 };
 
 export interface ShownNumber {
@@ -75,22 +77,19 @@ export interface ShownNumber {
 export const withError = (value: number, error: number | undefined, mostDecimals: number): ShownNumber => {
   if (error === undefined || !(error > 0) || !Number.isFinite(error))
     return { value: withoutError(value, mostDecimals), error: null };
-  const power = magnitude(error);
-  const leading = Math.round(error / 10 ** (power - 2));
-  const decimals = leading >= 950 ? -power : decimalsForError(error);
+  const decimals = decimalsForError(error);
   return { value: fixed(value, decimals), error: fixed(error, decimals) };
 };
 
 /** Parts per million: whole from 100 on, one decimal below. */
-const ppm = (value: number): string => fixed(value, Math.abs(value) >= 100 ? 0 : 1);
+const ppm = (value: number): string => fixed(value, Math.abs(value) >= 99.95 ? 0 : 1);
 
 /** A percentage with two to three significant digits. */
 const percent = (value: number): string =>
   value === 0 ? "0" : fixed(value, Math.max(0, Math.min(4, 2 - magnitude(value))));
 
 /** Columns whose digits belong to the column, so that they line up, and not to each star's error. */
-const fixesDigits = (column: Column): boolean =>
-  column.group === "position" && (column.key === "ra" || column.key === "dec" || column.key === "epoch");
+const fixesDigits = (column: Column): boolean => column.key === "ra" || column.key === "dec";
 
 /**
  * The text of a cell in the unit of the column's head, with its error.
@@ -102,12 +101,12 @@ export const formatCell = (column: Column, value: number, error?: number): Shown
   const shown = value * factor;
   const shownError = error === undefined ? undefined : error * factor;
   if (column.kind === "integer") return { value: count(shown), error: null };
+  // A year is not set apart in threes.
+  if (column.key === "epoch") return { value: shown.toFixed(column.decimals), error: null };
   if (fixesDigits(column)) return { value: fixed(shown, column.decimals), error: null };
   if (shownError !== undefined && shownError > 0) return withError(shown, shownError, column.decimals);
   if (column.unitLabel === "ppm") return { value: ppm(shown), error: null };
   if (column.unitLabel === "%") return { value: percent(shown), error: null };
-  if (column.group === "brightness" || column.unitLabel === "d")
-    return { value: fixed(shown, Math.min(column.decimals, 3)), error: null };
   return { value: withoutError(shown, column.decimals), error: null };
 };
 
