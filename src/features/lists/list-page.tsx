@@ -51,7 +51,7 @@ const Open = ({ programmeId, list }: { programmeId: string; list: TargetList }) 
   return (
     <main className="grid min-h-full xl:h-full xl:grid-cols-[minmax(0,1fr)_24rem]">
       <title>{`${list.name} · Shortlight`}</title>
-      <div className="flex min-h-0 min-w-0 flex-col gap-4 px-5 py-5 sm:px-7">
+      <div className="flex min-h-0 min-w-0 flex-col gap-4 px-5 py-5 sm:px-7 xl:overflow-auto">
         <Head programmeId={programmeId} list={list} />
         {remark ? (
           <p role="status" className="rounded bg-sel px-3 py-2">
@@ -59,11 +59,11 @@ const Open = ({ programmeId, list }: { programmeId: string; list: TargetList }) 
           </p>
         ) : null}
         <StateLedger list={list} />
-        <div className="grid min-h-0 grow gap-6 lg:grid-cols-[minmax(0,1fr)_24rem] lg:grid-rows-[minmax(24rem,1fr)]">
+        <div className="grid min-h-0 grow gap-6 2xl:grid-cols-[minmax(0,1fr)_24rem] 2xl:grid-rows-[minmax(24rem,1fr)]">
           <MembersCard programmeId={programmeId} list={list} openId={member?.id ?? null} onOpen={setMember} />
           <section
             aria-label="Where they are"
-            className="self-start rounded border border-rule bg-sheet px-4 py-3"
+            className="w-full max-w-xl self-start rounded border border-rule bg-sheet px-4 py-3"
           >
             <h2 className="text-[21px]">Where they are</h2>
             <p className="text-xs text-soft">equal-area, right ascension grows to the left</p>

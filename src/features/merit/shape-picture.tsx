@@ -60,7 +60,7 @@ export const shapeWords = (shape: Shape): string => {
 export const ShapePicture = ({ shape, unit }: { shape: Shape | null; unit: string }) => {
   if (!shape)
     return (
-      <p className="grid h-full min-h-20 place-items-center rounded border border-hair px-4 text-center text-xs text-soft">
+      <p className="grid min-h-24 place-items-center self-start rounded border border-hair px-4 text-center text-xs text-soft">
         The picture comes when the shape's figures are there.
       </p>
     );

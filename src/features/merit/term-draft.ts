@@ -82,7 +82,7 @@ const DECIMAL_COMMA = /^[-+−]?\d+,\d+$/;
 /** A figure as typed, or why it is none. A true minus counts as a minus. */
 export const readFigure = (text: string): number | string => {
   const trimmed = text.trim();
-  if (trimmed === "") return "Give a figure.";
+  if (trimmed === "") return "a figure is missing.";
   const value = Number(trimmed.replace("\u2212", "-"));
   if (Number.isFinite(value)) return value;
   return DECIMAL_COMMA.test(trimmed)
@@ -110,9 +110,9 @@ const readPoints = (text: string, complain: Complain): [number, number][] =>
 const shapeOf = (draft: TermDraft, complain: Complain): unknown => {
   if (draft.kind === "table") return { kind: "table", points: readPoints(draft.table, complain) };
   const figures = Object.fromEntries(
-    SHAPE_FIGURES[draft.kind].map(([name]) => {
+    SHAPE_FIGURES[draft.kind].map(([name, label]) => {
       const figure = readFigure(draft.figures[name] ?? "");
-      if (typeof figure === "string") complain(`shape.${name}`, figure);
+      if (typeof figure === "string") complain(`shape.${name}`, `${label}: ${figure}`);
       return [name, figure];
     }),
   );
@@ -134,7 +134,7 @@ export const shapeDrawn = (draft: TermDraft): Shape | null => {
 
 const plainTerm = (draft: TermDraft, complain: Complain): unknown => {
   const weight = readFigure(draft.weight);
-  if (typeof weight === "string") complain("weight", weight);
+  if (typeof weight === "string") complain("weight", `Weight: ${weight}`);
   else if (weight < 0 || weight > 100) complain("weight", "A weight lies between 0 and 100.");
   if (draft.label.trim() === "") complain("label", "Give the term a name.");
   if (draft.expression.trim() === "")
@@ -154,11 +154,13 @@ export const meritDraftSchema = z
   .custom<MeritDraft>()
   .transform((draft, context) => {
     let isWhole = true;
+    const complain = (path: (string | number)[], message: string) => {
+      isWhole = false;
+      context.addIssue({ code: "custom", path, message });
+    };
+    if (draft.name.trim() === "") complain(["name"], "Give the figure of merit a name.");
     const terms = draft.terms.map((term, i) =>
-      plainTerm(term, (path, message) => {
-        isWhole = false;
-        context.addIssue({ code: "custom", path: ["terms", i, ...path.split(".")], message });
-      }),
+      plainTerm(term, (path, message) => complain(["terms", i, ...path.split(".")], message)),
     );
     // What is not whole was complained of above; the rest is the contract's to judge.
     return isWhole ? ({ name: draft.name, note: draft.note, terms } as z.input<typeof meritBody>) : z.NEVER;
