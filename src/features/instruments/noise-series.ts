@@ -17,7 +17,7 @@ export const PARTS: readonly Part[] = [
   { key: "scintillation", label: "scintillation", color: "var(--blue)", dash: "7 4", width: 1.6 },
   { key: "floor", label: "floor", color: "var(--gold)", dash: "2 4", width: 1.6 },
   { key: "photon", label: "photons", color: "var(--zone)", dash: "", width: 1.6 },
-  { key: "background", label: "sky", color: "var(--soft)", dash: "10 3 2 3", width: 1.6 },
+  { key: "background", label: "background", color: "var(--soft)", dash: "10 3 2 3", width: 1.6 },
   { key: "read", label: "read", color: "var(--faint)", dash: "1 3", width: 1.6 },
   { key: "dark", label: "dark", color: "var(--faint)", dash: "12 6", width: 1.2 },
   { key: "total", label: "total", color: "var(--mark)", dash: "", width: 2.6 },
@@ -102,7 +102,7 @@ export const largestPart = (parts: NoiseParts): string => {
   const words: Partial<Record<PartKey, string>> = {
     photon: "the star's own photons are",
     floor: "the floor is",
-    background: "the sky is",
+    background: "the background is",
     read: "reading the detector is",
     dark: "dark current is",
   };
