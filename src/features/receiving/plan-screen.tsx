@@ -105,7 +105,7 @@ export const PlanScreen = ({ extract, preview: opened, onReload }: Props) => {
       }
     >
       <header className="mb-4 flex flex-wrap items-start justify-between gap-3">
-        <div>
+        <div className="min-w-60 flex-1">
           <h1 className="text-[30px]">How should this file be read?</h1>
           <p className="mt-1 text-soft">
             <span className="font-mono text-ink">{count(preview.sampledRows)}</span> rows looked at; all are

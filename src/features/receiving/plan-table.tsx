@@ -10,7 +10,7 @@ type Which = "all" | "used" | "asks";
 const WORDS: Readonly<Record<Which, string>> = { all: "All", used: "Used", asks: "Asks" };
 
 /** Rows drawn at first; a file may have 3 000 columns. */
-const PORTION = 150;
+const PORTION = 100;
 /** From so many columns on, those that are not used are left out at first. */
 const MANY = 60;
 
@@ -69,7 +69,7 @@ export const PlanTable = (props: Props) => {
           ))}
         </fieldset>
         <input
-          type="search"
+          type="text"
           aria-label="Find a column"
           placeholder="Find a column"
           value={search}
