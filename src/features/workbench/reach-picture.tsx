@@ -5,7 +5,7 @@ const WIDTH = 352;
 const HEIGHT = 132;
 const LEFT = 24;
 const RIGHT = 346;
-const TOP = 8;
+const TOP = 14;
 const BOTTOM = 106;
 const RADII = [0.5, 1, 2, 4, 8];
 const PERIODS = [1, 3, 10, 30, 100, 300];
@@ -51,9 +51,6 @@ export const ReachPicture = ({ star }: { star: StarSheet }) => {
         <g>
           <rect x={x(from)} y={TOP} width={x(to) - x(from)} height={BOTTOM - TOP} fill="var(--zone-soft)" />
           <rect x={x(from)} y={TOP} width={x(to) - x(from)} height={BOTTOM - TOP} fill="url(#zone-hatch)" />
-          <text x={(x(from) + x(to)) / 2} y={TOP + 10} fontSize={9} textAnchor="middle" fill="var(--zone)">
-            habitable zone
-          </text>
         </g>
       ) : null}
       {RADII.filter((r) => r > low && r < high).map((r) => (
@@ -71,6 +68,11 @@ export const ReachPicture = ({ star }: { star: StarSheet }) => {
           </text>
         </g>
       ))}
+      {hasZone ? (
+        <text x={(x(from) + x(to)) / 2} y={TOP - 3} fontSize={9} textAnchor="middle" fill="var(--zone)">
+          habitable zone
+        </text>
+      ) : null}
       <polyline points={line} fill="none" stroke="var(--mark)" strokeWidth={1.7} />
       {PERIODS.filter((p) => p >= first && p <= last).map((p) => (
         <text
