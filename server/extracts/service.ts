@@ -172,7 +172,11 @@ export const savePlan = async (
   refuseStale(row, input.version);
   const sample = await sampleFor(deps, row, input.plan);
   const findings = planFindings(sample, input.plan);
-  await writePlan(deps, person, row, input.version, { plan: input.plan, preview: await previewOf(sample) });
+  await writePlan(deps, person, row, input.version, {
+    plan: input.plan,
+    // What is open under the plan as answered, not under the one that was suggested.
+    preview: { ...(await previewOf(sample)), findings },
+  });
   return { ...(await showExtract(deps, programmeId, id)), findings };
 };
 
