@@ -56,7 +56,7 @@ export const ColumnsDialog = ({ shown, onChange, onClose }: Props) => {
         value={text}
         onChange={(event) => setText(event.target.value)}
       />
-      <div className="gap-8 sm:columns-2">
+      <div className="mt-4 gap-8 sm:columns-2">
         {GROUPS.map(({ group, label }) => {
           const columns = found.filter((c) => c.group === group);
           if (columns.length === 0) return null;
@@ -66,7 +66,7 @@ export const ColumnsDialog = ({ shown, onChange, onClose }: Props) => {
               {columns.map((c) => (
                 <div key={c.key} className="flex items-center justify-between gap-2" title={c.description}>
                   <Checkbox
-                    label={`${c.label}${c.unitLabel === "–" ? "" : ` (${c.unitLabel})`}`}
+                    label={c.unitLabel === "–" ? c.label : `${c.label}, ${c.unitLabel}`}
                     checked={shown.includes(c.key)}
                     onChange={() => toggle(c.key)}
                   />

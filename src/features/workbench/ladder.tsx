@@ -121,6 +121,10 @@ const Step = ({ index, last, cut, step, total, onEdit, onChange, onMove, onRemov
   );
 };
 
+/** The answer for that cut; none while the one at hand is to a cut that stood there before. */
+const answerTo = (cut: Cut, step: LadderStep | undefined): LadderStep | undefined =>
+  step?.expression === cut.expression && step.blanks === cut.blanks ? step : undefined;
+
 const moved = (cuts: readonly Cut[], from: number, by: -1 | 1): Cut[] => {
   const next = [...cuts];
   const [cut] = next.splice(from, 1);
@@ -150,7 +154,7 @@ export const Ladder = ({ programmeId, view, summary, ask }: Props) => {
             index={i}
             last={cuts.length - 1}
             cut={cut}
-            step={summary.ladder[i]}
+            step={answerTo(cut, summary.ladder[i])}
             total={summary.total}
             onEdit={() => setEditing(i)}
             onChange={(next) => set(cuts.map((old, j) => (j === i ? next : old)))}

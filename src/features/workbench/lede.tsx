@@ -40,7 +40,8 @@ export const Lede = ({ programmeId, view, summary, ask }: Props) => {
   const merits = useQuery(meritsOptions(programmeId));
   const cards = useQuery(cardsOptions(programmeId));
   const campaigns = useQuery(campaignsOptions(programmeId));
-  const cuts = view.cuts.length;
+  // Of the answer, not of a question that is still open: count and cuts belong together.
+  const cuts = summary.ladder.length;
   return (
     <h1 className="max-w-[820px] text-[22px] leading-snug">
       {count(summary.total)} {summary.total === 1 ? "star" : "stars"} in{" "}

@@ -69,7 +69,13 @@ export const ReachPicture = ({ star }: { star: StarSheet }) => {
         </g>
       ))}
       {hasZone ? (
-        <text x={(x(from) + x(to)) / 2} y={TOP - 3} fontSize={9} textAnchor="middle" fill="var(--zone)">
+        <text
+          x={Math.max(LEFT + 30, Math.min(RIGHT - 30, (x(from) + x(to)) / 2))}
+          y={TOP - 3}
+          fontSize={9}
+          textAnchor="middle"
+          fill="var(--zone)"
+        >
           habitable zone
         </text>
       ) : null}

@@ -91,7 +91,7 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
   rowsNow.current = count;
   // A shorter result must not leave the focus on a row that is gone.
   const activeRow = Math.min(active.row, count - 1);
-  const { virtualizer, track, place, visible } = useRowWindow({
+  const { virtualizer, track, place, toTop, visible } = useRowWindow({
     rows: count,
     rowHeight,
     headHeight: HEAD_HEIGHT,
@@ -154,8 +154,8 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
   useEffect(() => {
     if (shownOrder.current === order) return;
     shownOrder.current = order;
-    virtualizer.scrollToOffset(0);
-  }, [order, virtualizer]);
+    toTop();
+  }, [order, toTop]);
 
   const moveTo = (to: CellPlace) => {
     wantsFocus.current = true;

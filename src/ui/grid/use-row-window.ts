@@ -24,6 +24,8 @@ export interface RowWindow {
   track: number;
   /** Where to draw a row that starts at that offset of the rows, px on the track. */
   place: (start: number) => number;
+  /** Shows the first row. */
+  toTop: () => void;
   /** First and last row that can be seen, at least in part. */
   visible: { first: number; last: number };
 }
@@ -111,6 +113,10 @@ export const useRowWindow = ({ rows, rowHeight, headHeight, scroller, focusedRow
     return () => element.removeEventListener("wheel", onWheel);
   }, [scroller, rows, rowHeight, headHeight, goTo, offsetNow]);
 
+  const toTop = useCallback(() => {
+    if (scroller.current) goTo(scroller.current, 0);
+  }, [scroller, goTo]);
+
   const place = (start: number): number => {
     const { factor } = scale.current;
     return factor === 1 ? start : start - exact.current.offset + exact.current.scrollTop;
@@ -122,5 +128,5 @@ export const useRowWindow = ({ rows, rowHeight, headHeight, scroller, focusedRow
     first: Math.min(lastRow, Math.floor(offset / rowHeight)),
     last: Math.min(lastRow, Math.ceil((offset + height) / rowHeight) - 1),
   };
-  return { virtualizer, track: scale.current.track, place, visible };
+  return { virtualizer, track: scale.current.track, place, toTop, visible };
 };
