@@ -10,6 +10,8 @@ interface Props {
   children: ReactNode;
 }
 
+const FIRST_FIELD = ["input", "select", "textarea"].map((tag) => `${tag}:not(:disabled)`).join();
+
 /** A modal dialog of the platform: Esc closes it and focus returns to where it came from. */
 export const Dialog = ({ title, isOpen, onClose, footer, isWide = false, children }: Props) => {
   const dialog = useRef<HTMLDialogElement>(null);
@@ -19,6 +21,8 @@ export const Dialog = ({ title, isOpen, onClose, footer, isWide = false, childre
     if (!element || !isOpen) return;
     const before = document.activeElement;
     element.showModal();
+    // Else the cross in the corner has the focus, and a space that is typed closes what was opened.
+    element.querySelector<HTMLElement>(FIRST_FIELD)?.focus();
     return () => {
       element.close();
       if (before instanceof HTMLElement) before.focus();
