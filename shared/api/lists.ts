@@ -36,7 +36,10 @@ export const listCreateBody = z.strictObject({
   note,
   /** The view as search parameters (viewToParams). */
   view: z.string().max(20_000),
-  first: z.int().min(1).max(LIMITS.listStars),
+  first: z
+    .int("Give a whole number of stars.")
+    .min(1, "A list holds at least one star.")
+    .max(LIMITS.listStars, `A list holds at most ${LIMITS.listStars} stars.`),
 });
 /** GET …/lists → { lists }; GET …/lists/:id → { list }; PATCH …/lists/:id → { list }; DELETE (draft) → 204 */
 export const listPatchBody = z.strictObject({ name: name.optional(), note: note.optional(), version });

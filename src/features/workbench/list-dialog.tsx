@@ -2,6 +2,7 @@ import { type FormEvent, useState } from "react";
 import { useNavigate } from "react-router-dom";
 import { type ViewSpec, viewToParams } from "#shared/catalogue/view.ts";
 import { count } from "#shared/format/numbers.ts";
+import { LIMITS } from "#shared/limits.ts";
 import { useMakeList } from "#src/api/lists.ts";
 import { Button } from "#src/ui/button.tsx";
 import { Dialog } from "#src/ui/dialog.tsx";
@@ -27,7 +28,8 @@ export const ListDialog = ({ programmeId, view, available, onClose }: Props) => 
   const [note, setNote] = useState("");
   const [first, setFirst] = useState(String(Math.min(USUAL_SIZE, available)));
   const size = Number(first);
-  const sizeError = Number.isInteger(size) && size >= 1 ? undefined : "Write a whole number, 1 or more.";
+  const isSize = Number.isInteger(size) && size >= 1 && size <= LIMITS.listStars;
+  const sizeError = isSize ? undefined : `Write a whole number from 1 to ${count(LIMITS.listStars)}.`;
   const submit = (event: FormEvent) => {
     event.preventDefault();
     if (sizeError) return;
