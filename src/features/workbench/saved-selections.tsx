@@ -99,7 +99,9 @@ export const SavedSelections = ({ programmeId, cuts, onOpen }: Props) => {
     <div className="mt-2 flex flex-wrap items-center gap-x-3 gap-y-1 text-[13px]">
       {selections.length > 0 ? (
         <Menu
-          label="Open a selection"
+          label={
+            current ? `Open a selection: ${current.name}, version ${current.number}` : "Open a selection"
+          }
           align="left"
           trigger={current ? `${current.name}, version ${current.number}` : "Open a selection"}
           triggerClassName="underline decoration-edge underline-offset-4 hover:decoration-ink"
