@@ -14,6 +14,7 @@ import { Loading } from "#src/ui/loading.tsx";
 import { Pill } from "#src/ui/pill.tsx";
 import { SectionTitle } from "#src/ui/section-title.tsx";
 import { ReachPicture } from "./reach-picture.tsx";
+import { StarOrigins } from "./star-origins.tsx";
 import { TransitPicture } from "./transit-picture.tsx";
 
 /** What the sheet tells of a star, in order, in words that need no key. */
@@ -89,44 +90,6 @@ const Position = ({ star }: { star: Sheet }) => {
   );
 };
 
-const Origins = ({ star }: { star: Sheet }) => (
-  <>
-    <SectionTitle>Where the values come from</SectionTitle>
-    <dl className="grid grid-cols-[auto_1fr] gap-x-3 gap-y-1 text-xs">
-      {Object.entries(star.methods).map(([key, word]) => (
-        <div key={key} className="contents">
-          <dt>{findColumn(key)?.label ?? key}</dt>
-          <dd className="text-soft">{word}</dd>
-        </div>
-      ))}
-    </dl>
-    {star.entries.map((entry) => (
-      <details
-        key={`${entry.extractId}-${entry.rowNumber}`}
-        className="mt-2 border-t border-hair pt-1.5 text-xs"
-      >
-        <summary>
-          Extract {entry.extractNumber}, {entry.extractName}, row {count(entry.rowNumber)}
-        </summary>
-        <dl className="mt-1 grid grid-cols-[1fr_auto] gap-x-3 font-mono">
-          {entry.sourceId === null ? null : (
-            <>
-              <dt className="font-sans text-soft">Identifier{entry.release ? `, ${entry.release}` : ""}</dt>
-              <dd>{entry.sourceId}</dd>
-            </>
-          )}
-          {Object.entries(entry.values).map(([key, value]) => (
-            <div key={key} className="contents">
-              <dt className="text-soft">{key}</dt>
-              <dd className="text-right">{String(value)}</dd>
-            </div>
-          ))}
-        </dl>
-      </details>
-    ))}
-  </>
-);
-
 const Dropped = ({ star, view }: { star: Sheet; view: ViewSpec }) =>
   star.droppedBy.length === 0 ? null : (
     <div className="mb-3 rounded border border-mark p-2.5 text-[13px]">
@@ -171,7 +134,7 @@ const Told = ({ star, view, onClose }: { star: Sheet; view: ViewSpec; onClose: (
       <TransitPicture star={star} />
       <SectionTitle>Smallest planet found, by period</SectionTitle>
       <ReachPicture star={star} />
-      <Origins star={star} />
+      <StarOrigins star={star} />
       <p className="mt-5 border-t border-hair pt-3 text-xs text-soft">
         Chance of transit is geometric; it says nothing about whether planets exist. Habitable zone is a model
         range of received light, not a promise. Radius recipe: about 3 % scatter, dwarfs only. RUWE near 1

@@ -7,7 +7,6 @@ import { meritsOptions } from "#src/api/merits.ts";
 import { histogramsOptions, readWindow, windowKey } from "#src/api/stars.ts";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
-import { EmptyState } from "#src/ui/empty-state.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
 import { Grid } from "#src/ui/grid/grid.tsx";
 import { useBlocks } from "#src/ui/grid/use-blocks.ts";
@@ -16,6 +15,7 @@ import { ColumnsDialog } from "./columns-dialog.tsx";
 import { GoToRowDialog } from "./go-to-row-dialog.tsx";
 import { Lede } from "./lede.tsx";
 import { ListDialog } from "./list-dialog.tsx";
+import { NoStarPasses } from "./no-star-passes.tsx";
 import { PlainPages } from "./plain-pages.tsx";
 import { starColumns } from "./star-columns.tsx";
 import { TableFooter } from "./table-footer.tsx";
@@ -43,24 +43,6 @@ const useTerms = (programmeId: string, summary: ViewSummary, shares: number): re
   if (chosen) return chosen.terms.map((t) => t.label);
   // An older version, or one that may not be read: its shares are there, its words are not.
   return summary.merit ? Array.from({ length: Math.max(1, shares) }, (_, i) => `term ${i + 1}`) : [];
-};
-
-/** Which cut leaves nothing, for the words of an empty table. */
-const NoStarPasses = ({ summary }: { summary: ViewSummary }) => {
-  const at = summary.ladder.findIndex((step) => !step.error && step.left === 0);
-  const step = summary.ladder[at];
-  return (
-    <EmptyState title="No star passes.">
-      {step ? (
-        <p>
-          Cut {at + 1} ({step.expression}) drops all of the {count(step.fell)} left. Loosen it, or look at the
-          ladder.
-        </p>
-      ) : (
-        <p>This edition holds no stars.</p>
-      )}
-    </EmptyState>
-  );
 };
 
 /** The sentence, the table and what stands under it. */

@@ -1,14 +1,8 @@
 import { createColumnHelper, tableFeatures, useTable } from "@tanstack/react-table";
-import {
-  type CSSProperties,
-  type KeyboardEvent,
-  type ReactNode,
-  useEffect,
-  useMemo,
-  useRef,
-  useState,
-} from "react";
+import { type KeyboardEvent, type ReactNode, useEffect, useMemo, useRef, useState } from "react";
 import { announce } from "../live-region.tsx";
+import { cellStyle, frozenOffsets } from "./cell-places.ts";
+import { GridRow } from "./grid-row.tsx";
 import { HeadCell } from "./head-cell.tsx";
 import { moveBy } from "./keys.ts";
 import type { CellPlace, GridColumn, GridSort } from "./types.ts";
@@ -44,22 +38,6 @@ interface Props<Row> {
   onLetter?: (letter: string) => void;
   isBusy?: boolean;
 }
-
-const frozenOffsets = <Row,>(columns: readonly GridColumn<Row>[]): readonly (number | null)[] => {
-  let left = 0;
-  return columns.map((column) => {
-    if (!column.isFrozen) return null;
-    const at = left;
-    left += column.width;
-    return at;
-  });
-};
-
-const cellStyle = (width: number, left: number | null, isHead: boolean): CSSProperties => ({
-  width,
-  minWidth: width,
-  ...(left === null ? {} : { position: "sticky", left, zIndex: isHead ? 3 : 1 }),
-});
 
 /**
  * A table of any length by the ARIA grid pattern: one tab stop, arrows move, the focused row stays mounted, rows are read
@@ -235,45 +213,22 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
       <div role="presentation" className="relative" style={{ height: track, minWidth: width }}>
         {shown.map(({ index, start }) => {
           const row = rowAt(index);
-          const isOpen = row !== undefined && rowKey(row) === openKey;
           const cells = modelRows.get(index)?.getAllCells();
-          const ground = isOpen ? "bg-sel" : "bg-paper";
           return (
-            <div
+            <GridRow
               key={index}
-              role="row"
-              tabIndex={-1}
-              aria-rowindex={index + 2}
-              aria-selected={isOpen}
-              onClick={() => row !== undefined && onOpen(row)}
-              className={`absolute top-0 left-0 flex w-full cursor-pointer border-b border-hair ${ground}`}
-              style={{ height: rowHeight, transform: `translateY(${place(start)}px)`, minWidth: width }}
-            >
-              {columns.map((column, i) => (
-                <div
-                  key={column.key}
-                  role={column.isRowHeader ? "rowheader" : "gridcell"}
-                  tabIndex={activeRow === index && active.column === i ? 0 : -1}
-                  aria-colindex={i + 1}
-                  data-row={index}
-                  data-column={i}
-                  onFocus={() => setActive({ row: index, column: i })}
-                  style={cellStyle(column.width, offsets[i] ?? null, false)}
-                  className={`flex-none overflow-hidden px-2.5 whitespace-nowrap ${ground} ${column.isText ? "text-left" : "text-right"}`}
-                >
-                  <span
-                    className="flex h-full items-center"
-                    style={{ justifyContent: column.isText ? "flex-start" : "flex-end" }}
-                  >
-                    {cells?.[i] ? (
-                      <table.FlexRender cell={cells[i]} />
-                    ) : column.isRowHeader ? (
-                      <span className="text-faint">loading</span>
-                    ) : null}
-                  </span>
-                </div>
-              ))}
-            </div>
+              index={index}
+              top={place(start)}
+              height={rowHeight}
+              minWidth={width}
+              columns={columns}
+              offsets={offsets}
+              isOpen={row !== undefined && rowKey(row) === openKey}
+              focusedColumn={activeRow === index ? active.column : null}
+              contents={cells?.map((cell) => <table.FlexRender key={cell.id} cell={cell} />)}
+              onFocus={(column) => setActive({ row: index, column })}
+              onOpen={() => row !== undefined && onOpen(row)}
+            />
           );
         })}
       </div>
