@@ -5,14 +5,25 @@ import { type Child, type ChildSpec, endLeftOver, keepRunning } from "./children
 import { ROOT } from "./root.ts";
 import { Trouble } from "./trouble.ts";
 
+/** The C library would keep freed memory apart for each of a dozen threads. */
+const MALLOC_ARENA_MAX = "2";
 const READY_MS = 60_000;
 const DEV_URL = "http://127.0.0.1:4500";
 
 const at = (path: string): string => join(ROOT, path);
 
+/**
+ * The web process keeps its young objects in little room and so gives memory back early; the worker, which makes
+ * millions of short-lived ones, is given more, as collecting them took a third of an import.
+ */
+const HEAP: Record<string, string[]> = {
+  "server/web.ts": ["--max-semi-space-size=4", "--max-old-space-size=256"],
+  "server/worker.ts": ["--max-semi-space-size=64"],
+};
+
 const serverArgs = (file: string, isDev: boolean): string[] => {
   const follow = ["--import", at("scripts/lib/follow-parent.mjs")];
-  if (!isDev) return ["--import", "tsx", ...follow, at(file)];
+  if (!isDev) return [...(HEAP[file] ?? []), "--import", "tsx", ...follow, at(file)];
   const watch = ["watch", "--clear-screen=false", "--tsconfig", at("server/tsconfig.json")];
   return [...follow, at("node_modules/tsx/dist/cli.mjs"), ...watch, at(file)];
 };
@@ -40,7 +51,7 @@ const specs = (settings: Settings, databaseUrl: string, isDev: boolean): ChildSp
   const server = (name: string, file: string): ChildSpec => ({
     name,
     args: serverArgs(file, isDev),
-    env,
+    env: { MALLOC_ARENA_MAX, ...env },
     mark: at(file),
   });
   const all = [server("web", "server/web.ts"), server("worker", "server/worker.ts")];

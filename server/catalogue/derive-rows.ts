@@ -1,5 +1,5 @@
 import type { Recipe } from "#shared/science/recipes.ts";
-import type { Value } from "../database/bulk.ts";
+import { encodeRow, encodeValue, type Value } from "../database/bulk.ts";
 import { stellarColumns } from "../database/star-table.ts";
 import { deriveColumns } from "../derive/derive.ts";
 import { allocateGiven, GIVEN_KEYS, type StellarColumns } from "../derive/star-columns.ts";
@@ -18,8 +18,8 @@ const arrayOf = (derived: StellarColumns, key: string): ArrayLike<number> => {
   return found;
 };
 
-/** Whole rows of values, in the order of `STAR_VALUES`, from adopted ones. */
-export const deriveRows = (adopted: readonly Value[][], recipe: Recipe): Value[][] => {
+/** Whole rows as encoded lines, in the order of `STAR_VALUES`, from adopted values. */
+export const deriveLines = (adopted: readonly Value[][], recipe: Recipe): string[] => {
   const given = allocateGiven(adopted.length);
   for (const key of GIVEN_KEYS) {
     const at = GIVEN.indexOf(key);
@@ -28,11 +28,9 @@ export const deriveRows = (adopted: readonly Value[][], recipe: Recipe): Value[]
   }
   const derived = deriveColumns(given, adopted.length, recipe);
   const columns = STELLAR.map((key) => arrayOf(derived, key));
-  return adopted.map((row, i) => [
-    ...row,
-    ...columns.map((column) => {
-      const value = column[i] ?? Number.NaN;
-      return Number.isNaN(value) ? null : value;
-    }),
-  ]);
+  return adopted.map((row, i) => {
+    let line = encodeRow(row);
+    for (const column of columns) line += `\t${encodeValue(column[i] ?? null)}`;
+    return line;
+  });
 };

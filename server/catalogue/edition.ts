@@ -4,13 +4,13 @@ import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.
 import { Programme } from "../database/entities/programme.entity.ts";
 import { inTransaction } from "../database/transaction.ts";
 import { conflict, notFound } from "../errors.ts";
-import { type JobRun, LeaseLost, WorkerStopping } from "../jobs/job-run.ts";
+import { type Cleaner, type JobRun, LeaseLost, WorkerStopping } from "../jobs/job-run.ts";
 import { writeLine } from "../logbook/service.ts";
 import { buildScanIndex } from "../scan/build.ts";
 import { removeInvisibleStars } from "./clean.ts";
 import { Fingerprint } from "./fingerprint.ts";
 import { instrumentPairs } from "./instrument-pairs.ts";
-import { type Basis, type Changes, prepareStars } from "./prepare.ts";
+import { type Basis, type Changes, prepareBlock, readStarBlock, writeBlock } from "./prepare.ts";
 
 export interface EditionPlan {
   /** "extract 2, Northern motions" */
@@ -26,7 +26,7 @@ export interface EditionPlan {
   commit: (tx: EntityManager, edition: number, changes: Changes) => Promise<void>;
 }
 
-const programmeOf = async (run: JobRun): Promise<Programme> => {
+const programmeOf = async (run: Pick<JobRun, "deps" | "job">): Promise<Programme> => {
   const programme = await run.deps.db.manager.findOneBy(Programme, { id: run.job.programmeId ?? "0" });
   if (!programme) throw notFound("This programme");
   return programme;
@@ -40,14 +40,25 @@ const prepareAll = async (
 ): Promise<Changes> => {
   const changes: Changes = { added: 0, ended: 0 };
   let done = 0;
+  // One block is written while the next is read and derived.
+  let writing = Promise.resolve();
   await run.progress(0, plan.total, "Deriving", "stars");
-  for await (const ids of plan.stars()) {
-    const { added, ended } = await prepareStars(run, basis, ids, fingerprint);
-    changes.added += added;
-    changes.ended += ended;
-    done += ids.length;
-    await run.progress(done, plan.total, "Deriving", "stars");
+  try {
+    for await (const ids of plan.stars()) {
+      const prepared = prepareBlock(basis, await readStarBlock(run, basis, ids), fingerprint);
+      changes.added += prepared.added;
+      changes.ended += prepared.ended;
+      await writing;
+      await run.progress(done, plan.total, "Deriving", "stars");
+      writing = writeBlock(run, basis, prepared);
+      writing.catch(() => undefined);
+      done += ids.length;
+    }
+  } finally {
+    // Whatever happens next, a clean-up above all, must not be overtaken by rows still on their way.
+    await writing;
   }
+  await run.progress(done, plan.total, "Deriving", "stars");
   return changes;
 };
 
@@ -167,7 +178,7 @@ export const orCleanUp = async (
 };
 
 /** What `orCleanUp` removes of an edition that did not come into force. */
-export const removePrepared = async (run: JobRun): Promise<void> => {
+export const removePrepared: Cleaner = async (run) => {
   const programme = await programmeOf(run);
   await removeInvisibleStars(run.deps.db, programme.id, programme.edition);
 };

@@ -1,29 +1,53 @@
 import { createHash } from "node:crypto";
 
-const MODULUS = 1n << 256n;
+/** 256 bits in parts of 32, the lowest first. */
+const PARTS = 8;
+const BASE = 2 ** 32;
+/** Each part is exact as a double for some two million sums; carried over well before. */
+const CARRY_EVERY = 1_000_000;
 
 /**
  * Fingerprint of a set of stars: the sum of the SHA-256 of each star's identity and values, modulo 2^256. The order
  * of the stars does not matter, and an edition's follows from the one before by what changed.
  */
 export class Fingerprint {
-  private sum: bigint;
+  private readonly parts = new Float64Array(PARTS);
+  private pending = 0;
 
   constructor(before?: string) {
-    this.sum = before === undefined ? 0n : BigInt(`0x${before}`);
+    if (before !== undefined) this.sum(Buffer.from(before, "hex"), 1);
   }
 
   add(row: string): void {
-    this.sum = (this.sum + hashOf(row)) % MODULUS;
+    this.sum(hashOf(row), 1);
   }
 
   remove(row: string): void {
-    this.sum = (this.sum - hashOf(row) + MODULUS) % MODULUS;
+    this.sum(hashOf(row), -1);
   }
 
   toString(): string {
-    return this.sum.toString(16).padStart(64, "0");
+    this.carry();
+    return Array.from(this.parts, (part) => part.toString(16).padStart(8, "0"))
+      .reverse()
+      .join("");
+  }
+
+  private sum(hash: Buffer, sign: 1 | -1): void {
+    for (let i = 0; i < PARTS; i++)
+      this.parts[i] = (this.parts[i] ?? 0) + sign * hash.readUInt32BE(4 * (PARTS - 1 - i));
+    if (++this.pending >= CARRY_EVERY) this.carry();
+  }
+
+  private carry(): void {
+    let over = 0;
+    for (let i = 0; i < PARTS; i++) {
+      const part = (this.parts[i] ?? 0) + over;
+      over = Math.floor(part / BASE);
+      this.parts[i] = part - over * BASE;
+    }
+    this.pending = 0;
   }
 }
 
-const hashOf = (row: string): bigint => BigInt(`0x${createHash("sha256").update(row).digest("hex")}`);
+const hashOf = (row: string): Buffer => createHash("sha256").update(row).digest();

@@ -5,7 +5,8 @@ import { normalisedSql } from "./designation.ts";
 const RANGE = 20_000;
 
 /** Star ids need no sequence: the entry that founds a star gives it its number. */
-const FOUNDED = "(extract_id << 32) + `row_number`";
+export const foundedId = (extractId: string, row: number): string =>
+  String((BigInt(extractId) << 32n) + BigInt(row));
 
 const OTHERS = `JOIN extract x ON x.extract_id = o.extract_id AND x.state = 'committed'`;
 
@@ -18,7 +19,7 @@ const BY_IDENTIFIER = `
       AND BINARY o.source_id = BINARY n.source_id AND COALESCE(o.\`release\`, '') = COALESCE(n.\`release\`, '')
     ${OTHERS}
     WHERE n.extract_id = ? AND n.\`row_number\` > ? AND n.\`row_number\` <= ? AND n.source_id IS NOT NULL
-      AND o.extract_id <> n.extract_id AND o.star_id IS NOT NULL
+      AND o.extract_id <> n.extract_id
     GROUP BY n.\`row_number\`
   ) found ON found.row_no = e.\`row_number\`
   SET e.star_id = found.star_id WHERE e.extract_id = ?`;
@@ -27,7 +28,7 @@ const BY_DESIGNATION = `
   UPDATE entry e JOIN name_key k ON k.name = ${normalisedSql("e.designation")}
   SET e.star_id = k.star_id
   WHERE e.extract_id = ? AND e.\`row_number\` > ? AND e.\`row_number\` <= ?
-    AND e.source_id IS NULL AND e.star_id IS NULL AND e.designation IS NOT NULL`;
+    AND e.source_id IS NULL AND e.designation IS NOT NULL`;
 
 /** Names of the stars there are, in one spelling; for one connection, and gone with it. */
 const NAME_KEYS = [
@@ -39,22 +40,20 @@ const NAME_KEYS = [
 const FILL_NAME_KEYS = `
   INSERT INTO name_key
   SELECT ${normalisedSql("o.designation")} AS name, MIN(o.star_id) FROM entry o ${OTHERS}
-  WHERE o.programme_id = ? AND o.designation IS NOT NULL AND o.star_id IS NOT NULL GROUP BY name`;
+  WHERE o.programme_id = ? AND o.designation IS NOT NULL GROUP BY name`;
 
-/** Two rows of one extract are never taken for one star: the later ones found their own. */
+/** Two rows of one extract are never taken for one star: the later ones found their own, as `foundedId` says. */
 const PART_TWINS = `
   UPDATE entry e
   JOIN (SELECT star_id, MIN(\`row_number\`) AS first FROM entry
-        WHERE extract_id = ? AND star_id IS NOT NULL GROUP BY star_id HAVING COUNT(*) > 1) twin
+        WHERE extract_id = ? GROUP BY star_id HAVING COUNT(*) > 1) twin
     ON twin.star_id = e.star_id AND twin.first <> e.\`row_number\`
-  SET e.star_id = NULL WHERE e.extract_id = ?`;
-
-const FOUND = `UPDATE entry SET star_id = ${FOUNDED}
-  WHERE extract_id = ? AND \`row_number\` > ? AND \`row_number\` <= ? AND star_id IS NULL`;
+  SET e.star_id = (e.extract_id << 32) + e.\`row_number\` WHERE e.extract_id = ?`;
 
 /**
- * Gives every entry of an extract its star: the one with the same identifier in the same release; for entries
- * without an identifier the one of the same name; else a new one. Only committed extracts are matched against.
+ * Finds the entries of an extract, each of which has founded a star of its own so far, that speak of a star there is:
+ * the one with the same identifier in the same release; for entries without an identifier the one of the same name.
+ * Only committed extracts are matched against.
  */
 export const matchEntries = async (run: JobRun, extractId: string): Promise<void> => {
   const { programmeId } = run.job;
@@ -62,29 +61,28 @@ export const matchEntries = async (run: JobRun, extractId: string): Promise<void
   const overRanges = async (sql: string, last: number, more: unknown[], step: number): Promise<void> => {
     for (let from = 0; from < last; from += RANGE) {
       await runner.query(sql, [extractId, from, from + RANGE, ...more]);
-      await run.progress((step * last + Math.min(from + RANGE, last)) / 3, last, "Matching", "rows");
+      await run.progress((step * last + Math.min(from + RANGE, last)) / 2, last, "Matching", "rows");
     }
   };
   try {
+    await run.progress(0, null, "Matching", "rows");
+    const [others]: { n: string }[] = await runner.query(
+      "SELECT COUNT(*) AS n FROM extract WHERE programme_id = ? AND state = 'committed'",
+      [programmeId],
+    );
+    if (Number(others?.n) === 0) return;
     const [row]: { last: number | null; unnamed: string }[] = await runner.query(
       "SELECT MAX(`row_number`) AS last, COUNT(IF(source_id IS NULL, 1, NULL)) AS unnamed FROM entry WHERE extract_id = ?",
       [extractId],
     );
     const last = row?.last ?? 0;
-    const [others]: { n: string }[] = await runner.query(
-      "SELECT COUNT(*) AS n FROM extract WHERE programme_id = ? AND state = 'committed'",
-      [programmeId],
-    );
-    if (Number(others?.n) > 0) {
-      await overRanges(BY_IDENTIFIER, last, [extractId], 0);
-      if (Number(row?.unnamed) > 0) {
-        for (const sql of NAME_KEYS) await runner.query(sql);
-        await runner.query(FILL_NAME_KEYS, [programmeId]);
-        await overRanges(BY_DESIGNATION, last, [], 1);
-      }
-      await runner.query(PART_TWINS, [extractId, extractId]);
+    await overRanges(BY_IDENTIFIER, last, [extractId], 0);
+    if (Number(row?.unnamed) > 0) {
+      for (const sql of NAME_KEYS) await runner.query(sql);
+      await runner.query(FILL_NAME_KEYS, [programmeId]);
+      await overRanges(BY_DESIGNATION, last, [], 1);
     }
-    await overRanges(FOUND, last, [], 2);
+    await runner.query(PART_TWINS, [extractId, extractId]);
   } finally {
     if (!runner.isReleased) {
       await runner.query("DROP TEMPORARY TABLE IF EXISTS name_key").catch(() => undefined);

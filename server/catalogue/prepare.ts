@@ -1,8 +1,9 @@
 import type { Recipe } from "#shared/science/recipes.ts";
-import { bulkInsert, encodeValue, type Value } from "../database/bulk.ts";
+import { bulkInsertLines, encodeRow, type Value } from "../database/bulk.ts";
+import { readArrays } from "../database/rows.ts";
 import type { JobRun } from "../jobs/job-run.ts";
 import { adopt, GIVEN } from "./adopt.ts";
-import { deriveRows, STAR_VALUES } from "./derive-rows.ts";
+import { deriveLines, STAR_VALUES } from "./derive-rows.ts";
 import type { Fingerprint } from "./fingerprint.ts";
 
 /** Which extracts count for the edition being made, besides those committed. */
@@ -20,8 +21,6 @@ export interface Changes {
   ended: number;
 }
 
-type Row = Record<string, Value>;
-
 /** Looks the listed ids up one by one in the index: as a derived table they would be joined by a scan. */
 const BY_INDEX = "SET STATEMENT in_predicate_conversion_threshold = 0 FOR";
 
@@ -29,94 +28,106 @@ const list = (columns: readonly string[], alias: string): string =>
   columns.map((c) => `${alias}.\`${c}\``).join(", ");
 const ENTRY_COLUMNS = list(GIVEN, "e");
 const STAR_COLUMNS = list(STAR_VALUES, "s");
+const WRITTEN_COLUMNS = ["programme_id", "star_id", "from_edition", ...STAR_VALUES];
+
+/** What is read of a block of stars: what extracts say of them, and their rows in the edition in force. */
+export interface StarBlock {
+  ids: string[];
+  entries: Map<string, Value[][]>;
+  inForce: Map<string, string>;
+}
 
 /** What the extracts that count say of those stars, the preferred first: the extract committed last. */
 const entriesOf = async (run: JobRun, basis: Basis, ids: string[]): Promise<Map<string, Value[][]>> => {
-  const rows = await run.deps.db.query<Row[]>(
+  const rows = await readArrays(
+    run.deps.db,
     `${BY_INDEX} SELECT e.star_id, e.extract_id, x.edition, ${ENTRY_COLUMNS}
      FROM entry e FORCE INDEX (entry_star) JOIN extract x ON x.extract_id = e.extract_id
      WHERE e.star_id IN (?) AND x.programme_id = ?
        AND (x.state = 'committed' OR x.extract_id = ?) AND x.extract_id <> ?`,
     [ids, basis.programmeId, basis.withExtract ?? 0, basis.withoutExtract ?? 0],
   );
-  const age = (row: Row): number =>
-    String(row.extract_id) === basis.withExtract ? Number.POSITIVE_INFINITY : Number(row.edition);
-  rows.sort((a, b) => age(b) - age(a) || Number(b.extract_id) - Number(a.extract_id));
+  const age = ([, extractId, edition]: Value[]): number =>
+    String(extractId) === basis.withExtract ? Number.POSITIVE_INFINITY : Number(edition);
+  rows.sort((a, b) => age(b) - age(a) || Number(b[1]) - Number(a[1]));
   const byStar = new Map<string, Value[][]>();
-  for (const row of rows) {
-    const values = GIVEN.map((key) => row[key] ?? null);
-    const before = byStar.get(String(row.star_id));
+  for (const [id, , , ...values] of rows) {
+    const before = byStar.get(String(id));
     if (before) before.push(values);
-    else byStar.set(String(row.star_id), [values]);
+    else byStar.set(String(id), [values]);
   }
   return byStar;
 };
 
-/** Those stars as the edition in force has them, as one text each. */
-const textsInForce = async (run: JobRun, basis: Basis, ids: string[]): Promise<Map<string, string>> => {
+/** Those stars as the edition in force has them, as one encoded line each. */
+const linesInForce = async (run: JobRun, basis: Basis, ids: string[]): Promise<Map<string, string>> => {
   if (basis.edition === 0) return new Map();
-  const rows = await run.deps.db.query<Row[]>(
+  const rows = await readArrays(
+    run.deps.db,
     `${BY_INDEX} SELECT s.star_id, ${STAR_COLUMNS} FROM star s FORCE INDEX (PRIMARY)
      WHERE s.programme_id = ? AND s.star_id IN (?) AND s.from_edition <= ? AND s.to_edition IS NULL`,
     [basis.programmeId, ids, basis.edition],
   );
-  return new Map(
-    rows.map((row) => [String(row.star_id), textOf(STAR_VALUES.map((key) => row[key] ?? null))]),
-  );
+  return new Map(rows.map(([id, ...values]) => [String(id), encodeRow(values)]));
 };
 
-const textOf = (values: readonly Value[]): string => values.map(encodeValue).join("\t");
+export const readStarBlock = async (run: JobRun, basis: Basis, ids: string[]): Promise<StarBlock> => ({
+  ids,
+  entries: await entriesOf(run, basis, ids),
+  inForce: await linesInForce(run, basis, ids),
+});
 
-const close = async (run: JobRun, basis: Basis, ids: string[]): Promise<void> => {
-  if (ids.length === 0) return;
-  await run.deps.db.query(
-    `${BY_INDEX} UPDATE star FORCE INDEX (PRIMARY) SET to_edition = ?
-     WHERE programme_id = ? AND star_id IN (?) AND from_edition <= ? AND to_edition IS NULL`,
-    [basis.edition + 1, basis.programmeId, ids, basis.edition],
-  );
-};
+/** What the next edition writes of a block, and which rows it takes the place of. */
+export interface PreparedBlock extends Changes {
+  lines: string[];
+  closed: string[];
+}
 
-/**
- * Adopts and derives a block of stars for the edition after the one in force. Only stars that came out differently
- * get a new row; nothing of it shows before that edition is in force.
- */
-export const prepareStars = async (
-  run: JobRun,
+/** Adopts and derives a block of stars: only those that come out differently get a new row. */
+export const prepareBlock = (
   basis: Basis,
-  ids: string[],
+  { ids, entries, inForce }: StarBlock,
   fingerprint: Fingerprint,
-): Promise<Changes> => {
-  const entries = await entriesOf(run, basis, ids);
-  const before = await textsInForce(run, basis, ids);
+): PreparedBlock => {
   const living = ids.filter((id) => entries.has(id));
-  const rows = deriveRows(
+  const derived = deriveLines(
     living.map((id) => adopt(entries.get(id) ?? [])),
     basis.recipe,
   );
-  const written: Value[][] = [];
-  const closed: string[] = [];
-  const changes: Changes = { added: 0, ended: 0 };
+  const prepared: PreparedBlock = { lines: [], closed: [], added: 0, ended: 0 };
   living.forEach((id, i) => {
-    const values = rows[i] ?? [];
-    const text = textOf(values);
-    const old = before.get(id);
-    if (old === text) return;
-    if (old === undefined) changes.added++;
+    const line = derived[i] ?? "";
+    const old = inForce.get(id);
+    if (old === line) return;
+    if (old === undefined) prepared.added++;
     else {
       fingerprint.remove(old);
-      closed.push(id);
+      prepared.closed.push(id);
     }
-    fingerprint.add(text);
-    written.push([basis.programmeId, id, basis.edition + 1, ...values]);
+    fingerprint.add(line);
+    prepared.lines.push(`${basis.programmeId}\t${id}\t${basis.edition + 1}\t${line}`);
   });
   for (const id of ids) {
-    const old = before.get(id);
+    const old = inForce.get(id);
     if (old === undefined || entries.has(id)) continue;
     fingerprint.remove(old);
-    closed.push(id);
-    changes.ended++;
+    prepared.closed.push(id);
+    prepared.ended++;
   }
-  await close(run, basis, closed);
-  await bulkInsert(run.deps.db, "star", ["programme_id", "star_id", "from_edition", ...STAR_VALUES], written);
-  return changes;
+  return prepared;
+};
+
+/** Nothing of it shows before the edition is in force. */
+export const writeBlock = async (
+  run: JobRun,
+  basis: Basis,
+  { lines, closed }: PreparedBlock,
+): Promise<void> => {
+  if (closed.length > 0)
+    await run.deps.db.query(
+      `${BY_INDEX} UPDATE star FORCE INDEX (PRIMARY) SET to_edition = ?
+       WHERE programme_id = ? AND star_id IN (?) AND from_edition <= ? AND to_edition IS NULL`,
+      [basis.edition + 1, basis.programmeId, closed, basis.edition],
+    );
+  await bulkInsertLines(run.deps.db, "star", WRITTEN_COLUMNS, lines);
 };

@@ -33,12 +33,29 @@ export const encodeValue = (value: Value): string => {
   return Number.isFinite(value) ? String(value) : "\\N";
 };
 
-function* pieces(rows: readonly Value[][]): Generator<Buffer> {
+/** A row as a line of the stream, without the line's end. */
+export const encodeRow = (row: readonly Value[]): string => {
+  let text = encodeValue(row[0] ?? null);
+  for (let i = 1; i < row.length; i++) text += `\t${encodeValue(row[i] ?? null)}`;
+  return text;
+};
+
+const ESCAPES: Record<string, string> = { t: "\t", n: "\n", r: "\r", "0": "\0" };
+
+/** Back from a line to its values, all as texts: the database makes the same numbers of them. */
+const decodeRow = (line: string): (string | null)[] =>
+  line
+    .split("\t")
+    .map((cell) =>
+      cell === "\\N"
+        ? null
+        : cell.replace(/\\(.)/g, (_match, escaped: string) => ESCAPES[escaped] ?? escaped),
+    );
+
+function* pieces(lines: readonly string[]): Generator<Buffer> {
   let text = "";
-  for (const row of rows) {
-    text += encodeValue(row[0] ?? null);
-    for (let i = 1; i < row.length; i++) text += `\t${encodeValue(row[i] ?? null)}`;
-    text += "\n";
+  for (const line of lines) {
+    text += `${line}\n`;
     if (text.length < PIECE_BYTES) continue;
     yield Buffer.from(text);
     text = "";
@@ -53,19 +70,19 @@ const load = (
   connection: PoolConnection,
   table: string,
   columns: readonly string[],
-  rows: readonly Value[][],
+  lines: readonly string[],
 ): Promise<void> =>
   new Promise((resolve, reject) => {
     const sql = `LOAD DATA LOCAL INFILE 'rows' INTO TABLE \`${table}\` CHARACTER SET utf8mb4
       FIELDS TERMINATED BY '\\t' ESCAPED BY '\\\\' LINES TERMINATED BY '\\n' (${list(columns)})`;
-    const infileStreamFactory = () => Readable.from(pieces(rows), { objectMode: false });
+    const infileStreamFactory = () => Readable.from(pieces(lines), { objectMode: false });
     connection.query<ResultSetHeader>({ sql, infileStreamFactory }, (error, result) => {
       if (error) return reject(error);
-      if (result.affectedRows === rows.length && result.warningStatus === 0) return resolve();
+      if (result.affectedRows === lines.length && result.warningStatus === 0) return resolve();
       connection.query("SHOW WARNINGS LIMIT 3", (_error, warnings) =>
         reject(
           new Error(
-            `${rows.length} rows were sent to ${table} and ${result.affectedRows} arrived: ${JSON.stringify(warnings)}`,
+            `${lines.length} rows were sent to ${table} and ${result.affectedRows} arrived: ${JSON.stringify(warnings)}`,
           ),
         ),
       );
@@ -76,32 +93,30 @@ const insert = async (
   db: DataSource,
   table: string,
   columns: readonly string[],
-  rows: readonly Value[][],
+  lines: readonly string[],
 ): Promise<void> => {
-  for (let from = 0; from < rows.length; from += INSERT_ROWS) {
-    const values = rows
-      .slice(from, from + INSERT_ROWS)
-      .map((row) => row.map((v) => (typeof v === "number" && !Number.isFinite(v) ? null : v)));
+  for (let from = 0; from < lines.length; from += INSERT_ROWS) {
+    const values = lines.slice(from, from + INSERT_ROWS).map(decodeRow);
     await db.query(`INSERT INTO \`${table}\` (${list(columns)}) VALUES ?`, [values]);
   }
 };
 
 const errnoOf = (error: unknown): number => Number((error as { errno?: unknown }).errno);
 
-/** Writes the rows in one statement of its own, or all of them again where the database asks to. */
-export const bulkInsert = async (
+/** Writes encoded rows in one statement of its own, or all of them again where the database asks to. */
+export const bulkInsertLines = async (
   db: DataSource,
   table: string,
   columns: readonly string[],
-  rows: readonly Value[][],
+  lines: readonly string[],
 ): Promise<void> => {
-  if (rows.length === 0) return;
+  if (lines.length === 0) return;
   const runner = db.createQueryRunner();
   try {
     const connection = (await runner.connect()) as PoolConnection;
     for (let attempt = 1; ; attempt++) {
       try {
-        return await load(connection, table, columns, rows);
+        return await load(connection, table, columns, lines);
       } catch (error) {
         if (NOT_ALLOWED.has(errnoOf(error))) break;
         if (!TRY_AGAIN.has(errnoOf(error)) || attempt >= ATTEMPTS) throw error;
@@ -111,5 +126,13 @@ export const bulkInsert = async (
   } finally {
     await runner.release();
   }
-  await insert(db, table, columns, rows);
+  await insert(db, table, columns, lines);
 };
+
+/** The same for rows that are values still. */
+export const bulkInsert = (
+  db: DataSource,
+  table: string,
+  columns: readonly string[],
+  rows: readonly Value[][],
+): Promise<void> => bulkInsertLines(db, table, columns, rows.map(encodeRow));

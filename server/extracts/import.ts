@@ -7,12 +7,12 @@ import { matchEntries } from "../catalogue/match.ts";
 import { starsOfExtract } from "../catalogue/star-blocks.ts";
 import { Extract } from "../database/entities/extract.entity.ts";
 import type { JobRow } from "../database/entities/job.entity.ts";
-import type { Failure, JobRun } from "../jobs/job-run.ts";
+import type { Cleaner, Failure, JobRun } from "../jobs/job-run.ts";
 import { loadEntries, type RowCounts } from "./load-entries.ts";
 
 const payload = z.object({ extractId: z.string() });
 
-const extractOf = (run: JobRun): Promise<Extract> =>
+const extractOf = (run: Pick<JobRun, "deps" | "job">): Promise<Extract> =>
   run.deps.db.manager.findOneByOrFail(Extract, {
     id: payload.parse(run.job.payload).extractId,
     programmeId: run.job.programmeId ?? "0",
@@ -39,16 +39,21 @@ const commit =
     );
   };
 
+/** Takes away all that an import which was not committed wrote. */
+export const cleanImport: Cleaner = async (run) => {
+  const extract = await extractOf(run);
+  // What a worker committed before it died stays.
+  if (extract.state !== "importing") return;
+  await removeEntries(run.deps.db, extract.id);
+  await removePrepared(run);
+};
+
 /** Reads, matches, derives, and puts a new edition in force: all of it, or nothing. */
 export const importExtract = async (run: JobRun): Promise<void> => {
   const extract = await extractOf(run);
   // The worker may have died between the commit and the end of the job.
   if (extract.state !== "importing") return;
   const { db } = run.deps;
-  const clean = async (): Promise<void> => {
-    await removeEntries(db, extract.id);
-    await removePrepared(run);
-  };
   await orCleanUp(
     run,
     async () => {
@@ -64,7 +69,7 @@ export const importExtract = async (run: JobRun): Promise<void> => {
         commit: commit(run, extract, counts),
       });
     },
-    clean,
+    () => cleanImport(run),
   );
 };
 

@@ -2,7 +2,8 @@ import type { ReadingPlan } from "#shared/api/extracts.ts";
 import { LIMITS } from "#shared/limits.ts";
 import { GIVEN } from "../catalogue/adopt.ts";
 import { IdentifierSet } from "../catalogue/identifier-set.ts";
-import { bulkInsert, type Value } from "../database/bulk.ts";
+import { foundedId } from "../catalogue/match.ts";
+import { bulkInsert, bulkInsertLines, encodeRow, type Value } from "../database/bulk.ts";
 import type { Extract } from "../database/entities/extract.entity.ts";
 import { notFound, unprocessable } from "../errors.ts";
 import type { CsvRecord } from "../formats/csv-splitter.ts";
@@ -22,16 +23,17 @@ const BLOCK_ROWS = 10_000;
 const BLOCK_CHARACTERS = 8_000_000;
 const REASON_CHARACTERS = 500;
 
-const ENTRY_COLUMNS = ["extract_id", "row_number", "programme_id", ...GIVEN];
+const ENTRY_COLUMNS = ["extract_id", "row_number", "programme_id", "star_id", ...GIVEN];
 const REFUSED_COLUMNS = ["extract_id", "line_number", "reason", "text"];
 
 /** Sorts the rows of a file into accepted, refused and skipped, and writes them block by block. */
 class Loader {
   readonly counts: RowCounts = { read: 0, accepted: 0, refused: 0, skipped: 0 };
-  private entries: Value[][] = [];
+  private entries: string[] = [];
   private aside: Value[][] = [];
   private characters = 0;
   private kept = 0;
+  private writing = Promise.resolve();
   private readonly seen = new IdentifierSet();
   private readonly map: (cells: readonly string[]) => Mapped;
 
@@ -67,20 +69,35 @@ class Loader {
     }
     this.counts.accepted++;
     this.characters += record.text.length;
-    this.entries.push([this.extract.id, this.counts.read, this.extract.programmeId, ...values]);
+    const { id, programmeId } = this.extract;
+    const row = this.counts.read;
+    this.entries.push(`${id}\t${row}\t${programmeId}\t${foundedId(id, row)}\t${encodeRow(values)}`);
   }
 
   get isFull(): boolean {
     return this.entries.length >= BLOCK_ROWS || this.characters >= BLOCK_CHARACTERS;
   }
 
+  /** Hands the block on to be written while the next one is read; waits for the one before. */
   async flush(): Promise<void> {
-    const { db } = this.run.deps;
-    await bulkInsert(db, "entry", ENTRY_COLUMNS, this.entries);
-    await bulkInsert(db, "refused_row", REFUSED_COLUMNS, this.aside);
+    const { entries, aside } = this;
     this.entries = [];
     this.aside = [];
     this.characters = 0;
+    await this.writing;
+    this.writing = this.write(entries, aside);
+    this.writing.catch(() => undefined);
+  }
+
+  /** Nothing may be on its way any more when a clean-up begins. */
+  settled(): Promise<void> {
+    return this.writing;
+  }
+
+  private async write(entries: string[], aside: Value[][]): Promise<void> {
+    const { db } = this.run.deps;
+    await bulkInsertLines(db, "entry", ENTRY_COLUMNS, entries);
+    await bulkInsert(db, "refused_row", REFUSED_COLUMNS, aside);
   }
 
   private refuse(record: CsvRecord, reason: string): void {
@@ -104,7 +121,7 @@ const refuseOtherHeader = (plan: ReadingPlan, width: number): void => {
   });
 };
 
-/** Reads the original under its plan into entries that belong to no star yet. */
+/** Reads the original under its plan into entries that each found a star of their own until they are matched. */
 export const loadEntries = async (run: JobRun, extract: Extract, plan: ReadingPlan): Promise<RowCounts> => {
   if (extract.originalKey === null) throw notFound("This file");
   const total = Number(extract.bytes);
@@ -128,6 +145,7 @@ export const loadEntries = async (run: JobRun, extract: Extract, plan: ReadingPl
     await loader?.flush();
   } finally {
     source.destroy();
+    await loader?.settled();
   }
   const counts = loader?.counts ?? { read: 0, accepted: 0, refused: 0, skipped: 0 };
   if (counts.accepted === 0)

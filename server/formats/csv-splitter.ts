@@ -15,8 +15,10 @@ const tooLong = (line: number): AppError =>
   new AppError(
     422,
     "record-too-long",
-    `Line ${line} opens a quote that is not closed in the ${MOST_CHARACTERS / 1e6} million characters after it, so what follows cannot be told apart.`,
-    { hint: "Close the quote in that line, or export the table again, and bring the file as a new extract." },
+    `Line ${line} does not end in ${MOST_CHARACTERS / 1e6} million characters, or opens a quote that is not closed in them, so its rows cannot be told apart.`,
+    {
+      hint: "Close the quote, or export the table again with one row on a line, and bring the file as a new extract.",
+    },
   );
 
 /**

@@ -4,6 +4,9 @@ import type { Deps } from "../deps.ts";
 import { AppError, notFound } from "../errors.ts";
 import { knownError } from "./known-errors.ts";
 
+/** Not a failure: the client asks again each second until the table is there. */
+const AWAITED = "scan-index-building";
+
 const defect = (requestId: string): AppError =>
   new AppError(
     500,
@@ -34,7 +37,9 @@ export const errorHandler =
   (deps: Deps): ErrorRequestHandler =>
   (error, req, res, next) => {
     const known = knownError(error);
-    if (!known || known.status >= 500)
+    if (known?.code === AWAITED)
+      deps.log.debug("http", "A request waits", { requestId: req.requestId, error });
+    else if (!known || known.status >= 500)
       deps.log.error("http", "A request failed", { requestId: req.requestId, error });
     // A half-sent file must not look whole: Express ends the connection.
     if (res.headersSent) return next(error);

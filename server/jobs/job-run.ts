@@ -52,5 +52,8 @@ export type Handler = (run: JobRun) => Promise<void>;
 /** What a job that will not be done leaves to put right in its subject, in the transaction that ends it. */
 export type Aftermath = (tx: EntityManager, job: JobRow, failure: Failure | null) => Promise<void>;
 
+/** Removes what attempts at a job left behind that nobody sees yet. */
+export type Cleaner = (of: Pick<JobRun, "deps" | "job">) => Promise<void>;
+
 /** Jobs that make catalogue editions: one at a time in a programme. */
 export const CATALOGUE_KINDS: readonly JobKind[] = ["import-extract", "withdraw-extract", "recompute"];

@@ -3,8 +3,9 @@ import type { EntityManager } from "typeorm";
 import { JobRow } from "../database/entities/job.entity.ts";
 import { inTransaction } from "../database/transaction.ts";
 import type { Deps } from "../deps.ts";
+import { AppError } from "../errors.ts";
 import { knownError } from "../http/known-errors.ts";
-import { AFTERMATHS, HANDLERS } from "./handlers.ts";
+import { AFTERMATHS, CLEANERS, HANDLERS } from "./handlers.ts";
 import {
   CATALOGUE_KINDS,
   type Failure,
@@ -30,10 +31,13 @@ const MOST_ATTEMPTS = 5;
 const WRITE_MS = 500;
 const RETRY_SECONDS = 5;
 
-const GAVE_UP: Failure = {
-  message: `The work was begun ${MOST_ATTEMPTS} times and each time its worker stopped before the end. Nothing has changed.`,
-  hint: "Tell whoever runs this installation to look at the worker's log, then begin it again.",
-};
+const gaveUp = (): AppError =>
+  new AppError(
+    500,
+    "gave-up",
+    `The work was begun ${MOST_ATTEMPTS} times and each time its worker stopped before the end. Nothing has changed.`,
+    { hint: "Tell whoever runs this installation to look at the worker's log, then begin it again." },
+  );
 const OUR_FAULT: Failure = {
   message: "The work stopped on a fault of the program. Nothing has changed.",
   hint: "Begin it again. If it stops once more, tell whoever runs this installation; the worker's log says where.",
@@ -54,18 +58,14 @@ const settle = async (
   await AFTERMATHS[job.kind as JobKind]?.(tx, job, failure);
 };
 
-/** Takes the next job, or puts an end to one that was tried too often; "none" when there is nothing to do now. */
-const claim = (deps: Deps): Promise<Claim | "none" | "settled"> =>
+/** Takes the next job; null when there is nothing to do now. */
+const claim = (deps: Deps): Promise<Claim | null> =>
   inTransaction(
     deps.db,
     async (tx) => {
       const job = await lockNextJob(tx);
-      if (!job) return "none";
-      if (CATALOGUE_KINDS.includes(job.kind as JobKind) && (await isProgrammeBusy(tx, job))) return "none";
-      if (job.attempts >= MOST_ATTEMPTS) {
-        await settle(tx, job, "failed", GAVE_UP);
-        return "settled";
-      }
+      if (!job) return null;
+      if (CATALOGUE_KINDS.includes(job.kind as JobKind) && (await isProgrammeBusy(tx, job))) return null;
       const owner = randomUUID();
       await takeLease(tx, job.id, owner);
       return { job: await tx.findOneByOrFail(JobRow, { id: job.id }), owner };
@@ -115,6 +115,17 @@ const afterFailure = async (deps: Deps, { job, owner }: Claim, error: unknown): 
   });
 };
 
+/**
+ * Puts an end to a job that was tried too often. What its attempts left goes first, while the lease still keeps
+ * other jobs out of the programme.
+ */
+const giveUp = async (deps: Deps, job: JobRow): Promise<never> => {
+  await CLEANERS[job.kind as JobKind]?.({ deps, job }).catch((error: unknown) =>
+    deps.log.warn("job", "What a job left is not removed yet", { job: job.id, error }),
+  );
+  throw gaveUp();
+};
+
 const attempt = async (deps: Deps, claimed: Claim, stopping?: AbortSignal): Promise<void> => {
   const { job, owner } = claimed;
   const controller = new AbortController();
@@ -123,6 +134,7 @@ const attempt = async (deps: Deps, claimed: Claim, stopping?: AbortSignal): Prom
   if (job.cancelRequested) controller.abort(new JobCancelled());
   const letGo = keepLease(deps, job, owner, controller);
   try {
+    if (job.attempts > MOST_ATTEMPTS) await giveUp(deps, job);
     await HANDLERS[job.kind as JobKind](startRun(deps, claimed, controller));
     await inTransaction(deps.db, async (tx) => {
       if (await isLeaseHeld(tx, job.id, owner)) await endJob(tx, job.id, "done", null);
@@ -139,7 +151,7 @@ const attempt = async (deps: Deps, claimed: Claim, stopping?: AbortSignal): Prom
 /** Runs the next job there is; false when there was none to run now. `stopping` sends the job back to the queue. */
 export const runNextJob = async (deps: Deps, stopping?: AbortSignal): Promise<boolean> => {
   const claimed = await claim(deps);
-  if (claimed === "none") return false;
-  if (claimed !== "settled") await attempt(deps, claimed, stopping);
+  if (!claimed) return false;
+  await attempt(deps, claimed, stopping);
   return true;
 };

@@ -5,6 +5,7 @@ import { pipeline } from "node:stream/promises";
 import type { PoolConnection } from "mysql2";
 import type { DataSource } from "typeorm";
 import { Extract } from "#server/database/entities/extract.entity.ts";
+import { astrometryExtract } from "#server/demo/extract-files.ts";
 import type { Deps } from "#server/deps.ts";
 import { previewOf } from "#server/extracts/preview.ts";
 import { readSample } from "#server/extracts/sample.ts";
@@ -14,32 +15,31 @@ import { readingPlan } from "#shared/api/extracts.ts";
 import { buildMember } from "#tests/support/factories.ts";
 import { type Bench, timed } from "./harness.ts";
 
-const COLUMNS =
-  "source_id,designation,ra,dec,ref_epoch,parallax,parallax_error,pmra,pmra_error,pmdec,pmdec_error,phot_g_mean_mag,ks_mag,ks_mag_err,teff,ruwe";
+const SEED = 20_260_101;
 const LINES = 1_000;
+const LEAST_ACCEPTED = 0.99;
+/** What the generator writes where an error of Ks is not known. */
+const BLANK_MARK = "-999";
 
-/** Invented stars, spread evenly enough to be inside every relation. */
-const lineOf = (i: number): string => {
-  const u = ((i * 7919) % 104_729) / 104_729;
-  const id = 6_000_000_000_000_000_000n + BigInt(i) * 7919n;
-  return `${id},Star ${i},${359 * u},${160 * u - 80},2016.0,${10 + 50 * u},0.05,${300 * u},0.03,${-200 * u},0.03,${9 + 5 * u},${7 + 3 * u},0.02,${3000 + 900 * u},${0.9 + u}\n`;
-};
-
-function* text(rows: number): Generator<Buffer> {
-  yield Buffer.from(`${COLUMNS}\n`);
-  for (let from = 0; from < rows; from += LINES) {
-    const count = Math.min(LINES, rows - from);
-    yield Buffer.from(Array.from({ length: count }, (_, i) => lineOf(from + i)).join(""));
+/** The generated extract, as the practice programme has it, of that many stars. */
+function* text(stars: number): Generator<Buffer> {
+  let lines: string[] = [];
+  for (const line of astrometryExtract({ seed: SEED, from: 0, to: stars })) {
+    lines.push(`${line}\n`);
+    if (lines.length < LINES) continue;
+    yield Buffer.from(lines.join(""));
+    lines = [];
   }
+  yield Buffer.from(lines.join(""));
 }
 
 /** The file given to the server as it is: no reading, matching, deriving or checking. */
-const bareLoad = async (db: DataSource, path: string): Promise<void> => {
-  const names = COLUMNS.split(",");
+const bareLoad = async (db: DataSource, path: string, header: string): Promise<void> => {
+  const names = header.split(",");
   const definition = names.map(
-    (n) => `\`${n}\` ${n === "source_id" || n === "designation" ? "varchar(120)" : "double"}`,
+    (n) => `\`${n}\` ${n === "source_id" || n === "designation" ? "varchar(120)" : "double"} NULL`,
   );
-  await db.query(`CREATE TABLE bare_load (${definition.join(", ")}, PRIMARY KEY (source_id)) ENGINE=InnoDB`);
+  await db.query(`CREATE TABLE bare_load (${definition.join(", ")}, KEY (source_id)) ENGINE=InnoDB`);
   const runner = db.createQueryRunner();
   const connection = (await runner.connect()) as PoolConnection;
   await new Promise<void>((resolve, reject) => {
@@ -61,6 +61,9 @@ const queueImport = async (deps: Deps, path: string): Promise<string> => {
   const key = `bench/${programme.id}/original`;
   const { bytes } = await deps.files.write(key, createReadStream(path));
   const preview = await previewOf(await readSample(deps.files, key, bytes));
+  const columns = preview.columns.map((c) =>
+    c.means === "ks_mag_err" ? { ...c, blankMarks: [BLANK_MARK] } : c,
+  );
   const { id } = await deps.db.manager.save(
     deps.db.manager.create(Extract, {
       programmeId: programme.id,
@@ -71,7 +74,7 @@ const queueImport = async (deps: Deps, path: string): Promise<string> => {
       bytes: String(bytes),
       originalKey: key,
       uploadedBy: person.id,
-      plan: readingPlan.parse({ ...preview, epoch: null, release: "", raUnit: null }),
+      plan: readingPlan.parse({ ...preview, columns, epoch: null, release: "", raUnit: null }),
       createdAt: deps.now(),
     }),
   );
@@ -91,16 +94,20 @@ const bench: Bench = {
   run: async ({ rows, deps, folder }) => {
     const path = join(folder, "stars.csv");
     await pipeline(Readable.from(text(rows), { objectMode: false }), createWriteStream(path));
-    const bare = await timed(() => bareLoad(deps.db, path));
+    const [header] = astrometryExtract({ seed: SEED, from: 0, to: 0 });
+    const bare = await timed(() => bareLoad(deps.db, path, header ?? ""));
     const id = await queueImport(deps, path);
     const whole = await timed(() => runNextJob(deps));
     const extract = await deps.db.manager.findOneByOrFail(Extract, { id });
-    if (extract.rowsAccepted !== rows)
-      throw new Error(`The import took ${extract.rowsAccepted} of ${rows} rows.`);
+    // A few rows are damaged or stand twice on purpose.
+    if ((extract.rowsAccepted ?? 0) < rows * LEAST_ACCEPTED)
+      throw new Error(
+        `The import took ${extract.rowsAccepted ?? 0} of ${rows} rows. ${extract.failureMessage ?? ""}`,
+      );
     const size = Math.round(statSync(path).size / 1e6);
     return [
       {
-        what: `${rows.toLocaleString("en")} rows × 16 columns (${size} MB) from the file to a catalogue that can be cut`,
+        what: `${rows.toLocaleString("en")} rows × 17 columns (${size} MB) from the file to a catalogue that can be cut`,
         value: whole / 1000,
         unit: "s",
         plain: { what: "bare LOAD DATA LOCAL INFILE of the same file", value: bare / 1000 },

@@ -131,14 +131,14 @@ test("catalogue jobs run one at a time in a programme, and side by side in two",
   await queue("recompute", one.id);
   await queue("recompute", other.id);
   const first = runNextJob(app.deps);
-  await expect.poll(() => running).toBe(1);
+  await expect.poll(() => running, { timeout: 10_000 }).toBe(1);
   const second = runNextJob(app.deps);
-  await expect.poll(() => running).toBe(2);
+  await expect.poll(() => running, { timeout: 10_000 }).toBe(2);
   expect(await runNextJob(app.deps)).toBe(false);
   for (const go of release.splice(0)) go();
   await Promise.all([first, second]);
   const third = runNextJob(app.deps);
-  await expect.poll(() => release.length).toBe(1);
+  await expect.poll(() => release.length, { timeout: 10_000 }).toBe(1);
   release[0]?.();
   expect(await third).toBe(true);
   expect(most).toBe(2);

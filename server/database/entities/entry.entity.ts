@@ -3,7 +3,7 @@ import { givenColumns } from "../star-table.ts";
 
 /**
  * One extract's word on a star, one row per accepted row of the file. Rows of an import in progress stand here
- * already and belong to no star until its commit; only entries of committed extracts count.
+ * already, each with the star it founds or was matched to; only entries of committed extracts count.
  */
 export interface Entry {
   extractId: string;
