@@ -20,10 +20,10 @@ const HEADS = [
   { label: "No.", isNumber: true },
   { label: "Extract" },
   { label: "State" },
-  { label: "Rows read = accepted + refused + skipped", isNumber: true },
-  { label: "New stars", isNumber: true },
-  { label: "Edition", isNumber: true },
-  { label: "Brought" },
+  { label: "Rows read = accepted + refused + skipped", isNumber: true, isWideOnly: true },
+  { label: "New stars", isNumber: true, isWideOnly: true },
+  { label: "Edition", isNumber: true, isWideOnly: true },
+  { label: "Brought", isWideOnly: true },
 ] as const;
 
 const sumOf = (rows: Extract["rows"]): string =>
@@ -45,6 +45,11 @@ const Row = ({ programmeId, extract }: { programmeId: string; extract: Extract }
         {extract.name}
       </Link>
       <span className="block text-xs text-soft">{extract.fileName}</span>
+      {extract.rows ? (
+        <span className="block text-xs text-soft sm:hidden">
+          {sumOf(extract.rows)} rows: read = accepted + refused + skipped
+        </span>
+      ) : null}
     </td>
     <td>
       <Pill tone={stateTone(extract)}>{STATE_WORDS[extract.state]}</Pill>
@@ -52,12 +57,14 @@ const Row = ({ programmeId, extract }: { programmeId: string; extract: Extract }
         <span className="mt-1 block max-w-56 text-xs text-mark">◆ {extract.failure.message}</span>
       ) : null}
     </td>
-    <td className="text-right font-mono text-[13px] whitespace-nowrap">{sumOf(extract.rows)}</td>
-    <td className="text-right font-mono text-[13px]">
+    <td className="text-right font-mono text-[13px] whitespace-nowrap max-sm:hidden">
+      {sumOf(extract.rows)}
+    </td>
+    <td className="text-right font-mono text-[13px] max-sm:hidden">
       {extract.newStars === null ? "–" : count(extract.newStars)}
     </td>
-    <td className="text-right font-mono text-[13px]">{extract.edition ?? "–"}</td>
-    <td>
+    <td className="text-right font-mono text-[13px] max-sm:hidden">{extract.edition ?? "–"}</td>
+    <td className="max-sm:hidden">
       <Moment at={extract.createdAt} isShort />
       <span className="block text-xs text-soft">by {extract.uploadedBy.name}</span>
     </td>
