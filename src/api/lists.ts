@@ -1,4 +1,4 @@
-import { queryOptions } from "@tanstack/react-query";
+import { queryOptions, useMutation, useQueryClient } from "@tanstack/react-query";
 import type { ListMember, ListSky, MEMBER_STATES, TargetList } from "#shared/api/lists.ts";
 import { get, request } from "./client.ts";
 import { programmeKeys, useProgrammeChange } from "./programmes.ts";
@@ -57,8 +57,18 @@ export const useMoveList = (programmeId: string, listId: string) =>
   useProgrammeChange(programmeId, (body: { state: "draft" | "in-review"; version: number }) =>
     request<{ list: TargetList }>("POST", `${base(programmeId)}/${listId}/state`, body),
   );
-export const useDeleteList = (programmeId: string, listId: string) =>
-  useProgrammeChange(programmeId, () => request<void>("DELETE", `${base(programmeId)}/${listId}`));
+/** Deletes a draft; `away` leads the person elsewhere before the list is forgotten, or its page would ask for it again. */
+export const useDeleteList = (programmeId: string, listId: string, away: () => Promise<void> | void) => {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => request<void>("DELETE", `${base(programmeId)}/${listId}`),
+    onSuccess: async () => {
+      await away();
+      client.removeQueries({ queryKey: programmeKeys.part(programmeId, "lists", listId) });
+      await client.invalidateQueries({ queryKey: programmeKeys.all(programmeId) });
+    },
+  });
+};
 export const useSetMember = (programmeId: string, listId: string) =>
   useProgrammeChange(
     programmeId,

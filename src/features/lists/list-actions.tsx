@@ -46,7 +46,9 @@ export const ListActions = ({ programmeId, list }: Props) => {
   const navigate = useNavigate();
   const [asks, setAsks] = useState<"edit" | "delete" | null>(null);
   const move = useMoveList(programmeId, list.id);
-  const remove = useDeleteList(programmeId, list.id);
+  const remove = useDeleteList(programmeId, list.id, () =>
+    navigate(paths.programme.to(programmeId, "lists")),
+  );
   const close = () => setAsks(null);
   return (
     <div className="flex min-w-0 flex-col gap-2">
@@ -73,11 +75,7 @@ export const ListActions = ({ programmeId, list }: Props) => {
           error={remove.error}
           isBusy={remove.isPending}
           onClose={close}
-          onDelete={() =>
-            remove.mutate(undefined, {
-              onSuccess: () => navigate(paths.programme.to(programmeId, "lists")),
-            })
-          }
+          onDelete={() => remove.mutate()}
         />
       ) : null}
     </div>

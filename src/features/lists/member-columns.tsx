@@ -31,7 +31,7 @@ export const memberColumns = (list: TargetList): GridColumn<ListMember>[] => [
   {
     key: "place",
     label: "#",
-    width: 52,
+    width: 72,
     isFrozen: true,
     description: "Place in the list",
     cell: (row) => <span className="text-faint">{count(row.place)}</span>,
