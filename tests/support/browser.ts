@@ -2,15 +2,24 @@ import { mkdirSync } from "node:fs";
 import { join } from "node:path";
 import { type Browser, type BrowserContext, chromium, type Page } from "playwright-core";
 import { afterAll, beforeAll, expect, onTestFailed } from "vitest";
+import { buildClient } from "#scripts/lib/build.ts";
 import { findChromium } from "#scripts/lib/debian.ts";
 import { ROOT } from "#scripts/lib/root.ts";
+import type { Theme } from "#shared/api/session.ts";
 import type { OpenSession } from "./sign-in.ts";
+
+/** A machine may be busy with much else; nothing here measures how long anything takes. */
+export const PATIENCE_MS = 90_000;
 
 let browser: Browser | undefined;
 
-/** One browser for the file, started before its tests and always closed: an open one would keep the run alive. */
-export const useBrowser = (): void => {
+/**
+ * One browser for the file, started before its tests and always closed: an open one would keep the run alive. The pages
+ * are built when their sources have changed, so that a file started alone tests what stands in the folder.
+ */
+export const withBrowser = (): void => {
   beforeAll(async () => {
+    await buildClient();
     const executablePath = findChromium();
     if (!executablePath) throw new Error("Chromium is not installed; `npm test` installs it.");
     browser = await chromium.launch({
@@ -39,6 +48,8 @@ interface PageOptions {
   session?: OpenSession;
   width?: number;
   height?: number;
+  /** As chosen on this computer earlier. */
+  theme?: Theme;
   /** Messages a test provokes on purpose. */
   expected?: RegExp;
 }
@@ -53,13 +64,16 @@ const pictureOf = async (page: Page, name: string): Promise<void> => {
 
 /** A page in a context of its own. A failed test leaves a picture in `var/test-pictures`. */
 export const openPage = async (options: PageOptions): Promise<OpenPage> => {
-  if (!browser) throw new Error("Call useBrowser() at the top of the test file.");
+  if (!browser) throw new Error("Call withBrowser() at the top of the test file.");
   const viewport = { width: options.width ?? 1440, height: options.height ?? 900 };
-  const context = await browser.newContext({ viewport, baseURL: options.url });
+  const context = await browser.newContext({ viewport, baseURL: options.url, reducedMotion: "reduce" });
+  context.setDefaultTimeout(PATIENCE_MS);
   if (options.session) {
     const { name, value } = options.session.cookie;
     await context.addCookies([{ name, value, url: options.url, httpOnly: true, sameSite: "Lax" }]);
   }
+  if (options.theme)
+    await context.addInitScript((theme) => localStorage.setItem("shortlight.theme", theme), options.theme);
   const page = await context.newPage();
   const errors: string[] = [];
   const note = (text: string): void => {
