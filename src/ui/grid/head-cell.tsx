@@ -29,7 +29,7 @@ export const HeadCell = ({ column, index, sort, isActive, style, onSort, onFocus
       style={style}
       onFocus={onFocus}
       onClick={column.canSort ? () => onSort(column.key) : undefined}
-      className={`flex flex-none flex-col justify-end -outline-offset-2 -outline-offset-2 gap-0.5 border-b border-rule bg-sheet px-2.5 pt-2 pb-1 text-xs ${column.isText ? "text-left" : "text-right"} ${column.canSort ? "cursor-pointer" : ""}`}
+      className={`flex flex-none flex-col justify-end -outline-offset-2 gap-0.5 border-b border-rule bg-sheet px-2.5 pt-2 pb-1 text-xs ${column.isText ? "text-left" : "text-right"} ${column.canSort ? "cursor-pointer" : ""}`}
     >
       <span className="font-medium whitespace-nowrap">
         {direction ? (
