@@ -4,7 +4,7 @@ import { readFigure } from "./card-draft.ts";
 import type { NumberField } from "./card-fields.ts";
 
 /** A campaign as it is being typed. */
-export interface CampaignDraft {
+interface CampaignDraft {
   name: string;
   statistic: string;
   lengthDays: string;

@@ -109,7 +109,7 @@ export const largestPart = (parts: NoiseParts): string => {
   return words[largest.key] ?? `${largest.label} is`;
 };
 
-export type Usable = "usable" | "saturated" | "too faint" | "never";
+type Usable = "usable" | "saturated" | "too faint" | "never";
 
 /** Whether the card measures a star of that magnitude, and if not why. */
 export const usableAt = (card: CardSettings, magnitude: number): Usable => {
