@@ -24,7 +24,7 @@ describe("the address of the catalogue", () => {
     await first.page.waitForURL(/sort=teff/);
     await settle(first.page, GRID);
     const shown = async ({ page }: typeof first) => ({
-      lede: await page.getByRole("heading", { level: 1 }).innerText(),
+      lede: await page.getByRole("heading", { level: 1 }).textContent(),
       stars: (await gridRows(page)).map((row) => row.Star),
     });
     const before = await shown(first);

@@ -86,8 +86,8 @@ const plain = (text: string): string => text.replace(/[\s\u2009\u202f]+/g, " ").
 
 /** The sum of rows as the page writes it, checked to add up; `[read, accepted, refused, skipped]`. */
 export const rowSum = async (page: Page): Promise<number[]> => {
-  const text = plain(await page.locator("p", { hasText: "rows read" }).last().innerText());
-  const rows = /(\d+) rows read = (\d+) accepted \+ (\d+) refused \+ (\d+) skipped/
+  const text = plain((await page.locator("p", { hasText: "rows read" }).last().textContent()) ?? "");
+  const rows = /(\d+) rows read ?= (\d+) accepted ?\+ (\d+) refused ?\+ (\d+) skipped/
     .exec(text)
     ?.slice(1)
     .map(Number);
