@@ -26,10 +26,11 @@ export const useCancelJob = (programmeId: string) =>
     request<{ job: Job }>("POST", `/programmes/${programmeId}/jobs/${jobId}/cancel`),
   );
 
-/** Keeps a programme's queries fresh while its jobs go on. */
-export const useProgrammeEvents = (programmeId: string): void => {
+/** Keeps a programme's queries fresh while its jobs go on, for those who may know of its jobs. */
+export const useProgrammeEvents = (programmeId: string, mayListen: boolean): void => {
   const client = useQueryClient();
   useEffect(() => {
+    if (!mayListen) return;
     const source = new EventSource(`/api/programmes/${programmeId}/events`);
     const refreshAll = () => void client.invalidateQueries({ queryKey: programmeKeys.all(programmeId) });
     source.addEventListener("job", (event) => {
@@ -39,5 +40,5 @@ export const useProgrammeEvents = (programmeId: string): void => {
     });
     source.addEventListener("changed", refreshAll);
     return () => source.close();
-  }, [client, programmeId]);
+  }, [client, programmeId, mayListen]);
 };
