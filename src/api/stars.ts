@@ -84,9 +84,10 @@ export const histogramsOptions = (programmeId: string, view: ViewSpec, columns: 
 export const sheetOptions = (programmeId: string, view: ViewSpec, starId: string) =>
   queryOptions({
     queryKey: programmeKeys.part(programmeId, "stars", "sheet", starId, viewKey(view)),
-    queryFn: async ({ signal }) =>
+    queryFn: async ({ signal }): Promise<StarSheet> =>
       (await get<{ star: StarSheet }>(stars(programmeId, starId, view), signal)).star,
-    placeholderData: keepPreviousData,
+    // The same star under another question stays until its new answer; another star is never shown in its place.
+    placeholderData: (before) => (before?.id === starId ? before : undefined),
   });
 
 export const findOptions = (programmeId: string, view: ViewSpec, text: string) =>

@@ -58,6 +58,7 @@ interface Options {
   onGoToRow?: () => void;
   at?: (index: number) => Row | undefined;
   sort?: GridSort;
+  rowHeight?: number;
 }
 
 const Table = ({ count = 1000, ...options }: Options) => {
@@ -70,7 +71,7 @@ const Table = ({ count = 1000, ...options }: Options) => {
       rowAt={options.at ?? rowAt}
       rowKey={(row) => row.name}
       rowLabel={(row) => row.name}
-      rowHeight={ROW}
+      rowHeight={options.rowHeight ?? ROW}
       sort={options.sort ?? { key: "teff", direction: "desc" }}
       onSort={options.onSort ?? (() => undefined)}
       onOpen={options.onOpen ?? (() => undefined)}
@@ -270,4 +271,12 @@ test("another order begins at its first row", () => {
   expect(onRange).toHaveBeenLastCalledWith(500, 504, -1);
   act(() => rerender(<Table sort={{ key: "designation", direction: "asc" }} />));
   expect(onRange).toHaveBeenLastCalledWith(0, 4, -1);
+});
+
+test("rows of another height lie under each other again", () => {
+  const { rerender } = render(<Table />);
+  const top = () => screen.getByText("SL 3").closest<HTMLElement>('[role="row"]')?.style.transform;
+  expect(top()).toBe(`translateY(${2 * ROW}px)`);
+  act(() => rerender(<Table rowHeight={36} />));
+  expect(top()).toBe("translateY(72px)");
 });

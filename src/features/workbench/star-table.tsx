@@ -19,7 +19,7 @@ import { NoStarPasses } from "./no-star-passes.tsx";
 import { PlainPages } from "./plain-pages.tsx";
 import { starColumns } from "./star-columns.tsx";
 import { TableFooter } from "./table-footer.tsx";
-import { usePlainPages } from "./use-plain-pages.ts";
+import { useRemembered } from "./use-remembered.ts";
 import type { Workbench } from "./use-workbench.ts";
 
 interface Props {
@@ -34,6 +34,12 @@ interface Props {
   goTo: { row: number } | null;
   onGoTo: (row: number) => void;
 }
+
+/** px; the first is the usual one. */
+const ROW_HEIGHTS = ["28", "36", "24"] as const;
+type RowHeight = (typeof ROW_HEIGHTS)[number];
+const nextHeight = (height: RowHeight): RowHeight =>
+  ROW_HEIGHTS[(ROW_HEIGHTS.indexOf(height) + 1) % ROW_HEIGHTS.length] ?? "28";
 
 const labelOf = (key: string): string => (key === "merit" ? "merit" : (findColumn(key)?.label ?? key));
 
@@ -59,7 +65,9 @@ export const StarTable = ({
   const { view, screen, ask, show } = workbench;
   const can = useCan();
   const [dialog, setDialog] = useState<"columns" | "list" | "row" | null>(null);
-  const [isPlain, setPlain] = usePlainPages();
+  const [layout, setLayout] = useRemembered("shortlight-table", ["grid", "pages"]);
+  const isPlain = layout === "pages";
+  const [height, setHeight] = useRemembered("shortlight-row-height", ROW_HEIGHTS);
   const [range, setRange] = useState({ first: 0, last: 0 });
   const histogramKeys = screen.columns.filter((key) => findColumn(key)?.kind !== "text");
   const { data: histograms = [] } = useQuery(histogramsOptions(programmeId, view, histogramKeys));
@@ -128,7 +136,7 @@ export const StarTable = ({
       {isPlain ? null : (
         <button
           type="button"
-          onClick={() => setPlain(true)}
+          onClick={() => setLayout("pages")}
           className="sr-only focus:not-sr-only focus:px-5 focus:pb-2 focus:text-left focus:underline"
         >
           Show as plain pages instead of a grid
@@ -160,7 +168,7 @@ export const StarTable = ({
             rowLabel={(row) =>
               `${row.designation}${row.merit === null ? "" : `, merit ${row.merit.toFixed(1)}`}`
             }
-            rowHeight={28}
+            rowHeight={Number(height)}
             sort={view.sort}
             onSort={sortBy}
             onOpen={openStar}
@@ -180,7 +188,9 @@ export const StarTable = ({
         range={range}
         sortWords={sortWords}
         isPlain={isPlain}
-        onPlain={() => setPlain(!isPlain)}
+        onPlain={() => setLayout(isPlain ? "grid" : "pages")}
+        rowHeight={height}
+        onRowHeight={() => setHeight(nextHeight(height))}
         isSexagesimal={screen.isSexagesimal}
         onPositions={() => show({ isSexagesimal: !screen.isSexagesimal })}
       />

@@ -9,6 +9,9 @@ interface Props {
   sortWords: string;
   isPlain: boolean;
   onPlain: () => void;
+  /** px. */
+  rowHeight: string;
+  onRowHeight: () => void;
   isSexagesimal: boolean;
   onPositions: () => void;
 }
@@ -29,6 +32,8 @@ export const TableFooter = ({
   sortWords,
   isPlain,
   onPlain,
+  rowHeight,
+  onRowHeight,
   isSexagesimal,
   onPositions,
 }: Props) => (
@@ -47,6 +52,16 @@ export const TableFooter = ({
     <Button kind="plain" className="px-0!" onClick={onPositions} aria-keyshortcuts="d">
       {isSexagesimal ? "positions in h m s" : "positions in degrees"}
     </Button>
+    {isPlain ? null : (
+      <Button
+        kind="plain"
+        className="px-0!"
+        onClick={onRowHeight}
+        aria-label={`Rows ${rowHeight} px high; change`}
+      >
+        rows {rowHeight} px
+      </Button>
+    )}
     <Button kind="plain" className="px-0!" onClick={onPlain}>
       {isPlain ? "As a grid" : "Plain pages"}
     </Button>

@@ -96,6 +96,10 @@ export const useRowWindow = ({ rows, rowHeight, headHeight, scroller, focusedRow
     ),
   });
 
+  // Rows of another height lie elsewhere; the library asks for heights once.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: the height is what changes them
+  useEffect(() => virtualizer.measure(), [virtualizer, rowHeight]);
+
   useEffect(() => {
     const element = scroller.current;
     if (!element) return;
