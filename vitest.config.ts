@@ -16,7 +16,12 @@ export default defineConfig({
       },
       {
         extends: true,
-        test: { name: "client", include: ["tests/client/**/*.test.tsx"], environment: "happy-dom", sequence: { groupOrder: 1 } },
+        test: {
+          name: "client",
+          include: ["tests/client/**/*.test.tsx"],
+          environment: "happy-dom",
+          sequence: { groupOrder: 1 },
+        },
       },
       {
         extends: true,

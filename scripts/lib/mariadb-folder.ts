@@ -35,7 +35,12 @@ export const initialise = (program: string, data: string): void => {
       "--skip-name-resolve",
       ...userArguments(),
     ],
-    { encoding: "utf8", stdio: ["ignore", "pipe", "pipe"] },
+    {
+      encoding: "utf8",
+      stdio: ["ignore", "pipe", "pipe"],
+      // In a shared folder two set-ups at the same moment would take each other's temporary tables away.
+      env: { ...process.env, TMPDIR: dirname(data) },
+    },
   );
   if (done.status !== 0) {
     rmSync(aside, { recursive: true, force: true });
