@@ -5,7 +5,7 @@ import type { DataSource } from "typeorm";
 import { campaignBody, cardBody } from "#shared/api/instruments.ts";
 import { meritBody } from "#shared/api/merits.ts";
 import { selectionBody } from "#shared/api/selections.ts";
-import { viewToParams } from "#shared/catalogue/view.ts";
+import { type Cut, viewToParams } from "#shared/catalogue/view.ts";
 import type { Role } from "#shared/policy/roles.ts";
 import type { Config } from "../config.ts";
 import { Person } from "../database/entities/person.entity.ts";
@@ -26,7 +26,10 @@ import { activateDemoPeople, type DemoPerson, isDemoPerson, makeDemoPeople } fro
 export { demoSignIns } from "./people.ts";
 
 const FOLDER = join(dirname(fileURLToPath(import.meta.url)), "../../data-demo");
-const LISTED = 150;
+/** Fewer than the stars within reach of the telescope, so that the figure of merit has something to choose. */
+const LISTED = 80;
+/** The list's own cut beside the selection's: stars that its telescope cannot measure are no targets. */
+const WITHIN_REACH: Cut = { label: "Within reach", expression: "r_min <= 2", blanks: "drop" };
 const ABOUT =
   "An invented sky to practise on: none of its stars exist. Two overlapping extracts of an invented release, two instruments, one list in review.";
 
@@ -94,21 +97,23 @@ const makeTools = async (deps: Deps, programmeId: string, people: readonly DemoP
   };
 };
 
-const bringExtracts = async (deps: Deps, programmeId: string, curator: Person): Promise<void> => {
-  const release = "Invented Survey 1";
-  await bringExtract(deps, programmeId, curator, join(FOLDER, "astrometry.csv"), {
+const RELEASE = "Invented Survey 1";
+
+const bringAstrometry = (deps: Deps, programmeId: string, curator: Person): Promise<void> =>
+  bringExtract(deps, programmeId, curator, join(FOLDER, "astrometry.csv"), {
     name: "Astrometry and magnitudes",
     origin: "Invented: made by npm run generate with seed 2027. None of these stars exist.",
-    release,
+    release: RELEASE,
     epoch: null,
   });
-  await bringExtract(deps, programmeId, curator, join(FOLDER, "spectra.csv"), {
+
+const bringSpectra = (deps: Deps, programmeId: string, curator: Person): Promise<void> =>
+  bringExtract(deps, programmeId, curator, join(FOLDER, "spectra.csv"), {
     name: "Spectra and light shares",
     origin: "Invented: made by npm run generate with seed 2027, layout spectra. Positions are for J2000.0.",
-    release,
+    release: RELEASE,
     epoch: 2000,
   });
-};
 
 const makeDemoList = async (
   deps: Deps,
@@ -121,7 +126,7 @@ const makeDemoList = async (
     card,
     campaign,
     merit,
-    cuts,
+    cuts: [...cuts, WITHIN_REACH],
     sort: { key: "merit", direction: "desc" },
   });
   const { listId } = await makeList(deps, programmeId, scientist, {
@@ -146,8 +151,11 @@ export const seedDemo = async (db: DataSource, config: Config): Promise<void> =>
   await empty(db);
   const people = await makeDemoPeople(db.manager, deps.now());
   const programmeId = await makeProgramme(deps, people);
+  const curator = personWith(people, "curator");
+  await bringAstrometry(deps, programmeId, curator);
+  // Between the extracts: each edition prepares a table for every instrument there is, and only the second is looked at.
   const tools = await makeTools(deps, programmeId, people);
-  await bringExtracts(deps, programmeId, personWith(people, "curator"));
+  await bringSpectra(deps, programmeId, curator);
   await makeDemoList(deps, programmeId, personWith(people, "scientist"), tools);
   await activateDemoPeople(db, people);
 };
