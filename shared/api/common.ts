@@ -15,7 +15,6 @@ export const version = z.int().positive();
 
 /** A person as named beside what they did. */
 export const personRef = z.object({ id, name: z.string() });
-export type PersonRef = z.infer<typeof personRef>;
 
 /** Pages by a cursor that stays right while rows are added. */
 export const cursorQuery = z.object({

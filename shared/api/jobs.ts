@@ -28,5 +28,4 @@ export const job = z.object({
 });
 export type Job = z.infer<typeof job>;
 
-/** GET /api/programmes/:p/events: server-sent events `job` (data: Job) and `changed` (data: { subject: {type,id} }). */
-export const changedEvent = z.object({ subject: z.object({ type: z.string(), id: z.string() }) });
+/** GET /api/programmes/:p/events: server-sent events `job` (data: Job) and `changed` (data: { subject: { type, id } }). */
