@@ -1,7 +1,6 @@
 import { QueryClient, QueryClientProvider } from "@tanstack/react-query";
 import { act, cleanup, fireEvent, render, screen } from "@testing-library/react";
-import { createMemoryRouter } from "react-router-dom";
-import { RouterProvider } from "react-router/dom";
+import { createMemoryRouter, RouterProvider } from "react-router-dom";
 import { afterEach, describe, expect, test, vi } from "vitest";
 import { EMPTY_VIEW } from "#shared/catalogue/view.ts";
 import { CutDialog } from "#src/features/workbench/cut-dialog.tsx";
