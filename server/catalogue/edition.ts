@@ -9,7 +9,7 @@ import { writeLine } from "../logbook/service.ts";
 import { buildScanIndex } from "../scan/build.ts";
 import { removeInvisibleStars } from "./clean.ts";
 import { Fingerprint } from "./fingerprint.ts";
-import { instrumentPairs } from "./instrument-pairs.ts";
+import { firstPair } from "./first-pair.ts";
 import { type Basis, type Changes, prepareBlock, readStarBlock, writeBlock } from "./prepare.ts";
 
 export interface EditionPlan {
@@ -69,8 +69,8 @@ const buildIndices = async (
   recipe: string,
 ): Promise<void> => {
   const base = { programmeId, edition, recipe, cardVersionId: null, campaignVersionId: null };
-  const pairs = await instrumentPairs(run.deps.db.manager, programmeId);
-  for (const key of [base, ...pairs.map((pair) => ({ ...base, ...pair }))])
+  const pair = await firstPair(run.deps.db.manager, programmeId);
+  for (const key of pair ? [base, { ...base, ...pair }] : [base])
     await buildScanIndex(run.deps, key, (done, total) =>
       run.progress(done, total, "Preparing the table", "stars"),
     );

@@ -17,7 +17,8 @@ import { moveList, readList } from "../lists/service.ts";
 import { createLog } from "../log.ts";
 import { makeMerit } from "../merit/service.ts";
 import { addMember } from "../people/membership.ts";
-import { createProgramme } from "../programmes/service.ts";
+import { createProgramme, readProgramme } from "../programmes/service.ts";
+import { buildScanIndex } from "../scan/build.ts";
 import { makeSelection } from "../selections/service.ts";
 import { FolderStorage } from "../storage/folder-storage.ts";
 import { bringExtract } from "./bring-extract.ts";
@@ -129,6 +130,13 @@ const makeDemoList = async (
     cuts: [...cuts, WITHIN_REACH],
     sort: { key: "merit", direction: "desc" },
   });
+  const { edition } = await readProgramme(deps, programmeId);
+  await buildScanIndex(deps, {
+    programmeId,
+    edition: edition ?? 0,
+    cardVersionId: card,
+    campaignVersionId: campaign,
+  });
   const { listId } = await makeList(deps, programmeId, scientist, {
     name: "Winter first light",
     note: "The first list to try the Heron telescope on.",
@@ -153,7 +161,7 @@ export const seedDemo = async (db: DataSource, config: Config): Promise<void> =>
   const programmeId = await makeProgramme(deps, people);
   const curator = personWith(people, "curator");
   await bringAstrometry(deps, programmeId, curator);
-  // Between the extracts: each edition prepares a table for every instrument there is, and only the second is looked at.
+  // Between the extracts: an edition prepares a table for the instrument there is, and only the second is looked at.
   const tools = await makeTools(deps, programmeId, people);
   await bringSpectra(deps, programmeId, curator);
   await makeDemoList(deps, programmeId, personWith(people, "scientist"), tools);
