@@ -54,6 +54,8 @@ describe("splitting text into records", () => {
   test("gives up on a quote that swallows the file, naming its line", () => {
     const splitter = new CsvSplitter(",");
     splitter.push("a,b\n");
-    expect(() => splitter.push(`1,"${"x\n".repeat(2_100_000)}`)).toThrow(/Line 2 .* opens a quote that is not closed/);
+    expect(() => splitter.push(`1,"${"x\n".repeat(2_100_000)}`)).toThrow(
+      /Line 2 .* opens a quote that is not closed/,
+    );
   });
 });
