@@ -3,11 +3,11 @@ import type { ListMember, TargetList } from "#shared/api/lists.ts";
 import { count } from "#shared/format/numbers.ts";
 import { membersKey, readListMembers } from "#src/api/lists.ts";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
+import { GoToRowDialog } from "#src/ui/grid/go-to-row-dialog.tsx";
 import { Grid } from "#src/ui/grid/grid.tsx";
 import { useBlocks } from "#src/ui/grid/use-blocks.ts";
 import { byStateWords } from "./list-words.ts";
 import { memberColumns } from "./member-columns.tsx";
-import { RowDialog } from "./row-dialog.tsx";
 
 const ROW_HEIGHT = 28;
 
@@ -62,15 +62,17 @@ export const MembersCard = ({ programmeId, list, openId, onOpen }: Props) => {
         onGoToRow={() => setGoingTo(true)}
         isBusy={blocks.isReading}
       />
-      <RowDialog
-        isOpen={isGoingTo}
-        count={list.stars}
-        onClose={() => setGoingTo(false)}
-        onGo={(row) => {
-          setGoTo({ row });
-          setGoingTo(false);
-        }}
-      />
+      {isGoingTo ? (
+        <GoToRowDialog
+          rows={list.stars}
+          word="place"
+          onGo={(row) => {
+            setGoTo({ row });
+            setGoingTo(false);
+          }}
+          onClose={() => setGoingTo(false)}
+        />
+      ) : null}
     </section>
   );
 };

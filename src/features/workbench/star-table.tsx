@@ -8,11 +8,11 @@ import { histogramsOptions, readWindow, windowKey } from "#src/api/stars.ts";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
+import { GoToRowDialog } from "#src/ui/grid/go-to-row-dialog.tsx";
 import { Grid } from "#src/ui/grid/grid.tsx";
 import { useBlocks } from "#src/ui/grid/use-blocks.ts";
 import { announce } from "#src/ui/live-region.tsx";
 import { ColumnsDialog } from "./columns-dialog.tsx";
-import { GoToRowDialog } from "./go-to-row-dialog.tsx";
 import { Lede } from "./lede.tsx";
 import { ListDialog } from "./list-dialog.tsx";
 import { NoStarPasses } from "./no-star-passes.tsx";
@@ -212,6 +212,7 @@ export const StarTable = ({
       {dialog === "row" ? (
         <GoToRowDialog
           rows={summary.count}
+          word="row"
           onGo={(index) => {
             onGoTo(index);
             setDialog(null);

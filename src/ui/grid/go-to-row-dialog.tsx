@@ -1,19 +1,19 @@
 import { type FormEvent, useState } from "react";
 import { count } from "#shared/format/numbers.ts";
-import { Button } from "#src/ui/button.tsx";
-import { Dialog } from "#src/ui/dialog.tsx";
-import { TextInput } from "#src/ui/inputs.tsx";
+import { Button } from "../button.tsx";
+import { Dialog } from "../dialog.tsx";
+import { TextInput } from "../inputs.tsx";
 
-/** Asks for a row's number, from 1. */
-export const GoToRowDialog = ({
-  rows,
-  onGo,
-  onClose,
-}: {
+interface Props {
   rows: number;
+  /** What a row's number is called there: "row", or "place" in a list. */
+  word: "row" | "place";
   onGo: (index: number) => void;
   onClose: () => void;
-}) => {
+}
+
+/** Asks for a row's number, from 1, and goes there. */
+export const GoToRowDialog = ({ rows, word, onGo, onClose }: Props) => {
   const [text, setText] = useState("");
   const row = Number(text.replaceAll(/[\s\u2009,]/g, ""));
   const isRow = Number.isInteger(row) && row >= 1 && row <= rows;
@@ -22,10 +22,10 @@ export const GoToRowDialog = ({
     if (isRow) onGo(row - 1);
   };
   return (
-    <Dialog title="Go to a row" isOpen onClose={onClose}>
+    <Dialog title={`Go to a ${word}`} isOpen onClose={onClose}>
       <form onSubmit={submit} className="flex items-end gap-3">
         <TextInput
-          label={`Row, 1 to ${count(rows)}`}
+          label={`${word === "row" ? "Row" : "Place"}, 1 to ${count(rows)}`}
           isNumber
           value={text}
           onChange={(event) => setText(event.target.value)}
