@@ -15,8 +15,26 @@ export const RADIUS_FEH_SCATTER = 0.027;
 export const MASS_SCATTER = 0.02;
 export const MASS_FEH_SCATTER = 0.021;
 
+/** Powers of M_Ks, 0 to 2, in eq. 4 of Mann et al. 2015. */
+export const RADIUS_COEFFICIENTS = [1.9515, -0.352, 0.0168] as const;
+/** The same in eq. 5, and its term of [Fe/H], which multiplies. */
+export const RADIUS_FEH_COEFFICIENTS = [1.9305, -0.3466, 0.01647] as const;
+export const RADIUS_FEH_TERM = 0.04458;
+/** M_Ks from which the mass polynomials count. */
+export const MASS_ZERO_POINT = 7.5;
+/** Powers of M_Ks − 7.5, 0 to 5, in eq. 4 of Mann et al. 2019. */
+export const MASS_COEFFICIENTS = [-0.642, -0.208, -8.43e-4, 7.87e-3, 1.42e-4, -2.13e-4] as const;
+/** The same in eq. 5, and its term of [Fe/H], which multiplies. */
+export const MASS_FEH_COEFFICIENTS = [-0.647, -0.207, -6.53e-4, 7.13e-3, 1.84e-4, -1.6e-4] as const;
+export const MASS_FEH_TERM = -0.0035;
+
 const isInRange = (absKs: number): boolean =>
   absKs >= COOL_DWARF_ABS_KS.brightest && absKs <= COOL_DWARF_ABS_KS.faintest;
+
+type Parabola = readonly [number, number, number];
+
+const parabola = (c: Parabola, x: number): number => c[0] + c[1] * x + c[2] * x * x;
+const slopeOfParabola = (c: Parabola, x: number): number => c[1] + 2 * c[2] * x;
 
 /**
  * Radius, R☉: `1.9515 − 0.3520 M + 0.01680 M²`; scatter 2.89 %.
@@ -27,10 +45,10 @@ const isInRange = (absKs: number): boolean =>
  * @example radiusFromAbsKs(7.5) // 0.2565
  */
 export const radiusFromAbsKs = (absKs: number): number =>
-  isInRange(absKs) ? 1.9515 - 0.352 * absKs + 0.0168 * absKs * absKs : Number.NaN;
+  isInRange(absKs) ? parabola(RADIUS_COEFFICIENTS, absKs) : Number.NaN;
 
 /** dR/dM_Ks of {@link radiusFromAbsKs}, R☉ per mag. */
-export const radiusSlope = (absKs: number): number => -0.352 + 0.0336 * absKs;
+export const radiusSlope = (absKs: number): number => slopeOfParabola(RADIUS_COEFFICIENTS, absKs);
 
 /**
  * Radius with the metallicity term, R☉: `(1.9305 − 0.3466 M + 0.01647 M²)(1 + 0.04458 [Fe/H])`; scatter 2.70 %. The
@@ -42,19 +60,21 @@ export const radiusSlope = (absKs: number): number => -0.352 + 0.0336 * absKs;
  */
 export const radiusFromAbsKsFeh = (absKs: number, feh: number): number =>
   isInRange(absKs) && feh >= RADIUS_FEH.least && feh <= RADIUS_FEH.most
-    ? (1.9305 - 0.3466 * absKs + 0.01647 * absKs * absKs) * (1 + 0.04458 * feh)
+    ? parabola(RADIUS_FEH_COEFFICIENTS, absKs) * (1 + RADIUS_FEH_TERM * feh)
     : Number.NaN;
 
 /** dR/dM_Ks of {@link radiusFromAbsKsFeh}, R☉ per mag. */
 export const radiusFehSlope = (absKs: number, feh: number): number =>
-  (-0.3466 + 0.03294 * absKs) * (1 + 0.04458 * feh);
+  slopeOfParabola(RADIUS_FEH_COEFFICIENTS, absKs) * (1 + RADIUS_FEH_TERM * feh);
+
+type Quintic = readonly [number, number, number, number, number, number];
 
 /** The quintic of Mann et al. 2019 in x = M_Ks − 7.5, by Horner. */
-const quintic = (x: number, a: number, b: number, c: number, d: number, e: number, f: number): number =>
-  a + x * (b + x * (c + x * (d + x * (e + x * f))));
+const quintic = (c: Quintic, x: number): number =>
+  c[0] + x * (c[1] + x * (c[2] + x * (c[3] + x * (c[4] + x * c[5]))));
 
-const slopeOfQuintic = (x: number, b: number, c: number, d: number, e: number, f: number): number =>
-  b + x * (2 * c + x * (3 * d + x * (4 * e + x * 5 * f)));
+const slopeOfQuintic = (c: Quintic, x: number): number =>
+  c[1] + x * (2 * c[2] + x * (3 * c[3] + x * (4 * c[4] + x * 5 * c[5])));
 
 /**
  * Mass, M☉: `log M = −0.642 − 0.208 x − 8.43e−4 x² + 7.87e−3 x³ + 1.42e−4 x⁴ − 2.13e−4 x⁵`, x = M_Ks − 7.5; scatter 2.0 %.
@@ -64,31 +84,35 @@ const slopeOfQuintic = (x: number, b: number, c: number, d: number, e: number, f
  * @example massFromAbsKs(7.5) // 0.22803420720004194
  */
 export const massFromAbsKs = (absKs: number): number =>
-  isInRange(absKs)
-    ? 10 ** quintic(absKs - 7.5, -0.642, -0.208, -8.43e-4, 7.87e-3, 1.42e-4, -2.13e-4)
-    : Number.NaN;
+  isInRange(absKs) ? 10 ** quintic(MASS_COEFFICIENTS, absKs - MASS_ZERO_POINT) : Number.NaN;
 
 /** d ln M / dM_Ks of {@link massFromAbsKs}, per mag. */
 export const logMassSlope = (absKs: number): number =>
-  Math.LN10 * slopeOfQuintic(absKs - 7.5, -0.208, -8.43e-4, 7.87e-3, 1.42e-4, -2.13e-4);
+  Math.LN10 * slopeOfQuintic(MASS_COEFFICIENTS, absKs - MASS_ZERO_POINT);
 
 /**
- * Mass with the metallicity term, M☉, for [Fe/H] −0.6 to 0.4: `(1 − 0.0035 [Fe/H]) 10^(−0.647 − 0.207 x − 6.53e−4 x² + 7.13e−3 x³ + 1.84e−4 x⁴ −
- * 1.60e−4 x⁵)`; scatter 2.1 %.
+ * Mass with the metallicity term, M☉, for [Fe/H] −0.6 to 0.4: `(1 − 0.0035 [Fe/H]) 10^(−0.647 − 0.207 x − 6.53e−4 x² +
+ * 7.13e−3 x³ + 1.84e−4 x⁴ − 1.60e−4 x⁵)`; scatter 2.1 %.
  *
  * @see Mann et al. 2019, ApJ 871, 63, eq. 5 and Table 6
  */
 export const massFromAbsKsFeh = (absKs: number, feh: number): number =>
   isInRange(absKs) && feh >= MASS_FEH.least && feh <= MASS_FEH.most
-    ? (1 - 0.0035 * feh) * 10 ** quintic(absKs - 7.5, -0.647, -0.207, -6.53e-4, 7.13e-3, 1.84e-4, -1.6e-4)
+    ? (1 + MASS_FEH_TERM * feh) * 10 ** quintic(MASS_FEH_COEFFICIENTS, absKs - MASS_ZERO_POINT)
     : Number.NaN;
 
 /** d ln M / dM_Ks of {@link massFromAbsKsFeh}, per mag. */
 export const logMassFehSlope = (absKs: number): number =>
-  Math.LN10 * slopeOfQuintic(absKs - 7.5, -0.207, -6.53e-4, 7.13e-3, 1.84e-4, -1.6e-4);
+  Math.LN10 * slopeOfQuintic(MASS_FEH_COEFFICIENTS, absKs - MASS_ZERO_POINT);
 
 /** BP − RP of the calibration stars of the temperature relation, and its temperatures. */
 export const COOL_DWARF_BP_RP = { bluest: 1.9, reddest: 4.75 } as const;
+/** Temperatures in which the colours of cool dwarfs tell one, K. */
+export const COOL_DWARF_TEFF_K = { coolest: 2700, hottest: 4100 } as const;
+/** The unit of the temperature relations, K. */
+export const COOL_DWARF_TEFF_UNIT_K = 3500;
+/** Powers of BP − RP, 0 to 4, in the first row of Table 2 of Mann et al. 2015. */
+export const COOL_DWARF_TEFF_COEFFICIENTS = [3.245, -2.4309, 1.043, -0.2127, 0.01649] as const;
 /** Scatter of the fit (52 K) and zero point of the spectroscopic scale (60 K) in quadrature. */
 export const COOL_DWARF_TEFF_SCATTER_K = Math.hypot(52, 60);
 
@@ -102,13 +126,19 @@ export const COOL_DWARF_TEFF_SCATTER_K = Math.hypot(52, 60);
  */
 export const coolDwarfTeff = (bpRp: number): number => {
   if (!(bpRp >= COOL_DWARF_BP_RP.bluest && bpRp <= COOL_DWARF_BP_RP.reddest)) return Number.NaN;
-  const teff = 3500 * (3.245 + bpRp * (-2.4309 + bpRp * (1.043 + bpRp * (-0.2127 + bpRp * 0.01649))));
-  return teff >= 2700 && teff <= 4100 ? teff : Number.NaN;
+  const c = COOL_DWARF_TEFF_COEFFICIENTS;
+  const teff = COOL_DWARF_TEFF_UNIT_K * (c[0] + bpRp * (c[1] + bpRp * (c[2] + bpRp * (c[3] + bpRp * c[4]))));
+  return teff >= COOL_DWARF_TEFF_K.coolest && teff <= COOL_DWARF_TEFF_K.hottest ? teff : Number.NaN;
 };
 
 /** dTeff / d(BP − RP) of {@link coolDwarfTeff}, K per mag. */
-export const coolDwarfTeffSlope = (bpRp: number): number =>
-  3500 * (-2.4309 + bpRp * (2.086 + bpRp * (-0.6381 + bpRp * 0.06596)));
+export const coolDwarfTeffSlope = (bpRp: number): number => {
+  const c = COOL_DWARF_TEFF_COEFFICIENTS;
+  return COOL_DWARF_TEFF_UNIT_K * (c[1] + bpRp * (2 * c[2] + bpRp * (3 * c[3] + bpRp * 4 * c[4])));
+};
+
+/** Powers of BP − RP, 0 to 2, in the bolometric correction to Ks. */
+export const BC_KS_COEFFICIENTS = [1.81625213, 0.40853528, -0.03546636] as const;
 
 /**
  * Bolometric correction to Ks from BP − RP, mag: `1.81625213 + 0.40853528 X − 0.03546636 X²`; rms 0.040 mag.
@@ -119,11 +149,12 @@ export const coolDwarfTeffSlope = (bpRp: number): number =>
  */
 export const bolometricCorrectionKs = (bpRp: number): number =>
   bpRp >= COOL_DWARF_BP_RP.bluest && bpRp <= COOL_DWARF_BP_RP.reddest
-    ? 1.81625213 + bpRp * (0.40853528 - 0.03546636 * bpRp)
+    ? parabola(BC_KS_COEFFICIENTS, bpRp)
     : Number.NaN;
 
 /** dBC_Ks / d(BP − RP) of {@link bolometricCorrectionKs}. */
-export const bolometricCorrectionKsSlope = (bpRp: number): number => 0.40853528 - 0.07093272 * bpRp;
+export const bolometricCorrectionKsSlope = (bpRp: number): number =>
+  slopeOfParabola(BC_KS_COEFFICIENTS, bpRp);
 
 /** Scatter of {@link bolometricCorrectionKs}, mag. */
 export const BC_KS_SCATTER = 0.04;

@@ -11,7 +11,11 @@ export type HabitableLimit = "recent-venus" | "runaway-greenhouse" | "maximum-gr
 
 type Coefficients = readonly [number, number, number, number, number];
 
-const COEFFICIENTS: Readonly<Record<HabitableLimit, Coefficients>> = {
+/** Temperature from which the powers count, K: not the nominal 5772 K. */
+export const HABITABLE_ZONE_ZERO_POINT_K = 5780;
+
+/** S₀, a, b, c and d of each limit. */
+export const HABITABLE_ZONE_COEFFICIENTS: Readonly<Record<HabitableLimit, Coefficients>> = {
   "recent-venus": [1.776, 2.136e-4, 2.533e-8, -1.332e-11, -3.097e-15],
   "runaway-greenhouse": [1.107, 1.332e-4, 1.58e-8, -8.308e-12, -1.931e-15],
   "maximum-greenhouse": [0.356, 6.171e-5, 1.698e-9, -3.198e-12, -5.575e-16],
@@ -26,16 +30,16 @@ const COEFFICIENTS: Readonly<Record<HabitableLimit, Coefficients>> = {
  */
 export const insolationAtLimit = (limit: HabitableLimit, teffK: number): number => {
   if (!(teffK >= HABITABLE_ZONE_TEFF_K.coolest && teffK <= HABITABLE_ZONE_TEFF_K.hottest)) return Number.NaN;
-  const [s, a, b, c, d] = COEFFICIENTS[limit];
-  const t = teffK - 5780;
-  return s + t * (a + t * (b + t * (c + t * d)));
+  const c = HABITABLE_ZONE_COEFFICIENTS[limit];
+  const t = teffK - HABITABLE_ZONE_ZERO_POINT_K;
+  return c[0] + t * (c[1] + t * (c[2] + t * (c[3] + t * c[4])));
 };
 
 /** dS/dTeff of {@link insolationAtLimit}, per K. */
 export const insolationSlope = (limit: HabitableLimit, teffK: number): number => {
-  const [, a, b, c, d] = COEFFICIENTS[limit];
-  const t = teffK - 5780;
-  return a + t * (2 * b + t * (3 * c + t * 4 * d));
+  const c = HABITABLE_ZONE_COEFFICIENTS[limit];
+  const t = teffK - HABITABLE_ZONE_ZERO_POINT_K;
+  return c[1] + t * (2 * c[2] + t * (3 * c[3] + t * 4 * c[4]));
 };
 
 /** Distance at which the star gives that insolation, au: `√(L / S)`. */

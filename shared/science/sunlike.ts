@@ -7,8 +7,16 @@ export const SUNLIKE_BRIGHTEST_MAG = 5;
 /** Zero point of the scale, K (Casagrande et al. 2021), and scatter about the fit (30 to 80 K by colour, from memory). */
 export const SUNLIKE_TEFF_SCATTER_K = Math.hypot(20, 60);
 
+/** The fifteen coefficients of the BP − RP row of Casagrande et al. 2021 in the order of {@link sunlikeTeff}. */
+export const SUNLIKE_TEFF_COEFFICIENTS = [
+  7980.8845, -4138.3457, 1264.9366, -130.4388, 0, 285.8393, -324.2196, 106.8511, -4.9825, 0, 4.5138,
+  -203.7774, 126.6981, -14.7442, 40.7376,
+] as const;
+
 /**
- * Effective temperature from dereddened BP − RP, log g and [Fe/H], K; note X⁵ has no coefficient in this colour.
+ * Effective temperature from dereddened BP − RP, log g and [Fe/H], K: `a₀ + a₁ X + a₂ X² + a₃ X³ + a₄ X⁵ + log g (a₅ +
+ * a₆ X + a₇ X² + a₈ X³ + a₉ X⁵) + [Fe/H] (a₁₀ + a₁₁ X + a₁₂ X² + a₁₃ X³) + a₁₄ log g [Fe/H] X`. In this colour X⁵ has no
+ * coefficient.
  *
  * @param bpRp BP − RP, mag, 0.20 to 2.00 (dwarfs, log g > 3.2)
  * @param logg log g, dex of cm/s², 3.2 to 5
@@ -20,31 +28,53 @@ export const SUNLIKE_TEFF_SCATTER_K = Math.hypot(20, 60);
 export const sunlikeTeff = (bpRp: number, logg: number, feh: number): number => {
   if (!(bpRp >= SUNLIKE_BP_RP.bluest && bpRp <= SUNLIKE_BP_RP.reddest)) return Number.NaN;
   if (!(logg > 3.2 && logg <= 5) || !(feh >= -4 && feh <= 0.6)) return Number.NaN;
+  const a = SUNLIKE_TEFF_COEFFICIENTS;
   return (
-    7980.8845 +
-    bpRp * (-4138.3457 + bpRp * (1264.9366 - 130.4388 * bpRp)) +
-    logg * (285.8393 + bpRp * (-324.2196 + bpRp * (106.8511 - 4.9825 * bpRp))) +
-    feh * (4.5138 + bpRp * (-203.7774 + bpRp * (126.6981 - 14.7442 * bpRp))) +
-    40.7376 * feh * logg * bpRp
+    a[0] +
+    bpRp * (a[1] + bpRp * (a[2] + a[3] * bpRp)) +
+    logg * (a[5] + bpRp * (a[6] + bpRp * (a[7] + a[8] * bpRp))) +
+    feh * (a[10] + bpRp * (a[11] + bpRp * (a[12] + a[13] * bpRp))) +
+    a[14] * feh * logg * bpRp
   );
 };
 
 /** dTeff / d(BP − RP) of {@link sunlikeTeff}, K per mag. */
-export const sunlikeTeffSlope = (bpRp: number, logg: number, feh: number): number =>
-  -4138.3457 +
-  bpRp * (2529.8732 - 391.3164 * bpRp) +
-  logg * (-324.2196 + bpRp * (213.7022 - 14.9475 * bpRp)) +
-  feh * (-203.7774 + bpRp * (253.3962 - 44.2326 * bpRp)) +
-  40.7376 * feh * logg;
+export const sunlikeTeffSlope = (bpRp: number, logg: number, feh: number): number => {
+  const a = SUNLIKE_TEFF_COEFFICIENTS;
+  return (
+    a[1] +
+    bpRp * (2 * a[2] + 3 * a[3] * bpRp) +
+    logg * (a[6] + bpRp * (2 * a[7] + 3 * a[8] * bpRp)) +
+    feh * (a[11] + bpRp * (2 * a[12] + 3 * a[13] * bpRp)) +
+    a[14] * feh * logg
+  );
+};
 
 /** dTeff / dlog g and dTeff / d[Fe/H] of {@link sunlikeTeff}, K per dex. */
-export const sunlikeTeffLoggSlope = (bpRp: number, feh: number): number =>
-  285.8393 + bpRp * (-324.2196 + bpRp * (106.8511 - 4.9825 * bpRp)) + 40.7376 * feh * bpRp;
-export const sunlikeTeffFehSlope = (bpRp: number, logg: number): number =>
-  4.5138 + bpRp * (-203.7774 + bpRp * (126.6981 - 14.7442 * bpRp)) + 40.7376 * logg * bpRp;
+export const sunlikeTeffLoggSlope = (bpRp: number, feh: number): number => {
+  const a = SUNLIKE_TEFF_COEFFICIENTS;
+  return a[5] + bpRp * (a[6] + bpRp * (a[7] + a[8] * bpRp)) + a[14] * feh * bpRp;
+};
+export const sunlikeTeffFehSlope = (bpRp: number, logg: number): number => {
+  const a = SUNLIKE_TEFF_COEFFICIENTS;
+  return a[10] + bpRp * (a[11] + bpRp * (a[12] + a[13] * bpRp)) + a[14] * logg * bpRp;
+};
 
 /** Temperatures in which the correction to G holds, K. */
 export const BC_G_TEFF_K = { coolest: 3300, hottest: 8000 } as const;
+/** Where its two branches meet, K: this temperature belongs to the hot one. */
+export const BC_G_BRANCH_K = 4000;
+/** Temperature from which the powers count, K. */
+export const BC_G_ZERO_POINT_K = 5772;
+
+type Quartic = readonly [number, number, number, number, number];
+
+/** Powers of Teff − 5772 K, 0 to 4, in Table 4 of Andrae et al. 2018: 4000 to 8000 K and 3300 to 4000 K. */
+export const BC_G_HOT_COEFFICIENTS: Quartic = [6.0e-2, 6.731e-5, -6.647e-8, 2.859e-11, -7.197e-15];
+export const BC_G_COOL_COEFFICIENTS: Quartic = [1.749, 1.977e-3, 3.737e-7, -8.966e-11, -4.183e-14];
+
+const branchOf = (teffK: number): Quartic =>
+  teffK >= BC_G_BRANCH_K ? BC_G_HOT_COEFFICIENTS : BC_G_COOL_COEFFICIENTS;
 
 /**
  * Bolometric correction to G, mag: a quartic in `Teff − 5772`, one branch for 4000 to 8000 K and one for 3300 to 4000 K.
@@ -54,19 +84,17 @@ export const BC_G_TEFF_K = { coolest: 3300, hottest: 8000 } as const;
  * @example bolometricCorrectionG(5772) // 0.06
  */
 export const bolometricCorrectionG = (teffK: number): number => {
-  const t = teffK - 5772;
   if (!(teffK >= BC_G_TEFF_K.coolest && teffK <= BC_G_TEFF_K.hottest)) return Number.NaN;
-  return teffK >= 4000
-    ? 6.0e-2 + t * (6.731e-5 + t * (-6.647e-8 + t * (2.859e-11 - 7.197e-15 * t)))
-    : 1.749 + t * (1.977e-3 + t * (3.737e-7 + t * (-8.966e-11 - 4.183e-14 * t)));
+  const c = branchOf(teffK);
+  const t = teffK - BC_G_ZERO_POINT_K;
+  return c[0] + t * (c[1] + t * (c[2] + t * (c[3] + c[4] * t)));
 };
 
 /** dBC_G / dTeff of {@link bolometricCorrectionG}, mag per K. */
 export const bolometricCorrectionGSlope = (teffK: number): number => {
-  const t = teffK - 5772;
-  return teffK >= 4000
-    ? 6.731e-5 + t * (-1.3294e-7 + t * (8.577e-11 - 2.8788e-14 * t))
-    : 1.977e-3 + t * (7.474e-7 + t * (-2.6898e-10 - 1.6732e-13 * t));
+  const c = branchOf(teffK);
+  const t = teffK - BC_G_ZERO_POINT_K;
+  return c[1] + t * (2 * c[2] + t * (3 * c[3] + 4 * c[4] * t));
 };
 
 /**
@@ -74,6 +102,12 @@ export const bolometricCorrectionGSlope = (teffK: number): number => {
  * judgement of this project, the border of dwarfs in the temperature relation above.
  */
 export const SPECTRAL_MASS_LEAST_LOGG = 3.2;
+/** Least mass of the calibration stars, M☉. */
+export const SPECTRAL_LEAST_MASS = 0.6;
+/** log Teff from which the powers of the relation count. */
+export const SPECTRAL_ZERO_POINT = 4.1;
+/** Constant, X, X², X³, (log g)², (log g)³ and [Fe/H] in log M: Torres et al. 2010, Table 4. */
+export const SPECTRAL_MASS_COEFFICIENTS = [1.5689, 1.3787, 0.4243, 1.139, -0.1425, 0.01969, 0.101] as const;
 
 /**
  * Mass of a star like the Sun, M☉, from temperature, gravity and iron content; scatter 0.027 dex (6.4 %). It gives the
@@ -85,12 +119,11 @@ export const SPECTRAL_MASS_LEAST_LOGG = 3.2;
  */
 export const massFromSpectrum = (teffK: number, logg: number, feh: number): number => {
   if (!(logg >= SPECTRAL_MASS_LEAST_LOGG)) return Number.NaN;
-  const x = Math.log10(teffK) - 4.1;
-  const g = logg;
-  const log =
-    1.5689 + x * (1.3787 + x * (0.4243 + x * 1.139)) + g * g * (-0.1425 + 0.01969 * g) + 0.101 * feh;
-  const mass = 10 ** log;
-  return mass > 0.6 ? mass : Number.NaN;
+  const a = SPECTRAL_MASS_COEFFICIENTS;
+  const x = Math.log10(teffK) - SPECTRAL_ZERO_POINT;
+  const powers = a[0] + x * (a[1] + x * (a[2] + x * a[3]));
+  const mass = 10 ** (powers + logg * logg * (a[4] + a[5] * logg) + a[6] * feh);
+  return mass > SPECTRAL_LEAST_MASS ? mass : Number.NaN;
 };
 
 /** Scatter of {@link massFromSpectrum}, relative. */
@@ -98,8 +131,10 @@ export const SPECTRAL_MASS_SCATTER = 0.064;
 
 /** d ln M / dTeff (per K), / dlog g and / d[Fe/H] (per dex) of {@link massFromSpectrum}. */
 export const spectralMassTeffSlope = (teffK: number): number => {
-  const x = Math.log10(teffK) - 4.1;
-  return (1.3787 + x * (0.8486 + x * 3.417)) / teffK;
+  const a = SPECTRAL_MASS_COEFFICIENTS;
+  const x = Math.log10(teffK) - SPECTRAL_ZERO_POINT;
+  return (a[1] + x * (2 * a[2] + x * 3 * a[3])) / teffK;
 };
-export const spectralMassLoggSlope = (logg: number): number => Math.LN10 * logg * (-0.285 + 0.05907 * logg);
-export const SPECTRAL_MASS_FEH_SLOPE = Math.LN10 * 0.101;
+export const spectralMassLoggSlope = (logg: number): number =>
+  Math.LN10 * logg * (2 * SPECTRAL_MASS_COEFFICIENTS[4] + 3 * SPECTRAL_MASS_COEFFICIENTS[5] * logg);
+export const SPECTRAL_MASS_FEH_SLOPE = Math.LN10 * SPECTRAL_MASS_COEFFICIENTS[6];
