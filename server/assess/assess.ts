@@ -3,7 +3,7 @@ import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
 import { detectableRadius, leastTransits, transitsInCampaign } from "#shared/science/detection.ts";
 import { brightestUsable, noiseInOneHour } from "#shared/science/noise.ts";
 import { scaledAxis } from "#shared/science/orbit.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 
 /** What the assessment of one star needs; NaN is blank. */
 export interface AssessedStar {
@@ -69,7 +69,7 @@ export const assessStar = (
   star: AssessedStar,
   card: CardSettings,
   campaign: CampaignSettings,
-  recipe: Recipe,
+  recipe: RecipeSettings,
   result: Assessment,
 ): Assessment => {
   result.noiseBlank = noiseBlank(card, star.magnitude);

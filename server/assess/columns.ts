@@ -1,5 +1,5 @@
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { type AssessedStar, assessStar, newAssessment } from "./assess.ts";
 
 /** Star columns that an assessment reads, by key; NaN is blank. A missing column counts as blank throughout. */
@@ -70,7 +70,7 @@ export const assessColumns = (
   length: number,
   card: CardSettings,
   campaign: CampaignSettings,
-  recipe: Recipe,
+  recipe: RecipeSettings,
 ): InstrumentColumns => {
   const out = allocate(length);
   const star = blankStar();

@@ -1,4 +1,4 @@
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { encodeRow, encodeValue, type Value } from "../database/bulk.ts";
 import { stellarColumns } from "../database/star-table.ts";
 import { deriveColumns } from "../derive/derive.ts";
@@ -19,7 +19,7 @@ const arrayOf = (derived: StellarColumns, key: string): ArrayLike<number> => {
 };
 
 /** Whole rows as encoded lines, in the order of `STAR_VALUES`, from adopted values. */
-export const deriveLines = (adopted: readonly Value[][], recipe: Recipe): string[] => {
+export const deriveLines = (adopted: readonly Value[][], recipe: RecipeSettings): string[] => {
   const given = allocateGiven(adopted.length);
   for (const key of GIVEN_KEYS) {
     const at = GIVEN.indexOf(key);

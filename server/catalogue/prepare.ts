@@ -92,7 +92,7 @@ export const prepareBlock = (
   const living = ids.filter((id) => entries.has(id));
   const derived = deriveLines(
     living.map((id) => adopt(entries.get(id) ?? [])),
-    basis.recipe,
+    basis.recipe.settings,
   );
   const prepared: PreparedBlock = { lines: [], closed: [], added: 0, ended: 0 };
   living.forEach((id, i) => {

@@ -1,14 +1,11 @@
 import type { BlankKey } from "#shared/catalogue/blank-reasons.ts";
 import { absoluteMagnitude, absoluteMagnitudeError, distanceFromParallax } from "#shared/science/distance.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { SUNLIKE_BRIGHTEST_MAG } from "#shared/science/sunlike.ts";
 import { judgeDwarf } from "./dwarf.ts";
 import { at, errorAt, type Inputs } from "./inputs.ts";
 import type { Scratch } from "./scratch.ts";
 import type { Slots } from "./slots.ts";
-
-/** What dwarfs take where log g or [Fe/H] is not given. */
-const ASSUMED = { logg: 4.5, loggError: 0.3, feh: 0, fehError: 0.2 } as const;
 
 /** Why a parallax gives no distance. */
 const distanceReason = (parallax: number, error: number): BlankKey => {
@@ -17,15 +14,15 @@ const distanceReason = (parallax: number, error: number): BlankKey => {
   return Number.isNaN(error) ? "needs-parallax-error" : "parallax-too-uncertain";
 };
 
-const readSpectrum = (star: Scratch, given: Inputs): void => {
+const readSpectrum = (star: Scratch, given: Inputs, { assumed }: RecipeSettings): void => {
   const logg = at(given.logg, star.row);
   const feh = at(given.feh, star.row);
   star.hasLogg = !Number.isNaN(logg);
   star.hasFeh = !Number.isNaN(feh);
-  star.logg = star.hasLogg ? logg : ASSUMED.logg;
-  star.loggError = star.hasLogg ? errorAt(given.loggError, star.row) : ASSUMED.loggError;
-  star.feh = star.hasFeh ? feh : ASSUMED.feh;
-  star.fehError = star.hasFeh ? errorAt(given.fehError, star.row) : ASSUMED.fehError;
+  star.logg = star.hasLogg ? logg : assumed.logg;
+  star.loggError = star.hasLogg ? errorAt(given.loggError, star.row) : assumed.loggError;
+  star.feh = star.hasFeh ? feh : assumed.feh;
+  star.fehError = star.hasFeh ? errorAt(given.fehError, star.row) : assumed.fehError;
   star.isAssumed = false;
 };
 
@@ -39,19 +36,19 @@ const readColour = (star: Scratch, given: Inputs): void => {
   star.isColourSafe = bp >= SUNLIKE_BRIGHTEST_MAG && rp >= SUNLIKE_BRIGHTEST_MAG;
 };
 
-const writeDistance = (star: Scratch, given: Inputs, recipe: Recipe, out: Slots): void => {
+const writeDistance = (star: Scratch, given: Inputs, recipe: RecipeSettings, out: Slots): void => {
   const parallax = at(given.parallax, star.row);
   const error = errorAt(given.parallaxError, star.row);
-  const zeroPoint = recipe.parallaxZeroPointMas;
-  star.distance = distanceFromParallax(parallax, error, recipe.parallaxFractionLimit, zeroPoint);
+  const { zeroPointMas: zeroPoint, fractionLimit } = recipe.distance;
+  star.distance = distanceFromParallax(parallax, error, fractionLimit, zeroPoint);
   star.distanceError = error / (parallax - zeroPoint);
   if (Number.isNaN(star.distance)) out.distance.blank(star.row, distanceReason(parallax - zeroPoint, error));
   else out.distance.value(star.row, star.distance, star.distance * star.distanceError);
 };
 
 /** Distance and absolute magnitudes, and whether the star can be a dwarf. */
-export const deriveDistance = (star: Scratch, given: Inputs, recipe: Recipe, out: Slots): void => {
-  readSpectrum(star, given);
+export const deriveDistance = (star: Scratch, given: Inputs, recipe: RecipeSettings, out: Slots): void => {
+  readSpectrum(star, given, recipe);
   readColour(star, given);
   writeDistance(star, given, recipe, out);
   const ks = at(given.ks, star.row);

@@ -1,5 +1,5 @@
 import { countWarnings, flagBit } from "#shared/catalogue/flags.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { deriveDistance } from "./brightness.ts";
 import { deriveHabitability } from "./habitability.ts";
 import { at, bindInputs, type Inputs } from "./inputs.ts";
@@ -13,9 +13,9 @@ import { deriveTemperature } from "./temperature.ts";
 
 const LEAST_CLEAN_LIGHT_SHARE = 0.98;
 
-const flagsOf = (star: Scratch, given: Inputs, recipe: Recipe): number => {
+const flagsOf = (star: Scratch, given: Inputs, recipe: RecipeSettings): number => {
   let bits = 0;
-  if (at(given.ruwe, star.row) > recipe.ruweLimit) bits |= flagBit("maybe-two-stars");
+  if (at(given.ruwe, star.row) > recipe.astrometricQuality.limit) bits |= flagBit("maybe-two-stars");
   if (at(given.lightShare, star.row) < LEAST_CLEAN_LIGHT_SHARE) bits |= flagBit("shared-light");
   if (star.isNotDwarf) bits |= flagBit("not-dwarf-like");
   if (star.isAssumed) bits |= flagBit("assumed");
@@ -28,7 +28,7 @@ const flagsOf = (star: Scratch, given: Inputs, recipe: Recipe): number => {
  * @param given numeric given columns by key (see GIVEN_KEYS), NaN where nothing is given; a missing key counts as such
  * @returns every stellar column; no value is NaN without a blank reason beside it
  */
-export const deriveColumns = (given: Columns, length: number, recipe: Recipe): StellarColumns => {
+export const deriveColumns = (given: Columns, length: number, recipe: RecipeSettings): StellarColumns => {
   const columns = allocateStellar(length);
   const inputs = bindInputs(given, length);
   const out = slotsOf(columns);
@@ -50,7 +50,7 @@ export const deriveColumns = (given: Columns, length: number, recipe: Recipe): S
 };
 
 /** One star by the same code: given values by key, NaN or absent where not given. */
-export const deriveStar = (given: Readonly<Record<string, number>>, recipe: Recipe): StellarColumns =>
+export const deriveStar = (given: Readonly<Record<string, number>>, recipe: RecipeSettings): StellarColumns =>
   deriveColumns(
     Object.fromEntries(Object.entries(given).map(([key, value]) => [key, Float64Array.of(value)])),
     1,

@@ -6,7 +6,7 @@ import {
   insolationSlope,
 } from "#shared/science/habitable-zone.ts";
 import { periodFromAxis, scaledAxis } from "#shared/science/orbit.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { centralDuration, depthPpm, MEAN_CHORD, transitProbability } from "#shared/science/transit.ts";
 import { addScaled, combine, relativeError, scale } from "./relative-error.ts";
 import type { Scratch } from "./scratch.ts";
@@ -52,7 +52,13 @@ const writeDepth = (star: Scratch, out: Slots): void => {
   out.earth_depth.value(star.row, depth, depth * 2 * relativeError(star.radiusErrors));
 };
 
-const writeDuration = (star: Scratch, a: number, period: number, recipe: Recipe, out: Slots): void => {
+const writeDuration = (
+  star: Scratch,
+  a: number,
+  period: number,
+  recipe: RecipeSettings,
+  out: Slots,
+): void => {
   if (Number.isNaN(period)) {
     out.transit_duration.blank(star.row, "needs-mass");
     return;
@@ -65,7 +71,13 @@ const writeDuration = (star: Scratch, a: number, period: number, recipe: Recipe,
 };
 
 /** Probability and duration of a transit at the axis whose error vector stands in `star.axisErrors`. */
-const writeTransit = (star: Scratch, axis: number, period: number, recipe: Recipe, out: Slots): void => {
+const writeTransit = (
+  star: Scratch,
+  axis: number,
+  period: number,
+  recipe: RecipeSettings,
+  out: Slots,
+): void => {
   if (Number.isNaN(star.radius)) {
     out.transit_probability.blank(star.row, "needs-radius");
     out.transit_duration.blank(star.row, "needs-radius");
@@ -84,7 +96,7 @@ const writeTransit = (star: Scratch, axis: number, period: number, recipe: Recip
 };
 
 /** Habitable zone, the orbit of Earth's insolation, and a transit there. */
-export const deriveHabitability = (star: Scratch, recipe: Recipe, out: Slots): void => {
+export const deriveHabitability = (star: Scratch, recipe: RecipeSettings, out: Slots): void => {
   writeLimit(star, "runaway-greenhouse", out.hz_inner, out.hz_inner_period);
   writeLimit(star, "maximum-greenhouse", out.hz_outer, out.hz_outer_period);
   writeDepth(star, out);

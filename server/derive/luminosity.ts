@@ -4,7 +4,7 @@ import {
   bolometricCorrectionKsSlope,
 } from "#shared/science/cool-dwarfs.ts";
 import { luminosityFromMagnitude, luminosityFromRadius } from "#shared/science/luminosity.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { bolometricCorrectionG, bolometricCorrectionGSlope } from "#shared/science/sunlike.ts";
 import { isCool } from "./dwarf.ts";
 import { addScaled, combine, PER_PARALLAX, relativeError, SOURCE, setKsErrors } from "./relative-error.ts";
@@ -51,8 +51,8 @@ const lightFromRadius = (star: Scratch): boolean => {
 };
 
 /** Luminosity: from an absolute magnitude and its bolometric correction, else R² T⁴. */
-export const deriveLuminosity = (star: Scratch, recipe: Recipe, out: Slots): void => {
-  const byCorrection = recipe.luminosity === "bolometric-correction";
+export const deriveLuminosity = (star: Scratch, recipe: RecipeSettings, out: Slots): void => {
+  const byCorrection = recipe.luminosity.includes("correction-ks");
   if (byCorrection && lightFromKs(star)) out.luminosity.method(star.row, "correction-ks");
   else if (byCorrection && lightFromG(star)) out.luminosity.method(star.row, "correction-g");
   else if (lightFromRadius(star)) out.luminosity.method(star.row, "radius-and-temperature");

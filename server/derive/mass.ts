@@ -7,7 +7,7 @@ import {
   massFromAbsKsFeh,
 } from "#shared/science/cool-dwarfs.ts";
 import { densityFromMassRadius } from "#shared/science/luminosity.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import {
   massFromSpectrum,
   SPECTRAL_MASS_FEH_SLOPE,
@@ -20,7 +20,7 @@ import { combine, relativeError, SOURCE, scale, setKsErrors } from "./relative-e
 import type { Scratch } from "./scratch.ts";
 import type { Slots } from "./slots.ts";
 
-const coolMass = (star: Scratch, recipe: Recipe, out: Slots): boolean => {
+const coolMass = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => {
   if (!isCool(star)) return false;
   const withFeh = recipe.usesFeh && star.hasFeh ? massFromAbsKsFeh(star.absKs, star.feh) : Number.NaN;
   const usesFeh = !Number.isNaN(withFeh);
@@ -35,8 +35,8 @@ const coolMass = (star: Scratch, recipe: Recipe, out: Slots): boolean => {
 };
 
 /** A gravity is assumed for a star that its place shows to be a dwarf, and for no other. */
-const spectralMass = (star: Scratch, recipe: Recipe, out: Slots): boolean => {
-  if (!recipe.usesSunlike || !(star.hasLogg || star.isDwarf)) return false;
+const spectralMass = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => {
+  if (!recipe.mass.includes("spectrum") || !(star.hasLogg || star.isDwarf)) return false;
   star.mass = massFromSpectrum(star.teff, star.logg, star.feh);
   if (Number.isNaN(star.mass)) return false;
   const errors = star.massErrors;
@@ -56,7 +56,7 @@ const writeBlank = (star: Scratch, out: Slots): void => {
   else out.mass.blank(star.row, "outside-mass-relation");
 };
 
-export const deriveMass = (star: Scratch, recipe: Recipe, out: Slots): void => {
+export const deriveMass = (star: Scratch, recipe: RecipeSettings, out: Slots): void => {
   if (coolMass(star, recipe, out) || spectralMass(star, recipe, out))
     out.mass.value(star.row, star.mass, star.mass * relativeError(star.massErrors));
   else writeBlank(star, out);

@@ -7,7 +7,7 @@ import {
   radiusSlope,
 } from "#shared/science/cool-dwarfs.ts";
 import { radiusFromLuminosity } from "#shared/science/luminosity.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { isCool } from "./dwarf.ts";
 import { lightFromG } from "./luminosity.ts";
 import { combine, relativeError, SOURCE, setKsErrors } from "./relative-error.ts";
@@ -15,7 +15,7 @@ import type { Scratch } from "./scratch.ts";
 import type { Slots } from "./slots.ts";
 
 /** [Fe/H] term where it is given, inside its range and wanted; else the relation without. */
-const coolRadius = (star: Scratch, recipe: Recipe, out: Slots): boolean => {
+const coolRadius = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => {
   if (!isCool(star)) return false;
   const withFeh = recipe.usesFeh && star.hasFeh ? radiusFromAbsKsFeh(star.absKs, star.feh) : Number.NaN;
   const usesFeh = !Number.isNaN(withFeh);
@@ -30,15 +30,15 @@ const coolRadius = (star: Scratch, recipe: Recipe, out: Slots): boolean => {
   return true;
 };
 
-const sunlikeRadius = (star: Scratch, recipe: Recipe, out: Slots): boolean => {
-  if (!recipe.usesSunlike || !lightFromG(star)) return false;
+const sunlikeRadius = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => {
+  if (!recipe.radius.includes("light-and-temperature") || !lightFromG(star)) return false;
   star.radius = radiusFromLuminosity(star.luminosity, star.teff);
   combine(star.radiusErrors, 0.5, star.luminosityErrors, -2, star.teffErrors);
   out.radius.method(star.row, "light-and-temperature");
   return true;
 };
 
-export const deriveRadius = (star: Scratch, recipe: Recipe, out: Slots): void => {
+export const deriveRadius = (star: Scratch, recipe: RecipeSettings, out: Slots): void => {
   if (coolRadius(star, recipe, out) || sunlikeRadius(star, recipe, out)) {
     out.radius.value(star.row, star.radius, star.radius * relativeError(star.radiusErrors));
     return;

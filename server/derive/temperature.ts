@@ -1,5 +1,5 @@
 import { COOL_DWARF_TEFF_SCATTER_K, coolDwarfTeff, coolDwarfTeffSlope } from "#shared/science/cool-dwarfs.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import {
   SUNLIKE_TEFF_SCATTER_K,
   sunlikeTeff,
@@ -52,7 +52,7 @@ const tryCool = (star: Scratch, out: Slots): boolean => {
 };
 
 /** Temperature: as given, else from colour where the recipe says so. A temperature of 0 K or less is none. */
-export const deriveTemperature = (star: Scratch, given: Inputs, recipe: Recipe, out: Slots): void => {
+export const deriveTemperature = (star: Scratch, given: Inputs, recipe: RecipeSettings, out: Slots): void => {
   const teff = at(given.teff, star.row);
   if (teff > 0) {
     adopt(star, teff, 0, errorAt(given.teffError, star.row));
@@ -60,7 +60,7 @@ export const deriveTemperature = (star: Scratch, given: Inputs, recipe: Recipe, 
     return;
   }
   star.teff = Number.NaN;
-  if (!recipe.usesColourTeff || Number.isNaN(star.bpRp)) {
+  if (!recipe.teff.includes("cool-colour") || Number.isNaN(star.bpRp)) {
     out.teff.blank(star.row, "needs-teff");
     return;
   }

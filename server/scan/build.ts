@@ -47,7 +47,7 @@ const assessorOf = async (
 ): Promise<ReturnType<typeof createAssessor> | null> => {
   if (key.cardVersionId === null) return null;
   return createAssessor({
-    recipe: await recipeOf(deps, key),
+    recipe: (await recipeOf(deps, key)).settings,
     card: await cardSettings(deps, key.programmeId, key.cardVersionId),
     campaign:
       key.campaignVersionId === null

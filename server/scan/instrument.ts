@@ -1,10 +1,10 @@
 import { type AssessedStar, type Assessment, assessStar, newAssessment } from "#server/assess/assess.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 
 /** How stars are seen: by one card in one campaign. Without a campaign only the noise is known. */
 export interface Instrument {
-  recipe: Recipe;
+  recipe: RecipeSettings;
   card: CardSettings;
   campaign: CampaignSettings | null;
 }

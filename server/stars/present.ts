@@ -51,7 +51,8 @@ const assessedCells = (
 export const rowPresenter = (resolved: ResolvedView): ((row: StoredStar) => Omit<StarRow, "place">) => {
   const { card, campaign, recipe, merit } = resolved;
   const assess =
-    card && createAssessor({ recipe, card: card.settings, campaign: campaign?.settings ?? null });
+    card &&
+    createAssessor({ recipe: recipe.settings, card: card.settings, campaign: campaign?.settings ?? null });
   return (row) => {
     const cells: Cells = { values: {}, blanks: {} };
     storedCells(row, GIVEN, cells);

@@ -31,5 +31,11 @@ export const reachOf = (
   const star = assessedStar((key) => values[key] ?? Number.NaN, card.settings);
   if (![star.radius, star.earthDistance, star.earthPeriod].every(Number.isFinite)) return [];
   const { lengthDays, duty } = campaign.settings;
-  return reachByPeriod(star, card.settings, campaign.settings, recipe, periodsUpTo(lengthDays * duty));
+  return reachByPeriod(
+    star,
+    card.settings,
+    campaign.settings,
+    recipe.settings,
+    periodsUpTo(lengthDays * duty),
+  );
 };

@@ -1,6 +1,6 @@
 import type { CampaignSettings } from "./cards.ts";
 import { EARTH_RADII_PER_SOLAR } from "./constants.ts";
-import type { Recipe } from "./recipes.ts";
+import type { RecipeSettings } from "./recipes.ts";
 import { fullTransitDuration, MEAN_CHORD, transitDuration } from "./transit.ts";
 
 /** Rounding of decimal settings in binary: 100 d × 0.29 is 28.999999999999996 d, and 29 d must fit into it once. */
@@ -59,7 +59,7 @@ const MEAN_CHORD_IMPACT = Math.sqrt(1 - MEAN_CHORD ** 2);
  */
 export const detectableRadius = (
   campaign: CampaignSettings,
-  duration: Recipe["duration"],
+  duration: RecipeSettings["duration"],
   radiusSolar: number,
   noise1hPpm: number,
   lightShare: number,

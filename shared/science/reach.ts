@@ -2,7 +2,7 @@ import type { CampaignSettings, CardSettings } from "./cards.ts";
 import { detectableRadius, leastTransits, transitsInCampaign } from "./detection.ts";
 import { noiseInOneHour } from "./noise.ts";
 import { scaledAxis } from "./orbit.ts";
-import type { Recipe } from "./recipes.ts";
+import type { RecipeSettings } from "./recipes.ts";
 import { centralDuration, MEAN_CHORD } from "./transit.ts";
 
 /** What a star brings to its reach; NaN is blank. */
@@ -34,7 +34,7 @@ export const reachByPeriod = (
   star: ReachStar,
   card: CardSettings,
   campaign: CampaignSettings,
-  recipe: Recipe,
+  recipe: RecipeSettings,
   periods: readonly number[],
 ): ReachPoint[] => {
   const noise = noiseInOneHour(card, star.magnitude);

@@ -46,7 +46,7 @@ const bench: Bench = {
       blocks.push({ given: givenStars(length), length });
     }
     const whole = await medianTime(ROUNDS, () => {
-      for (const { given, length } of blocks) deriveColumns(given, length, DEFAULT_RECIPE);
+      for (const { given, length } of blocks) deriveColumns(given, length, DEFAULT_RECIPE.settings);
     });
     const bare = await medianTime(ROUNDS, () => {
       for (const { given, length } of blocks) bareRadius(given, length);

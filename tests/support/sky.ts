@@ -64,7 +64,7 @@ const starRow = (stars: readonly GivenStar[], recipe: string) => {
       column[i] = value;
     }
   });
-  const stellar = deriveColumns(given, stars.length, findRecipe(recipe));
+  const stellar = deriveColumns(given, stars.length, findRecipe(recipe).settings);
   const all = { ...given, ...stellar.values, ...stellar.blanks, ...stellar.methods };
   return (i: number): Record<string, unknown> => ({
     ...Object.fromEntries(

@@ -1,27 +1,36 @@
-import { DEFAULT_RECIPE, PRACTICE_RECIPE, type Recipe } from "#shared/science/recipes.ts";
+import {
+  DEFAULT_RECIPE,
+  PRACTICE_RECIPE,
+  type Recipe,
+  type RecipeSettings,
+} from "#shared/science/recipes.ts";
 
 export const RECIPES: readonly Recipe[] = [DEFAULT_RECIPE, PRACTICE_RECIPE];
 
 const yesNo = (is: boolean): string => (is ? "yes" : "no");
 
 /** Each setting of a recipe in the reader's words. */
-const SETTINGS: readonly { label: string; of: (recipe: Recipe) => string }[] = [
+const SETTINGS: readonly { label: string; of: (settings: RecipeSettings) => string }[] = [
   {
     label: "Distance needs a parallax error of at most",
-    of: ({ parallaxFractionLimit }) => `${parallaxFractionLimit * 100} %`,
+    of: ({ distance }) => `${distance.fractionLimit * 100} %`,
   },
-  { label: "Parallax offset taken off", of: ({ parallaxZeroPointMas }) => `${parallaxZeroPointMas} mas` },
-  { label: "RUWE above which a star may be two", of: ({ ruweLimit }) => String(ruweLimit) },
+  { label: "Parallax offset taken off", of: ({ distance }) => `${distance.zeroPointMas} mas` },
+  {
+    label: "RUWE above which a star may be two",
+    of: ({ astrometricQuality }) => String(astrometricQuality.limit),
+  },
   { label: "[Fe/H] enters radius and mass", of: ({ usesFeh }) => yesNo(usesFeh) },
-  { label: "Colour gives a missing temperature", of: ({ usesColourTeff }) => yesNo(usesColourTeff) },
+  { label: "Colour gives a missing temperature", of: ({ teff }) => yesNo(teff.includes("cool-colour")) },
   {
     label: "Luminosity comes from",
     of: ({ luminosity }) =>
-      luminosity === "bolometric-correction"
-        ? "magnitude and bolometric correction"
-        : "radius and temperature",
+      luminosity.includes("correction-ks") ? "magnitude and bolometric correction" : "radius and temperature",
   },
-  { label: "Radius outside the cool-dwarf relations", of: ({ usesSunlike }) => yesNo(usesSunlike) },
+  {
+    label: "Radius outside the cool-dwarf relations",
+    of: ({ radius }) => yesNo(radius.includes("light-and-temperature")),
+  },
   {
     label: "Duration of a transit",
     of: ({ duration }) => (duration === "central" ? "central transit" : "mean over all impact parameters"),
@@ -36,6 +45,6 @@ export interface RecipeDifference {
 
 /** The settings in which the recipes differ. */
 export const recipeDifferences = (recipes: readonly Recipe[] = RECIPES): RecipeDifference[] =>
-  SETTINGS.map(({ label, of }) => ({ label, values: recipes.map(of) })).filter(
+  SETTINGS.map(({ label, of }) => ({ label, values: recipes.map(({ settings }) => of(settings)) })).filter(
     ({ values }) => new Set(values).size > 1,
   );

@@ -67,7 +67,7 @@ describe("noise", () => {
 
 describe("smallest planet", () => {
   test("carries the relative error of the stellar radius", () => {
-    const star = derived(A, PRACTICE_RECIPE);
+    const star = derived(A, PRACTICE_RECIPE.settings);
     const seen = assessed(A);
     expect(seen.rMinError / seen.rMin).toBeCloseTo(star.error("radius") / star.value("radius"), 9);
   });
@@ -90,7 +90,7 @@ describe("smallest planet", () => {
 
   test("a trapezoid asks for a little more than a box, by either rule of the duration", () => {
     const trapezoid = { ...PRACTICE_CAMPAIGN, statistic: "trapezoid" } as const;
-    for (const recipe of [PRACTICE_RECIPE, DEFAULT_RECIPE]) {
+    for (const recipe of [PRACTICE_RECIPE.settings, DEFAULT_RECIPE.settings]) {
       const box = assessed(A, PRACTICE_CAMPAIGN, PRACTICE_CARD, recipe).rMin;
       const ratio = assessed(A, trapezoid, PRACTICE_CARD, recipe).rMin / box;
       expect(ratio).toBeGreaterThan(1);
@@ -120,7 +120,7 @@ test("each blank has a reason and each value has none, whatever the star", () =>
   });
   fc.assert(
     fc.property(star, campaign, fc.constantFrom(PRACTICE_CARD, DETECTOR), (s, c, card) => {
-      const out = assessStar(s, card, c, DEFAULT_RECIPE, newAssessment());
+      const out = assessStar(s, card, c, DEFAULT_RECIPE.settings, newAssessment());
       expect(Number.isNaN(out.noise1h)).toBe(out.noiseBlank !== 0);
       expect(Number.isNaN(out.transits)).toBe(out.transitsBlank !== 0);
       expect(Number.isNaN(out.rMin)).toBe(out.rMinBlank !== 0);
@@ -133,7 +133,7 @@ test("each blank has a reason and each value has none, whatever the star", () =>
 
 test("a block gives what its stars give one by one", () => {
   const stars = Object.values(PRACTICE_STARS);
-  const values = stars.map((star) => derived(star, PRACTICE_RECIPE));
+  const values = stars.map((star) => derived(star, PRACTICE_RECIPE.settings));
   const columns = Object.fromEntries(
     assessedKeys(PRACTICE_CARD).map((key) => [
       key,
@@ -144,7 +144,13 @@ test("a block gives what its stars give one by one", () => {
       ),
     ]),
   );
-  const out = assessColumns(columns, stars.length, PRACTICE_CARD, PRACTICE_CAMPAIGN, PRACTICE_RECIPE);
+  const out = assessColumns(
+    columns,
+    stars.length,
+    PRACTICE_CARD,
+    PRACTICE_CAMPAIGN,
+    PRACTICE_RECIPE.settings,
+  );
   expect([...out.transits]).toEqual([6, 20, 2]);
   expect([...out.r_min]).toEqual(stars.map((star) => assessed(star).rMin));
   expect([...out.r_min_err]).toEqual(stars.map((star) => assessed(star).rMinError));

@@ -69,7 +69,7 @@ describe("no value is missing without a reason", () => {
     RANGES[key] ?? (key.endsWith("_err") ? [-0.1, 5] : [-2, 25]);
   const star = fc.record(Object.fromEntries(GIVEN_KEYS.map((key) => [key, maybe(...rangeOf(key))])));
 
-  test.each([DEFAULT_RECIPE, PRACTICE_RECIPE])("recipe $name", (recipe) => {
+  test.each([DEFAULT_RECIPE, PRACTICE_RECIPE])("recipe $name", ({ settings: recipe }) => {
     fc.assert(
       fc.property(star, (given) => {
         const { value, error, reason } = derived(given, recipe);
@@ -91,8 +91,8 @@ test("a block gives the same bits as its stars one by one, and the same again", 
   const block = Object.fromEntries(
     GIVEN_KEYS.map((key) => [key, Float64Array.from(stars, (star) => star[key] ?? Number.NaN)]),
   );
-  const columns = deriveColumns(block, stars.length, DEFAULT_RECIPE);
-  expect(deriveColumns(block, stars.length, DEFAULT_RECIPE)).toEqual(columns);
+  const columns = deriveColumns(block, stars.length, DEFAULT_RECIPE.settings);
+  expect(deriveColumns(block, stars.length, DEFAULT_RECIPE.settings)).toEqual(columns);
   stars.forEach((star, i) => {
     const single = derived(star).columns;
     for (const [key, values] of Object.entries(columns.values))
@@ -176,7 +176,7 @@ describe("default recipe", () => {
       "abs-ks",
       derived(COOL).value("radius"),
     ]);
-    expect(derived({ ...COOL, feh: 0.3 }, PRACTICE_RECIPE).method("radius")).toBe("abs-ks");
+    expect(derived({ ...COOL, feh: 0.3 }, PRACTICE_RECIPE.settings).method("radius")).toBe("abs-ks");
   });
 
   test("a given temperature comes before colour; one that is no temperature does not", () => {

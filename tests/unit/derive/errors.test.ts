@@ -2,7 +2,7 @@ import { describe, expect, test } from "vitest";
 import { deriveColumns } from "#server/derive/derive.ts";
 import type { StellarKey } from "#server/derive/star-columns.ts";
 import { MASS_SCATTER, RADIUS_SCATTER } from "#shared/science/cool-dwarfs.ts";
-import { DEFAULT_RECIPE, PRACTICE_RECIPE, type Recipe } from "#shared/science/recipes.ts";
+import { DEFAULT_RECIPE, PRACTICE_RECIPE, type RecipeSettings } from "#shared/science/recipes.ts";
 import { type Given, PRACTICE_STARS } from "./practice-stars.ts";
 import { derived } from "./support.ts";
 
@@ -29,7 +29,11 @@ const deviation = (values: Float64Array): number => {
  * Spread of the derived values when every given value with an error is drawn from its own normal distribution. The
  * scatter of the relations is no input and so is not in it.
  */
-const spread = (given: Given, recipe: Recipe, keys: readonly StellarKey[]): Record<string, number> => {
+const spread = (
+  given: Given,
+  recipe: RecipeSettings,
+  keys: readonly StellarKey[],
+): Record<string, number> => {
   const normal = normalDeviates(20_260_101);
   const drawn = Object.fromEntries(
     Object.entries(given).map(([key, value]) => {
@@ -48,8 +52,8 @@ const fromInputs = (relative: number, ...scatters: number[]): number =>
 describe("first-order errors against Monte Carlo", () => {
   /** Errors large enough to outweigh the scatter of the relations, small enough to stay linear. */
   const star: Given = { ...PRACTICE_STARS.A, ks_mag_err: 0.06, parallax_err: 0.6, teff_given_err: 60 };
-  const one = derived(star, PRACTICE_RECIPE);
-  const seen = spread(star, PRACTICE_RECIPE, [
+  const one = derived(star, PRACTICE_RECIPE.settings);
+  const seen = spread(star, PRACTICE_RECIPE.settings, [
     "distance",
     "abs_ks",
     "radius",
@@ -110,7 +114,7 @@ describe("what quantities share is not counted twice", () => {
     const one = derived(star);
     expect(one.method("radius")).toBe("abs-ks");
     expect(one.method("luminosity")).toBe("correction-g");
-    const seen = spread(star, DEFAULT_RECIPE, ["radius", "luminosity", "transit_probability"]);
+    const seen = spread(star, DEFAULT_RECIPE.settings, ["radius", "luminosity", "transit_probability"]);
     const lightScatter = 0.4 * Math.LN10 * 0.05;
     const found = fromInputs(
       one.error("transit_probability") / one.value("transit_probability"),
@@ -127,7 +131,7 @@ describe("what quantities share is not counted twice", () => {
   });
 
   test("density through M Ks is surer than mass and radius on their own would make it", () => {
-    const one = derived({ ...PRACTICE_STARS.A, ks_mag_err: 0.1 }, PRACTICE_RECIPE);
+    const one = derived({ ...PRACTICE_STARS.A, ks_mag_err: 0.1 }, PRACTICE_RECIPE.settings);
     const relative = (key: string) => one.error(key) / one.value(key);
     expect(relative("density")).toBeLessThan(Math.hypot(relative("mass"), 3 * relative("radius")));
   });
@@ -135,7 +139,7 @@ describe("what quantities share is not counted twice", () => {
 
 describe("values without errors", () => {
   test("stand, with no error of their own", () => {
-    const star = derived(PRACTICE_STARS.A, PRACTICE_RECIPE);
+    const star = derived(PRACTICE_STARS.A, PRACTICE_RECIPE.settings);
     expect(star.value("luminosity")).toBeCloseTo(0.01269, 5);
     expect(star.error("luminosity")).toBeNaN();
     expect(star.reason("luminosity")).toBeUndefined();
@@ -143,7 +147,7 @@ describe("values without errors", () => {
   });
 
   test("an error below zero is none", () => {
-    const star = derived({ ...PRACTICE_STARS.A, ks_mag_err: -0.02 }, PRACTICE_RECIPE);
+    const star = derived({ ...PRACTICE_STARS.A, ks_mag_err: -0.02 }, PRACTICE_RECIPE.settings);
     expect(star.error("abs_ks")).toBeNaN();
     expect(star.value("radius")).toBeCloseTo(0.3344, 4);
   });

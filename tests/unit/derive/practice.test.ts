@@ -67,7 +67,7 @@ const PRINTED = {
 const decimalsOf = (printed: string): number => printed.split(".")[1]?.length ?? 0;
 
 const figuresOf = (name: keyof typeof PRINTED): Record<string, string> => {
-  const star = derived(PRACTICE_STARS[name], PRACTICE_RECIPE);
+  const star = derived(PRACTICE_STARS[name], PRACTICE_RECIPE.settings);
   const seen = assessed(PRACTICE_STARS[name]);
   const found: Record<string, number> = {
     transits: seen.transits,
@@ -89,7 +89,7 @@ describe("practice stars", () => {
   });
 
   test("star A has a radius of 0.334 ± 0.010 solar radii", () => {
-    const star = derived(PRACTICE_STARS.A, PRACTICE_RECIPE);
+    const star = derived(PRACTICE_STARS.A, PRACTICE_RECIPE.settings);
     expect(star.value("radius").toFixed(3)).toBe("0.334");
     expect(star.error("radius").toFixed(3)).toBe("0.010");
   });
@@ -99,7 +99,7 @@ describe("practice stars", () => {
     expect(blended.light_share.toFixed(4)).toBe("0.7992");
     expect(assessed(blended).rMin.toFixed(3)).toBe("0.555");
     expect(assessed(blended).transits).toBe(6);
-    const star = derived(blended, PRACTICE_RECIPE);
+    const star = derived(blended, PRACTICE_RECIPE.settings);
     expect(flagsIn(star.flagBits).map((flag) => flag.word)).toEqual(["shared light"]);
     expect(star.flags).toBe(1);
   });
@@ -115,7 +115,7 @@ describe("practice stars", () => {
   test("a giant has no value from the dwarf relations, and says why", () => {
     const giant = derived(
       { ks_mag: 7.7, ks_mag_err: 0.02, parallax: 1.585, parallax_err: 0.02, teff_given: 4200 },
-      PRACTICE_RECIPE,
+      PRACTICE_RECIPE.settings,
     );
     expect(giant.value("abs_ks").toFixed(1)).toBe("-1.3");
     for (const key of ["radius", "mass", "luminosity", "hz_inner", "earth_period", "transit_probability"])

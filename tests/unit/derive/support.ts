@@ -4,11 +4,11 @@ import type { StellarColumns } from "#server/derive/star-columns.ts";
 import { blankReason } from "#shared/catalogue/blank-reasons.ts";
 import { METHODS } from "#shared/catalogue/methods.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
-import { DEFAULT_RECIPE, PRACTICE_RECIPE, type Recipe } from "#shared/science/recipes.ts";
+import { DEFAULT_RECIPE, PRACTICE_RECIPE, type RecipeSettings } from "#shared/science/recipes.ts";
 import { type Given, PRACTICE_CAMPAIGN, PRACTICE_CARD } from "./practice-stars.ts";
 
 /** One derived star, readable by key. */
-export const derived = (given: Given, recipe: Recipe = DEFAULT_RECIPE) => {
+export const derived = (given: Given, recipe: RecipeSettings = DEFAULT_RECIPE.settings) => {
   const columns: StellarColumns = deriveStar(given, recipe);
   return {
     value: (key: string): number => columns.values[key]?.[0] ?? Number.NaN,
@@ -31,7 +31,7 @@ export const assessed = (
   given: Given,
   campaign: CampaignSettings = PRACTICE_CAMPAIGN,
   card: CardSettings = PRACTICE_CARD,
-  recipe: Recipe = PRACTICE_RECIPE,
+  recipe: RecipeSettings = PRACTICE_RECIPE.settings,
 ) => {
   const { values } = derived(given, recipe).columns;
   const own = Object.fromEntries(Object.entries(given).map(([key, value]) => [key, Float64Array.of(value)]));

@@ -98,7 +98,7 @@ describe("reach by period", () => {
   };
   const star = { magnitude: 10.2, radius: 0.3344, earthDistance: 0.1126, earthPeriod: 24.55, lightShare: 1 };
   const reach = (periods: number[], campaign = CAMPAIGN) =>
-    reachByPeriod(star, card, campaign, PRACTICE_RECIPE, periods).map((point) => point.rMin);
+    reachByPeriod(star, card, campaign, PRACTICE_RECIPE.settings, periods).map((point) => point.rMin);
 
   test("passes through the star's own value", () => {
     expect(reach([24.55])[0]?.toFixed(3)).toBe("0.496");
@@ -114,7 +114,7 @@ describe("reach by period", () => {
   test("an orbit inside the star and a star outside the card's limits are blank", () => {
     expect(reach([0.001])).toEqual([null]);
     expect(
-      reachByPeriod({ ...star, magnitude: 3 }, card, CAMPAIGN, PRACTICE_RECIPE, [10]).map((p) => p.rMin),
+      reachByPeriod({ ...star, magnitude: 3 }, card, CAMPAIGN, PRACTICE_RECIPE.settings, [10]).map((p) => p.rMin),
     ).toEqual([null]);
   });
 });
