@@ -17,6 +17,15 @@ export default defineConfig({
       {
         extends: true,
         test: {
+          name: "reference",
+          include: ["tests/reference/**/*.test.ts"],
+          globalSetup: ["tests/reference/setup.ts"],
+          sequence: { groupOrder: 0 },
+        },
+      },
+      {
+        extends: true,
+        test: {
           name: "client",
           include: ["tests/client/**/*.test.tsx"],
           environment: "happy-dom",

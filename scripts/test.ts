@@ -1,6 +1,6 @@
 import { buildClient } from "./lib/build.ts";
 import { runChecks } from "./lib/checks.ts";
-import { requireChromium } from "./lib/debian.ts";
+import { requireAstropy, requireChromium } from "./lib/debian.ts";
 import { addTally, type Tally, tallyLine } from "./lib/tally.ts";
 import { startThrowawayDatabase, type ThrowawayDatabase } from "./lib/throwaway-database.ts";
 import { describeTrouble } from "./lib/trouble.ts";
@@ -37,6 +37,11 @@ const build = async (): Promise<Tally> => {
   return NONE;
 };
 
+const references = async (): Promise<Tally> => {
+  requireAstropy();
+  return NONE;
+};
+
 const test = async (): Promise<Tally> => {
   database = await startThrowawayDatabase();
   return await runVitest(args, environment(database.url("{database}")));
@@ -44,7 +49,7 @@ const test = async (): Promise<Tally> => {
 
 const run = async (): Promise<void> => {
   let tally = NONE;
-  for (const step of [...(args.length === 0 ? [runChecks] : []), build, test])
+  for (const step of [...(args.length === 0 ? [runChecks] : []), build, references, test])
     tally = addTally(tally, await counted(step));
   await database?.stop();
   process.exitCode = tally.failed > 0 || tally.passed === 0 ? 1 : 0;

@@ -28,10 +28,11 @@ const findProgram = (...names: string[]): string | null => {
 };
 
 interface Need {
-  /** What the product needs it for, continuing "needs … to". */
   what: string;
-  programs: string[];
+  /** Where it is; null when it is missing. */
+  find(): string | null;
   packages: string[];
+  /** What else a person can do, continuing the sentence that names the command. */
   otherwise: string;
 }
 
@@ -45,9 +46,9 @@ const apt = (args: string[]): number => {
   return done.status ?? 1;
 };
 
-/** The program, installed from Debian's packages when it is missing and this is root; else a clear refusal. */
-const requireProgram = (need: Need): string => {
-  const found = findProgram(...need.programs);
+/** Where it is, installed from Debian's packages when it is missing and this is root; else a clear refusal. */
+const requireInstalled = (need: Need): string => {
+  const found = need.find();
   if (found) return found;
   const command = `apt-get install --no-install-recommends ${need.packages.join(" ")}`;
   const sentence = `${need.what} is not installed; install it as root with \`${command}\`${need.otherwise}.`;
@@ -55,7 +56,7 @@ const requireProgram = (need: Need): string => {
   process.stderr.write(`Installing ${need.what} from Debian's packages ...\n`);
   apt(["update"]);
   const code = apt(["install", "-y", "--no-install-recommends", ...need.packages]);
-  const installed = findProgram(...need.programs);
+  const installed = need.find();
   if (code !== 0 || !installed)
     throw new Trouble(`${need.what} could not be installed: apt-get ended with code ${code}. ${sentence}`);
   return installed;
@@ -74,8 +75,8 @@ export const requireMariaDb = (): MariaDbPrograms => {
     otherwise: ", or set DATABASE_URL to a MariaDB that is run elsewhere",
   };
   return {
-    server: requireProgram({ ...need, programs: ["mariadbd", "mysqld"] }),
-    install: requireProgram({ ...need, programs: ["mariadb-install-db", "mysql_install_db"] }),
+    server: requireInstalled({ ...need, find: () => findProgram("mariadbd", "mysqld") }),
+    install: requireInstalled({ ...need, find: () => findProgram("mariadb-install-db", "mysql_install_db") }),
   };
 };
 
@@ -83,9 +84,28 @@ export const findChromium = (): string | null => findProgram("chromium", "chromi
 
 /** The browser that the browser tests drive. */
 export const requireChromium = (): string =>
-  requireProgram({
+  requireInstalled({
     what: "Chromium",
-    programs: ["chromium", "chromium-browser", "google-chrome"],
+    find: findChromium,
     packages: ["chromium", "fonts-liberation"],
+    otherwise: "",
+  });
+
+/** Debian's own Python, as another one earlier on the search path does not see Debian's packages. */
+const PYTHON = "/usr/bin/python3";
+const ASTROPY_MODULES = ["astropy", "astropy_healpix"];
+
+/** The Python that has astropy and astropy_healpix; null when one of the three is missing. */
+export const findAstropy = (): string | null => {
+  const look = `import sys; from importlib.util import find_spec; sys.exit(None in map(find_spec, sys.argv[1:]))`;
+  return spawnSync(PYTHON, ["-E", "-s", "-c", look, ...ASTROPY_MODULES]).status === 0 ? PYTHON : null;
+};
+
+/** The library that the reference tests compare with. */
+export const requireAstropy = (): string =>
+  requireInstalled({
+    what: "astropy",
+    find: findAstropy,
+    packages: ["python3-astropy", "python3-astropy-healpix"],
     otherwise: "",
   });
