@@ -54,6 +54,15 @@ const detectorSettings = z.strictObject({
   overheadS: z.number().min(0).max(86_400),
   floorPpm: ppm,
   ...limits,
+  magnitudeSystem: z.enum(["vega", "ab"]).optional(),
+  gain: positive(10_000, "The gain").optional(),
+  digitisation: z.number().min(0).max(1000).optional(),
+  mostCounts: positive(1e10, "The largest number of counts").optional(),
+  scintillationLaw: z.enum(["young", "osborn"]).optional(),
+  scintillationCoefficient: positive(100, "The coefficient of scintillation").optional(),
+  comparisonStars: positive(10_000, "The number of comparison stars").optional(),
+  jitterPpm: ppm.optional(),
+  redNoisePpm: ppm.optional(),
 });
 
 export const cardSettings = z

@@ -1,5 +1,6 @@
 /** Settings of an instrument card and of a campaign, as the science uses them. */
-import type { PhotonBandKey } from "./passbands.ts";
+import type { MagnitudeSystem, PhotonBandKey } from "./passbands.ts";
+import type { ScintillationLaw } from "./scintillation.ts";
 
 /**
  * Noise by a published or measured curve: three terms in ppm per hour at the reference magnitude, added in
@@ -61,6 +62,24 @@ export interface DetectorCard {
   readonly floorPpm: number;
   readonly brightLimit: number;
   readonly faintLimit: number;
+  /** System of the star's and the sky's magnitudes; Vega where absent. */
+  readonly magnitudeSystem?: MagnitudeSystem;
+  /** Electrons per count; 1 where absent. */
+  readonly gain?: number;
+  /** Digitisation error, counts rms; 0.289 is that of rounding, none where absent. */
+  readonly digitisation?: number;
+  /** Largest number that the converter writes; with the gain, a limit beside the full well. */
+  readonly mostCounts?: number;
+  /** Law of scintillation; Young's where absent. */
+  readonly scintillationLaw?: ScintillationLaw;
+  /** Site coefficient C_Y of Osborn's law; its customary 1.5 where absent. */
+  readonly scintillationCoefficient?: number;
+  /** Equal comparison stars of a differential light curve; where absent, the comparison adds no noise. */
+  readonly comparisonStars?: number;
+  /** Noise of pointing and guiding in one exposure, ppm; it averages down as photon noise does. */
+  readonly jitterPpm?: number;
+  /** Noise that the points of one transit share, ppm: it averages down over transits, but not within one. */
+  readonly redNoisePpm?: number;
 }
 
 export type CardSettings = FormulaCard | DetectorCard;

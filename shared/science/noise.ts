@@ -1,64 +1,25 @@
 import type { CardSettings, DetectorCard, FormulaCard } from "./cards.ts";
+import { photonNoisePpm, pixelWeight } from "./ccd.ts";
 import { electronRate, PHOTON_BANDS } from "./passbands.ts";
+import { noiseOverHours } from "./red-noise.ts";
+import { centralPixelShare, fillingMagnitude, pixelCapacity } from "./saturation.ts";
+import { comparisonFactor, osbornScintillation, youngScintillation } from "./scintillation.ts";
 
 /** Parts of the noise of one hour, ppm; `total` is their sum in quadrature. */
 export interface NoiseParts {
   readonly photon: number;
   readonly background: number;
   readonly read: number;
+  readonly digitisation: number;
   readonly dark: number;
   readonly scintillation: number;
+  readonly jitter: number;
+  readonly red: number;
   readonly floor: number;
   readonly total: number;
 }
 
 const HOUR_S = 3600;
-
-/**
- * Scintillation of one exposure as a fraction: `0.09 D^(−2/3) X^1.75 exp(−h/8000 m) (2 t)^(−1/2)`, D in cm, t in s.
- *
- * @see Young 1967, AJ 72, 747; Dravins et al. 1998, PASP 110, 610. It overestimates below apertures of about 0.1 m.
- * @example 1e6 * scintillation(0.5, 1, 0, 60) // 605.35 ppm
- */
-export const scintillation = (
-  apertureM: number,
-  airmass: number,
-  altitudeM: number,
-  exposureS: number,
-): number =>
-  (0.09 * (100 * apertureM) ** (-2 / 3) * airmass ** 1.75 * Math.exp(-altitudeM / 8000)) /
-  Math.sqrt(2 * exposureS);
-
-/**
- * Signal-to-noise ratio of one exposure: `N★ / √(N★ + n (1 + n/n_B)(N_S + N_D + N_R²))`.
- *
- * @param star electrons from the star; @param pixels n, pixels of the aperture; @param skyPixels n_B, pixels of the sky
- * @param sky N_S and @param dark N_D, electrons per pixel; @param readNoise N_R, electrons rms
- * @see Howell 2006, Handbook of CCD Astronomy, 2nd ed., 4.4; Merline & Howell 1995, Exp. Astron. 6, 163
- */
-export const ccdSignalToNoise = (
-  star: number,
-  pixels: number,
-  skyPixels: number,
-  sky: number,
-  dark: number,
-  readNoise: number,
-): number =>
-  star / Math.sqrt(star + pixels * (1 + pixels / skyPixels) * (sky + dark + readNoise * readNoise));
-
-/** Share of a centred Gaussian image that falls on its central pixel: `erf(0.5 / (√2 s))²`, s = FWHM / 2.354820. */
-export const centralPixelShare = (fwhmPx: number): number =>
-  erf((0.5 * 2.35482) / (Math.SQRT2 * fwhmPx)) ** 2;
-
-/** Error function; Abramowitz & Stegun 1964, 7.1.26, absolute error below 1.5e-7. */
-export const erf = (x: number): number => {
-  const t = 1 / (1 + 0.3275911 * Math.abs(x));
-  const tail =
-    t *
-    (0.254829592 + t * (-0.284496736 + t * (1.421413741 + t * (-1.453152027 + t * 1.061405429)))) *
-    Math.exp(-x * x);
-  return x < 0 ? tail - 1 : 1 - tail;
-};
 
 const formulaNoise = (card: FormulaCard, magnitude: number): number => {
   const step = magnitude - card.referenceMagnitude;
@@ -71,36 +32,65 @@ const formulaNoise = (card: FormulaCard, magnitude: number): number => {
 const exposureElectrons = (card: DetectorCard, magnitude: number) => {
   const band = PHOTON_BANDS[card.photonBand];
   const { apertureM, obstruction, throughput, exposureS } = card;
-  const star =
-    electronRate(magnitude, band, apertureM, obstruction, throughput, card.extinction * card.airmass) *
-    exposureS;
+  const rate = (mag: number, extinction: number): number =>
+    electronRate(mag, band, apertureM, obstruction, throughput, extinction, card.magnitudeSystem);
+  const star = rate(magnitude, card.extinction * card.airmass) * exposureS;
   // The sky is seen through the same air, but its brightness is measured from the ground: no extinction is taken off.
-  const skyRate = electronRate(card.skyBrightness, band, apertureM, obstruction, throughput, 0);
+  const skyRate = rate(card.skyBrightness, 0);
   return { star, sky: skyRate * card.pixelScale ** 2 * exposureS, dark: card.darkRate * exposureS };
 };
 
 /** Exposures in an hour. */
 const exposuresInHour = (card: DetectorCard): number => HOUR_S / (card.exposureS + card.overheadS);
 
+/** Scintillation of one exposure as a fraction; none in space. */
+const scintillationOf = (card: DetectorCard): number => {
+  const { apertureM, airmass, siteAltitudeM, exposureS } = card;
+  if (siteAltitudeM === null) return 0;
+  return card.scintillationLaw === "osborn"
+    ? osbornScintillation(apertureM, airmass, siteAltitudeM, exposureS, card.scintillationCoefficient)
+    : youngScintillation(apertureM, airmass, siteAltitudeM, exposureS);
+};
+
 const detectorParts = (card: DetectorCard, magnitude: number): NoiseParts => {
   const { star, sky, dark } = exposureElectrons(card, magnitude);
-  const pixels = Math.PI * card.apertureRadiusPx ** 2;
-  const weight = pixels * (1 + pixels / card.skyPixels);
-  const perHour = 1e6 / (star * Math.sqrt(exposuresInHour(card)));
-  const photon = Math.sqrt(star) * perHour;
+  const weight = pixelWeight(Math.PI * card.apertureRadiusPx ** 2, card.skyPixels);
+  const averaged = 1 / Math.sqrt(exposuresInHour(card));
+  // One electron of noise in an exposure, as ppm of the star in an hour.
+  const perHour = (1e6 / star) * averaged;
+  const compared = card.comparisonStars === undefined ? 1 : comparisonFactor(card.comparisonStars);
+  const photon = photonNoisePpm(star) * averaged * compared;
   const background = Math.sqrt(weight * sky) * perHour;
   const darkPpm = Math.sqrt(weight * dark) * perHour;
   const read = Math.sqrt(weight) * card.readNoise * perHour;
-  const twinkle =
-    card.siteAltitudeM === null
-      ? 0
-      : (1e6 * scintillation(card.apertureM, card.airmass, card.siteAltitudeM, card.exposureS)) /
-        Math.sqrt(exposuresInHour(card));
+  const digitisation = Math.sqrt(weight) * (card.gain ?? 1) * (card.digitisation ?? 0) * perHour;
+  const twinkle = 1e6 * scintillationOf(card) * averaged * compared;
+  const jitter = (card.jitterPpm ?? 0) * averaged;
+  const red = card.redNoisePpm ?? 0;
   const floor = card.floorPpm;
   const total = Math.sqrt(
-    photon ** 2 + background ** 2 + read ** 2 + darkPpm ** 2 + twinkle ** 2 + floor ** 2,
+    photon ** 2 +
+      background ** 2 +
+      read ** 2 +
+      digitisation ** 2 +
+      darkPpm ** 2 +
+      twinkle ** 2 +
+      jitter ** 2 +
+      red ** 2 +
+      floor ** 2,
   );
-  return { photon, background, read, dark: darkPpm, scintillation: twinkle, floor, total };
+  return {
+    photon,
+    background,
+    read,
+    digitisation,
+    dark: darkPpm,
+    scintillation: twinkle,
+    jitter,
+    red,
+    floor,
+    total,
+  };
 };
 
 const formulaParts = (card: FormulaCard, magnitude: number): NoiseParts => {
@@ -109,8 +99,11 @@ const formulaParts = (card: FormulaCard, magnitude: number): NoiseParts => {
     photon: card.photonPpm * 10 ** (0.2 * step),
     background: card.backgroundPpm * 10 ** (0.4 * step),
     read: 0,
+    digitisation: 0,
     dark: 0,
     scintillation: 0,
+    jitter: 0,
+    red: 0,
     floor: card.floorPpm,
     total: formulaNoise(card, magnitude),
   };
@@ -132,6 +125,16 @@ export const noiseInOneHour = (card: CardSettings, magnitude: number): number =>
 };
 
 /**
+ * Noise over a transit of that many hours, ppm: white noise averages down with their root, red noise does not.
+ *
+ * @returns NaN where {@link noiseInOneHour} is
+ */
+export const noiseInTransit = (card: CardSettings, magnitude: number, hours: number): number => {
+  const red = card.model === "detector" ? (card.redNoisePpm ?? 0) : 0;
+  return noiseOverHours(noiseInOneHour(card, magnitude), red, hours);
+};
+
+/**
  * Brightest magnitude a card measures: its bright limit or, for a detector, the magnitude that fills the central pixel,
  * whichever is fainter. NaN where sky and dark current alone fill the pixel: then nothing is measured.
  */
@@ -141,10 +144,10 @@ export const brightestUsable = (card: CardSettings): number =>
 /**
  * Magnitude at which the central pixel fills within one exposure; brighter stars saturate.
  *
- * `rate(m) t f_c + sky = full well`, f_c from {@link centralPixelShare}.
+ * `rate(m) t f_c + sky = min(full well, most counts × gain)`, f_c from {@link centralPixelShare}.
  */
 export const saturationMagnitude = (card: DetectorCard): number => {
   const zero = exposureElectrons(card, 0);
-  const room = card.fullWell - zero.sky - zero.dark;
-  return room > 0 ? 2.5 * Math.log10((zero.star * centralPixelShare(card.fwhmPx)) / room) : Number.NaN;
+  const capacity = pixelCapacity(card.fullWell, card.mostCounts, card.gain);
+  return fillingMagnitude(zero.star, centralPixelShare(card.fwhmPx), zero.sky + zero.dark, capacity);
 };
