@@ -21,6 +21,15 @@ export const distanceFromParallax = (
 };
 
 /**
+ * Bias of an inverted parallax, relative, to second order in f = σ/ϖ: the mean of `1/ϖ` is too large by `f² + 3 f⁴`.
+ *
+ * @param fraction error over parallax, well below 1
+ * @see Lutz & Kelker 1973, PASP 85, 573; Luri et al. 2018, A&A 616, A9
+ * @example inversionBias(0.1) // 0.0103
+ */
+export const inversionBias = (fraction: number): number => fraction ** 2 + 3 * fraction ** 4;
+
+/**
  * Absolute magnitude `m + 5 − 5 log10(d)`.
  *
  * @param magnitude apparent magnitude, mag
@@ -31,8 +40,12 @@ export const absoluteMagnitude = (magnitude: number, distancePc: number, extinct
   magnitude + 5 - 5 * Math.log10(distancePc) - extinctionMag;
 
 /**
- * Error of an absolute magnitude, mag: the photometric error and the relative error of the distance in quadrature,
- * `σ² = σ_m² + (5 s_d / ln 10)²`.
+ * Error of an absolute magnitude, mag: the photometric error, the relative error of the distance and the error of the
+ * extinction in quadrature, `σ² = σ_m² + (5 s_d / ln 10)² + σ_A²`.
  */
-export const absoluteMagnitudeError = (magnitudeError: number, relativeDistanceError: number): number =>
-  Math.sqrt(magnitudeError ** 2 + ((5 * relativeDistanceError) / Math.LN10) ** 2);
+export const absoluteMagnitudeError = (
+  magnitudeError: number,
+  relativeDistanceError: number,
+  extinctionError = 0,
+): number =>
+  Math.sqrt(magnitudeError ** 2 + ((5 * relativeDistanceError) / Math.LN10) ** 2 + extinctionError ** 2);
