@@ -26,6 +26,6 @@ export const readAsciiNumber = (text: string, decimals: number): number => {
   return Number(`${sign}${whole || "0"}.${fraction}e${exponent}`);
 };
 
-/** All digits of a whole number; null for what is none. */
+/** All digits of a whole number; null for what is none, or has more digits than any count of things. */
 export const readAsciiWhole = (text: string): bigint | null =>
-  /^[+-]?\d+$/.test(text) ? BigInt(text.replace("+", "")) : null;
+  /^[+-]?\d{1,40}$/.test(text) ? BigInt(text.replace("+", "")) : null;

@@ -38,6 +38,9 @@ const contentsOf = (kinds: readonly string[]): string => {
   return parts.join(" and ") || "headers";
 };
 
+/** Half a header after a table without rows: the one with the rows may be what is missing. */
+const isCutOff = (error: AppError): boolean => error.code === "file-cut-off";
+
 /** Reads up to the rows of the first table that has rows; else the first table without. */
 export const findTable = async (source: ByteSource, findings: Findings): Promise<Opened> => {
   const file = await readHeader(source, "SIMPLE");
@@ -48,7 +51,7 @@ export const findTable = async (source: ByteSource, findings: Findings): Promise
   let hdu = first;
   for (let headers = 1; headers < MOST_HEADERS; headers++) {
     await skipData(source, hdu);
-    const header = await nextHeader(source, empty !== null, findings);
+    const header = await nextHeader(source, (error) => empty !== null && !isCutOff(error), findings);
     if (!header) break;
     hdu = describeHdu(header, headers);
     if (isTable(hdu) && hdu.rows > 0) {
@@ -63,17 +66,17 @@ export const findTable = async (source: ByteSource, findings: Findings): Promise
   return { file, table: empty, headers: Number.POSITIVE_INFINITY };
 };
 
-/** Once there is a table, what follows and is no header is only worth a note. */
+/** Where there is a table already, what follows and is no header may be worth a note alone. */
 const nextHeader = async (
   source: ByteSource,
-  hasTable: boolean,
+  isHarmless: (error: AppError) => boolean,
   findings: Findings,
 ): Promise<FitsHeader | null> => {
   const at = source.position;
   try {
     return await readHeader(source, "XTENSION");
   } catch (error) {
-    if (!(error instanceof AppError) || !hasTable) throw error;
+    if (!(error instanceof AppError) || !isHarmless(error)) throw error;
     noteRest(at, findings);
     return null;
   }
@@ -126,7 +129,7 @@ export const surveyRest = async (source: ByteSource, opened: Opened, findings: F
   for (let headers = opened.headers; headers < MOST_HEADERS; headers++) {
     if (!(await passData(source, rest, findings))) return;
     const at = source.position;
-    const header = await nextHeader(source, true, findings);
+    const header = await nextHeader(source, () => true, findings);
     if (!header) return;
     const hdu = describeOrNote(header, headers, at, findings);
     if (!hdu) return;
