@@ -4,7 +4,9 @@ import { stellarColumns } from "../database/star-table.ts";
 import { deriveColumns } from "../derive/derive.ts";
 import { allocateGiven, GIVEN_KEYS, type StellarColumns } from "../derive/star-columns.ts";
 import { GIVEN } from "./adopt.ts";
+import { ruweLimits } from "./ruwe-limits.ts";
 
+const RELEASE = GIVEN.indexOf("release");
 const STELLAR: readonly string[] = Object.keys(stellarColumns());
 
 /** Columns of a star's row after its keys. */
@@ -26,6 +28,11 @@ export const deriveLines = (adopted: readonly Value[][], recipe: RecipeSettings)
     const column = given[key];
     if (column) for (let i = 0; i < adopted.length; i++) column[i] = Number(adopted[i]?.[at] ?? Number.NaN);
   }
+  const limits = ruweLimits(
+    adopted.map((row) => row[RELEASE]),
+    recipe.astrometricQuality,
+  );
+  if (limits) given.ruwe_limit = limits;
   const derived = deriveColumns(given, adopted.length, recipe);
   const columns = STELLAR.map((key) => arrayOf(derived, key));
   return adopted.map((row, i) => {

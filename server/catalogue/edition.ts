@@ -1,11 +1,12 @@
 import type { EntityManager } from "typeorm";
-import { findRecipe } from "#shared/science/recipes.ts";
+import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.ts";
 import { Programme } from "../database/entities/programme.entity.ts";
 import { inTransaction } from "../database/transaction.ts";
 import { conflict, notFound } from "../errors.ts";
 import { type Cleaner, type JobRun, LeaseLost, WorkerStopping } from "../jobs/job-run.ts";
 import { writeLine } from "../logbook/service.ts";
+import { type RecipeInUse, recipeInUse } from "../recipes/queries.ts";
 import { buildScanIndex } from "../scan/build.ts";
 import { removeInvisibleStars } from "./clean.ts";
 import { Fingerprint } from "./fingerprint.ts";
@@ -15,8 +16,8 @@ import { type Basis, type Changes, prepareBlock, readStarBlock, writeBlock } fro
 export interface EditionPlan {
   /** "extract 2, Northern motions" */
   reason: string;
-  /** Key of the recipe; by default the programme's. */
-  recipe?: string;
+  /** Version of the recipe; by default the one in force. */
+  recipeVersionId?: string;
   withExtract?: string;
   withoutExtract?: string;
   /** Ids of the stars that may come out differently, in blocks of a few thousand. */
@@ -66,9 +67,9 @@ const buildIndices = async (
   run: JobRun,
   programmeId: string,
   edition: number,
-  recipe: string,
+  recipeVersionId: string,
 ): Promise<void> => {
-  const base = { programmeId, edition, recipe, cardVersionId: null, campaignVersionId: null };
+  const base = { programmeId, edition, recipeVersionId, cardVersionId: null, campaignVersionId: null };
   const pair = await firstPair(run.deps.db.manager, programmeId);
   for (const key of pair ? [base, { ...base, ...pair }] : [base])
     await buildScanIndex(run.deps, key, (done, total) =>
@@ -81,15 +82,15 @@ const putInForce = async (
   run: JobRun,
   plan: EditionPlan,
   before: Programme,
-  values: { recipe: string; stars: number; fingerprint: string; changes: Changes },
+  values: { recipe: RecipeInUse; stars: number; fingerprint: string; changes: Changes },
 ): Promise<void> => {
   const { deps, job } = run;
   const edition = before.edition + 1;
   await inTransaction(deps.db, async (tx) => {
     await run.holdLease(tx);
     const result = await tx.query<{ affectedRows: number }>(
-      "UPDATE programme SET edition = ?, recipe = ? WHERE programme_id = ? AND edition = ?",
-      [edition, values.recipe, before.id, before.edition],
+      "UPDATE programme SET edition = ?, recipe_version_id = ? WHERE programme_id = ? AND edition = ?",
+      [edition, values.recipe.versionId, before.id, before.edition],
     );
     if (result.affectedRows !== 1)
       throw conflict("edition-moved", "Another edition of the catalogue came into force meanwhile.", {
@@ -99,7 +100,7 @@ const putInForce = async (
       programmeId: before.id,
       number: edition,
       reason: plan.reason.slice(0, 200),
-      recipe: values.recipe,
+      recipeVersionId: values.recipe.versionId,
       stars: values.stars,
       fingerprint: values.fingerprint,
       madeAt: deps.now(),
@@ -117,7 +118,7 @@ const putInForce = async (
       after: {
         reason: plan.reason,
         stars: values.stars,
-        recipe: values.recipe,
+        recipe: recipeLabel(values.recipe),
         fingerprint: values.fingerprint,
       },
       at: deps.now(),
@@ -129,11 +130,15 @@ const putInForce = async (
 export const makeEdition = async (run: JobRun, plan: EditionPlan): Promise<void> => {
   const { deps } = run;
   const programme = await programmeOf(run);
-  const recipeKey = plan.recipe ?? programme.recipe;
+  const recipe = await recipeInUse(
+    deps.db.manager,
+    programme.id,
+    plan.recipeVersionId ?? programme.recipeVersionId,
+  );
   const basis: Basis = {
     programmeId: programme.id,
     edition: programme.edition,
-    recipe: findRecipe(recipeKey),
+    recipe: recipe.settings,
     withExtract: plan.withExtract,
     withoutExtract: plan.withoutExtract,
   };
@@ -144,10 +149,10 @@ export const makeEdition = async (run: JobRun, plan: EditionPlan): Promise<void>
   });
   const fingerprint = new Fingerprint(last?.fingerprint);
   const changes = await prepareAll(run, basis, plan, fingerprint);
-  await buildIndices(run, programme.id, programme.edition + 1, recipeKey);
+  await buildIndices(run, programme.id, programme.edition + 1, recipe.versionId);
   await run.progress(1, 1, "Finishing", "steps");
   await putInForce(run, plan, programme, {
-    recipe: recipeKey,
+    recipe,
     stars: (last?.stars ?? 0) + changes.added - changes.ended,
     fingerprint: fingerprint.toString(),
     changes,

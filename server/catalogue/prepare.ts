@@ -1,4 +1,4 @@
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { bulkInsertLines, encodeRow, type Value } from "../database/bulk.ts";
 import { readArrays } from "../database/rows.ts";
 import type { JobRun } from "../jobs/job-run.ts";
@@ -11,7 +11,7 @@ export interface Basis {
   programmeId: string;
   /** Edition in force. */
   edition: number;
-  recipe: Recipe;
+  recipe: RecipeSettings;
   withExtract?: string;
   withoutExtract?: string;
 }
@@ -92,7 +92,7 @@ export const prepareBlock = (
   const living = ids.filter((id) => entries.has(id));
   const derived = deriveLines(
     living.map((id) => adopt(entries.get(id) ?? [])),
-    basis.recipe.settings,
+    basis.recipe,
   );
   const prepared: PreparedBlock = { lines: [], closed: [], added: 0, ended: 0 };
   living.forEach((id, i) => {

@@ -1,6 +1,7 @@
 import { Readable } from "node:stream";
 import type { EXPORT_FORMATS, TargetList } from "#shared/api/lists.ts";
 import { viewFromParams } from "#shared/catalogue/view.ts";
+import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { Programme } from "../database/entities/programme.entity.ts";
 import type { Deps } from "../deps.ts";
 import { notFound } from "../errors.ts";
@@ -33,7 +34,7 @@ const metaOf = (
   stars: list.stars,
   fingerprint: list.fingerprint,
   catalogue_edition: list.catalogueEdition,
-  recipe: list.recipe,
+  recipe: recipeLabel(list.recipe),
   instrument_card: versionText(list.card),
   campaign: versionText(list.campaign),
   figure_of_merit: versionText(list.merit),

@@ -107,7 +107,7 @@ export const makeList = async (
         cardVersionId: card?.versionId ?? null,
         campaignVersionId: campaign?.versionId ?? null,
         meritVersionId: merit?.versionId ?? null,
-        recipe: recipe.key,
+        recipeVersionId: recipe.versionId,
         fingerprint: fingerprintOf([]),
         madeBy: maker.id,
         madeAt: at,

@@ -1,6 +1,7 @@
 import type { ListMember as MemberJson, TargetList } from "#shared/api/lists.ts";
 import type { StarRow } from "#shared/api/stars.ts";
 import type { ListMember } from "../database/entities/list-member.entity.ts";
+import { joinedRef } from "../recipes/queries.ts";
 import type { ListRecord } from "./queries.ts";
 
 const named = (versionId: string | null, name: string | null, number: number | null) =>
@@ -32,7 +33,7 @@ export const presentList = (row: ListRecord): TargetList => {
     merit: merit && { ...merit, terms: termLabels(row.merit_terms) },
     card: named(row.instrument_card_id, row.card_name, row.card_number),
     campaign: named(row.campaign_version_id, row.campaign_name, row.campaign_number),
-    recipe: row.recipe,
+    recipe: joinedRef(row),
     stars: byState.in + byState.reserve + byState.held + byState.out,
     byState,
     fingerprint: shortFingerprint(row.fingerprint),

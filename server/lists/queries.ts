@@ -1,16 +1,16 @@
 import type { EntityManager } from "typeorm";
 import { ListMember } from "../database/entities/list-member.entity.ts";
 import { TargetList } from "../database/entities/target-list.entity.ts";
+import { JOINED_RECIPE, type JoinedRecipe } from "../recipes/queries.ts";
 
 /** A list with the names of what it was made from and the count of its members by state. */
-export interface ListRecord {
+export interface ListRecord extends JoinedRecipe {
   target_list_id: string;
   name: string;
   note: string;
   state: TargetList["state"];
   catalogue_edition: number;
   view_params: string;
-  recipe: string;
   fingerprint: string;
   made_at: Date;
   version: number;
@@ -37,14 +37,15 @@ const countOf = (state: string): string =>
   `(SELECT COUNT(*) FROM list_member m WHERE m.target_list_id = l.target_list_id AND m.state = '${state}') AS stars_${state}`;
 
 const SELECT_LISTS = `
-  SELECT l.target_list_id, l.name, l.note, l.state, l.catalogue_edition, l.view_params, l.recipe, l.fingerprint, l.made_at,
-    l.version, l.made_by, person.name AS maker, programme.is_invented,
+  SELECT l.target_list_id, l.name, l.note, l.state, l.catalogue_edition, l.view_params, l.fingerprint, l.made_at,
+    l.version, l.made_by, person.name AS maker, programme.is_invented, ${JOINED_RECIPE},
     l.instrument_card_id, card.name AS card_name, card.\`number\` AS card_number,
     l.campaign_version_id, campaign.name AS campaign_name, campaign.\`number\` AS campaign_number,
     l.merit_version_id, merit.name AS merit_name, merit.\`number\` AS merit_number, merit.terms AS merit_terms,
     ${["in", "reserve", "held", "out"].map(countOf).join(", ")}
   FROM target_list l
   JOIN programme ON programme.programme_id = l.programme_id
+  JOIN recipe r ON r.recipe_version_id = l.recipe_version_id
   LEFT JOIN person ON person.person_id = l.made_by
   LEFT JOIN instrument_card card ON card.instrument_card_id = l.instrument_card_id
   LEFT JOIN campaign ON campaign.campaign_version_id = l.campaign_version_id

@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { job } from "#shared/api/jobs.ts";
-import { programme, programmeCreateBody, programmePatchBody, recipeBody } from "#shared/api/programmes.ts";
+import { programme, programmeCreateBody, programmePatchBody } from "#shared/api/programmes.ts";
+import { recipeChoiceBody } from "#shared/api/recipes.ts";
 import type { Routes } from "../http/route.ts";
 import { presentJob } from "../jobs/present.ts";
 import { changeProgramme, chooseRecipe, createProgramme, listProgrammes, readProgramme } from "./service.ts";
@@ -58,12 +59,12 @@ export const addProgrammeRoutes = (routes: Routes): void => {
       method: "put",
       path: `${ONE}/recipe`,
       access: "programme.choose-recipe",
-      body: recipeBody,
+      body: recipeChoiceBody,
       status: 202,
       answer: z.object({ job }),
     },
     async ({ deps, caller, programmeId, body }) => ({
-      job: presentJob(await chooseRecipe(deps, caller, programmeId, body.recipe)),
+      job: presentJob(await chooseRecipe(deps, caller, programmeId, body.versionId)),
     }),
   );
 };

@@ -1,4 +1,5 @@
 import type { Programme as ProgrammeJson } from "#shared/api/programmes.ts";
+import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { programmesOf } from "../auth/queries.ts";
 import type { JobRow } from "../database/entities/job.entity.ts";
 import { Programme } from "../database/entities/programme.entity.ts";
@@ -9,13 +10,17 @@ import type { Caller } from "../http/route.ts";
 import { enqueueJob } from "../jobs/service.ts";
 import { writeLine } from "../logbook/service.ts";
 import { addMember } from "../people/membership.ts";
+import { recipeInUse, refOf } from "../recipes/queries.ts";
+import { addShippedRecipes } from "../recipes/shipped.ts";
 import { presentProgramme } from "./present.ts";
 import { countsOf, lockProgramme } from "./queries.ts";
 
 export const readProgramme = async (deps: Deps, id: string): Promise<ProgrammeJson> => {
   const programme = await deps.db.manager.findOneBy(Programme, { id });
   if (!programme) throw notFound("This programme");
-  return presentProgramme(programme, await countsOf(deps.db.manager, programme));
+  const tx = deps.db.manager;
+  const recipe = await recipeInUse(tx, id, programme.recipeVersionId);
+  return presentProgramme(programme, refOf(recipe), await countsOf(tx, programme));
 };
 
 export const listProgrammes = async (deps: Deps, caller: Caller): Promise<ProgrammeJson[]> => {
@@ -36,6 +41,7 @@ export const createProgramme = async (
       Programme,
       tx.create(Programme, { name, description, isInvented, createdAt: at }),
     );
+    await addShippedRecipes(tx, programme.id, at);
     await writeLine(tx, {
       programmeId: programme.id,
       person: caller,
@@ -89,30 +95,32 @@ export const changeProgramme = async (
   return readProgramme(deps, id);
 };
 
-/** Asks for the catalogue to be derived anew by another recipe; the recipe is in force once that edition is. */
-export const chooseRecipe = (deps: Deps, caller: Caller, id: string, recipe: string): Promise<JobRow> =>
+/** Asks for the catalogue to be derived anew by another version; it is in force once that edition is. */
+export const chooseRecipe = (deps: Deps, caller: Caller, id: string, versionId: string): Promise<JobRow> =>
   inTransaction(deps.db, async (tx) => {
     const programme = await lockProgramme(tx, id);
     if (!programme) throw notFound("This programme");
-    if (programme.recipe === recipe)
-      throw conflict("recipe-in-force", "The catalogue is derived by this recipe already.", {
-        hint: "Choose another recipe, or leave it as it is.",
+    const wanted = await recipeInUse(tx, id, versionId);
+    if (programme.recipeVersionId === versionId)
+      throw conflict("recipe-in-force", "The catalogue is derived by this version of the recipe already.", {
+        hint: "Choose another version or another recipe, or leave it as it is.",
       });
+    const inForce = await recipeInUse(tx, id, programme.recipeVersionId);
     const subject = { type: "programme", id };
     await writeLine(tx, {
       programmeId: id,
       person: caller,
       action: "programme.choose-recipe",
       subject: { ...subject, name: programme.name },
-      before: { recipe: programme.recipe },
-      after: { recipe },
+      before: { recipe: recipeLabel(inForce) },
+      after: { recipe: recipeLabel(wanted) },
       at: deps.now(),
     });
     return enqueueJob(tx, {
       programmeId: id,
       personId: caller.id,
       kind: "recompute",
-      payload: { recipe },
+      payload: { recipeVersionId: versionId },
       subject,
     });
   });

@@ -3,11 +3,11 @@ import { mkdir, open, rename, rm } from "node:fs/promises";
 import { join } from "node:path";
 import { setImmediate as nextTurn } from "node:timers/promises";
 import { type DuckDBConnection, DuckDBInstance } from "@duckdb/node-api";
-import { findRecipe, type Recipe } from "#shared/science/recipes.ts";
 import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.ts";
 import { Programme } from "../database/entities/programme.entity.ts";
 import type { Deps } from "../deps.ts";
 import { notFound } from "../errors.ts";
+import { type RecipeInUse, recipeInUse } from "../recipes/queries.ts";
 import { Batch } from "./batch.ts";
 import { INDEX_COLUMNS } from "./index-columns.ts";
 import { createAssessor } from "./instrument.ts";
@@ -20,8 +20,8 @@ import { writeHistograms } from "./summarise.ts";
 export type BuildProgress = (done: number, total: number) => Promise<void> | void;
 
 export interface BuildOptions extends ScanKey {
-  /** Key of the recipe of an edition that is not in force yet; by default the programme's. */
-  recipe?: string;
+  /** Version of the recipe of an edition that is not in force yet; by default the programme's. */
+  recipeVersionId?: string;
 }
 
 const MEMORY = "512MB";
@@ -29,16 +29,17 @@ const PROGRESS_ROWS = 20_480;
 const FLUSH_ROWS = 10_240;
 
 /** The recipe that the edition was, or is about to be, derived by. */
-export const recipeOf = async (
+const recipeOf = async (
   deps: Deps,
-  { programmeId, edition, recipe }: BuildOptions,
-): Promise<Recipe> => {
-  const made = await deps.db.manager.findOneBy(CatalogueEdition, { programmeId, number: edition });
-  if (made) return findRecipe(made.recipe);
-  if (recipe !== undefined) return findRecipe(recipe);
-  const programme = await deps.db.manager.findOneBy(Programme, { id: programmeId });
+  { programmeId, edition, recipeVersionId }: BuildOptions,
+): Promise<RecipeInUse> => {
+  const { manager } = deps.db;
+  const made = await manager.findOneBy(CatalogueEdition, { programmeId, number: edition });
+  const named = made?.recipeVersionId ?? recipeVersionId;
+  if (named !== undefined) return recipeInUse(manager, programmeId, named);
+  const programme = await manager.findOneBy(Programme, { id: programmeId });
   if (!programme) throw notFound("This programme");
-  return findRecipe(programme.recipe);
+  return recipeInUse(manager, programmeId, programme.recipeVersionId);
 };
 
 const assessorOf = async (

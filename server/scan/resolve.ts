@@ -3,7 +3,6 @@ import type { ViewSpec } from "#shared/catalogue/view.ts";
 import { LIMITS } from "#shared/limits.ts";
 import { compileMerit, type ScoringTerm } from "#shared/merit/score.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
-import { findRecipe, type Recipe } from "#shared/science/recipes.ts";
 import { CampaignVersion } from "../database/entities/campaign.entity.ts";
 import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.ts";
 import { InstrumentCardVersion } from "../database/entities/instrument-card.entity.ts";
@@ -11,6 +10,7 @@ import { MeritVersion } from "../database/entities/merit.entity.ts";
 import { Programme } from "../database/entities/programme.entity.ts";
 import type { Deps } from "../deps.ts";
 import { notFound } from "../errors.ts";
+import { type RecipeInUse, recipeInUse } from "../recipes/queries.ts";
 import { canSortBy } from "./compile.ts";
 
 interface Named {
@@ -24,7 +24,7 @@ export interface ResolvedView {
   programmeId: string;
   /** 0 while there is no catalogue. */
   edition: number;
-  recipe: Recipe;
+  recipe: RecipeInUse;
   card: (Named & { settings: CardSettings }) | null;
   campaign: (Named & { settings: CampaignSettings }) | null;
   merit: (Named & { terms: readonly ScoringTerm[] }) | null;
@@ -77,7 +77,8 @@ export const resolveView = async (deps: Deps, programmeId: string, view: ViewSpe
   if (view.edition !== null && !isKnown) ignored.push("edition");
   const edition = isKnown && view.edition !== null ? view.edition : programme.edition;
   const made = await deps.db.manager.findOneBy(CatalogueEdition, { programmeId, number: edition });
-  const [card, campaign, merit] = await Promise.all([
+  const [recipe, card, campaign, merit] = await Promise.all([
+    recipeInUse(deps.db.manager, programmeId, made?.recipeVersionId ?? programme.recipeVersionId),
     findCard(deps, programmeId, view.card),
     findCampaign(deps, programmeId, view.campaign),
     findMerit(deps, programmeId, view.merit),
@@ -91,7 +92,7 @@ export const resolveView = async (deps: Deps, programmeId: string, view: ViewSpe
   return {
     programmeId,
     edition,
-    recipe: findRecipe(made?.recipe ?? programme.recipe),
+    recipe,
     card,
     campaign,
     merit,

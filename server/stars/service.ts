@@ -4,6 +4,7 @@ import { methodWord } from "#shared/catalogue/methods.ts";
 import { METHOD_KEYS } from "../database/star-table.ts";
 import type { Deps } from "../deps.ts";
 import { notFound } from "../errors.ts";
+import { refOf } from "../recipes/queries.ts";
 import { presentEntry, rowPresenter } from "./present.ts";
 import {
   editionMadeAt,
@@ -32,7 +33,7 @@ export const summarise = async (view: OpenView): Promise<ViewSummary> => {
     card: named(card),
     campaign: named(campaign),
     merit: named(merit),
-    recipe: recipe.key,
+    recipe: refOf(recipe),
     ignored,
   };
 };

@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { LIMITS } from "../limits.ts";
 import { id, name, note, personRef, timestamp, version } from "./common.ts";
+import { recipeRef } from "./recipes.ts";
 import { starRow } from "./stars.ts";
 
 export const LIST_STATES = ["draft", "in-review", "agreed", "issued", "superseded", "withdrawn"] as const;
@@ -19,7 +20,7 @@ export const targetList = z.object({
     .nullable(),
   card: z.object({ versionId: id, name: z.string(), number: z.int() }).nullable(),
   campaign: z.object({ versionId: id, name: z.string(), number: z.int() }).nullable(),
-  recipe: z.string(),
+  recipe: recipeRef,
   stars: z.int(),
   byState: z.object({ in: z.int(), reserve: z.int(), held: z.int(), out: z.int() }),
   fingerprint: z.string(),

@@ -1,9 +1,8 @@
 import { z } from "zod";
 import { ROLES } from "../policy/roles.ts";
 import { cursorQuery, id, name, note, personRef, timestamp, version } from "./common.ts";
+import { recipeRef } from "./recipes.ts";
 import { email } from "./session.ts";
-
-export const RECIPE_KEYS = ["default", "practice"] as const;
 
 /** GET /api/programmes/:programmeId → { programme }; PATCH → { programme }; POST /api/programmes (installation administrators) → 201. */
 export const programme = z.object({
@@ -12,7 +11,8 @@ export const programme = z.object({
   description: z.string(),
   /** True where the sky is invented: said on every screen. */
   isInvented: z.boolean(),
-  recipe: z.enum(RECIPE_KEYS),
+  /** The version that the catalogue is derived by. */
+  recipe: recipeRef,
   /** Number of the catalogue edition in force; null before the first. */
   edition: z.int().nullable(),
   stars: z.int(),
@@ -33,8 +33,6 @@ export const programmePatchBody = z.strictObject({
   description: note.optional(),
   version,
 });
-/** PUT /api/programmes/:programmeId/recipe → 202 { job }: a recompute that makes a new catalogue edition. */
-export const recipeBody = z.strictObject({ recipe: z.enum(RECIPE_KEYS) });
 
 /** GET …/members → { members }; PATCH …/members/:personId; DELETE …/members/:personId → 204. */
 export const member = z.object({

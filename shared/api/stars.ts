@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { LIMITS } from "../limits.ts";
 import { id, timestamp } from "./common.ts";
+import { recipeRef } from "./recipes.ts";
 
 /**
  * Every star query carries a view as search parameters (see catalogue/view.ts): edition, card, campaign, merit,
@@ -48,7 +49,7 @@ export const viewSummary = z.object({
   card: z.object({ versionId: id, name: z.string(), number: z.int() }).nullable(),
   campaign: z.object({ versionId: id, name: z.string(), number: z.int() }).nullable(),
   merit: z.object({ versionId: id, name: z.string(), number: z.int() }).nullable(),
-  recipe: z.string(),
+  recipe: recipeRef,
   /** Parts of the view that do not exist or may not be seen, by name; the rest is shown. */
   ignored: z.array(z.string()),
 });
@@ -127,7 +128,7 @@ export const catalogueEdition = z.object({
   number: z.int(),
   reason: z.string(),
   stars: z.int(),
-  recipe: z.string(),
+  recipe: recipeRef,
   fingerprint: z.string(),
   madeAt: timestamp,
   madeBy: z.string(),

@@ -34,6 +34,8 @@ export const RIGHTS = {
   "extract.read": MEMBERS,
   "extract.edit": ["curator"],
   "catalogue.read": READERS,
+  "recipe.read": READERS,
+  "recipe.edit": ["curator", "lead"],
   "instrument.read": READERS,
   "instrument.edit": ["instrument-team", "scientist", "lead"],
   "selection.read": MEMBERS,

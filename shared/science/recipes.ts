@@ -101,17 +101,16 @@ export interface RecipeSettings {
   readonly statistic: "campaign" | "boxcar" | "trapezoid";
 }
 
+/** A recipe that every programme starts with; later ones are saved by people. */
 export interface Recipe {
-  readonly key: "default" | "practice";
-  readonly version: number;
   readonly name: string;
+  readonly note: string;
   readonly settings: RecipeSettings;
 }
 
 export const DEFAULT_RECIPE: Recipe = {
-  key: "default",
-  version: 1,
   name: "Default",
+  note: "Published relations in their order of trust, inside their published ranges.",
   settings: {
     distance: {
       order: ["given-distance", "inversion"],
@@ -139,9 +138,8 @@ export const DEFAULT_RECIPE: Recipe = {
 
 /** The simpler choices of the practice stars: one relation each, central transits. */
 export const PRACTICE_RECIPE: Recipe = {
-  key: "practice",
-  version: 1,
   name: "Practice",
+  note: "One relation for each quantity and central transits, as the practice stars are worked out by hand.",
   settings: {
     ...DEFAULT_RECIPE.settings,
     distance: { ...DEFAULT_RECIPE.settings.distance, order: ["inversion"] },
@@ -152,11 +150,4 @@ export const PRACTICE_RECIPE: Recipe = {
     luminosity: ["radius-and-temperature"],
     duration: "central",
   },
-};
-
-/** The recipe of that key; an unknown key is a defect of the caller. */
-export const findRecipe = (key: string): Recipe => {
-  if (key === DEFAULT_RECIPE.key) return DEFAULT_RECIPE;
-  if (key === PRACTICE_RECIPE.key) return PRACTICE_RECIPE;
-  throw new RangeError(`No recipe is called ${key}.`);
 };

@@ -5,7 +5,6 @@ import {
   useMutation,
   useQueryClient,
 } from "@tanstack/react-query";
-import type { Job } from "#shared/api/jobs.ts";
 import type { Invitation, LogbookLine, Member, Programme } from "#shared/api/programmes.ts";
 import type { Role } from "#shared/policy/roles.ts";
 import { get, request } from "./client.ts";
@@ -93,10 +92,6 @@ export const useCreateProgramme = () => {
 export const useEditProgramme = (programmeId: string) =>
   useOwnChange(programmeId, (body: { name?: string; description?: string; version: number }) =>
     request<{ programme: Programme }>("PATCH", base(programmeId), body),
-  );
-export const useChooseRecipe = (programmeId: string) =>
-  useProgrammeChange(programmeId, (recipe: string) =>
-    request<{ job: Job }>("PUT", `${base(programmeId)}/recipe`, { recipe }),
   );
 export const useSetRoles = (programmeId: string) =>
   useOwnChange(programmeId, ({ personId, roles }: { personId: string; roles: Role[] }) =>

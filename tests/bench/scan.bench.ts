@@ -1,6 +1,7 @@
 import { CatalogueEdition } from "#server/database/entities/catalogue-edition.entity.ts";
 import { Programme } from "#server/database/entities/programme.entity.ts";
 import type { Deps } from "#server/deps.ts";
+import { addShippedRecipes } from "#server/recipes/shipped.ts";
 import { buildScanIndex } from "#server/scan/build.ts";
 import { openView } from "#server/scan/view.ts";
 import type { ViewSpec } from "#shared/catalogue/view.ts";
@@ -16,17 +17,17 @@ const fillCatalogue = async (deps: Deps, rows: number): Promise<Programme> => {
   const programme = await manager.save(
     manager.create(Programme, {
       name: "Bench",
-      recipe: "default",
       edition: 1,
       isInvented: true,
       createdAt: madeAt,
     }),
   );
+  const recipes = await addShippedRecipes(manager, programme.id, madeAt);
   await manager.insert(CatalogueEdition, {
     programmeId: programme.id,
     number: 1,
     reason: "bench",
-    recipe: "default",
+    recipeVersionId: recipes.default,
     stars: rows,
     fingerprint: "0".repeat(64),
     madeAt,

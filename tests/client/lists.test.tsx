@@ -24,7 +24,7 @@ const list: TargetList = {
   merit: { versionId: "8", name: "Practice merit", number: 1, terms: ["reach"] },
   card: { versionId: "2", name: "Heron", number: 1 },
   campaign: null,
-  recipe: "default",
+  recipe: { versionId: "1", name: "Default", number: 1, hash: "3f2a91c0".repeat(8) },
   stars: 150,
   byState: { in: 148, reserve: 0, held: 1, out: 1 },
   fingerprint: "7f3a-91c2",

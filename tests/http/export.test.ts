@@ -1,9 +1,11 @@
 import { parse } from "csv-parse/sync";
 import { beforeAll, describe, expect, test } from "vitest";
 import type { Programme } from "#server/database/entities/programme.entity.ts";
+import { contentHash } from "#server/recipes/content-hash.ts";
 import type { TargetList } from "#shared/api/lists.ts";
 import { COLUMNS } from "#shared/catalogue/columns.ts";
 import { EMPTY_VIEW, viewToParams } from "#shared/catalogue/view.ts";
+import { PRACTICE_RECIPE } from "#shared/science/recipes.ts";
 import { type Agent, startTestApp, type TestApp } from "#tests/support/app.ts";
 import { buildProgramme } from "#tests/support/factories.ts";
 import { buildInstrument, buildSky, PRACTICE_STARS } from "#tests/support/sky.ts";
@@ -138,7 +140,7 @@ describe("as ECSV", () => {
       "# - stars: 4",
       `# - fingerprint: "${list.fingerprint}"`,
       "# - catalogue_edition: 1",
-      '# - recipe: "practice"',
+      `# - recipe: "Practice v1 · ${contentHash(PRACTICE_RECIPE.settings).slice(0, 8)}"`,
       '# - instrument_card: "Practice 30, version 1"',
       '# - campaign: "Half a year, version 1"',
       '# - figure_of_merit: "Small first, version 1"',

@@ -156,25 +156,6 @@ D,42,10.5,10.5,2020.0,12.0,0.04,
     const answer = await agent.get(`${extractsUrl(programme)}/${second.id}`).expect(200);
     expect(answer.body.extract.state).toBe("withdrawn");
   });
-
-  test("another recipe makes an edition; deriving again by the same data writes no star twice", async () => {
-    const { agent, programme } = await curator();
-    await bringIn(app.deps, agent, programme, PRACTICE);
-    const first = (await agent.get(`/api/programmes/${programme.id}/catalogue`)).body.catalogue.editions[0];
-    for (const recipe of ["default", "practice"]) {
-      await agent.put(`/api/programmes/${programme.id}/recipe`).send({ recipe }).expect(202);
-      await runJobs(app.deps);
-    }
-    const { catalogue } = (await agent.get(`/api/programmes/${programme.id}/catalogue`)).body;
-    expect(catalogue.editions.map((e: { recipe: string }) => e.recipe)).toEqual([
-      "practice",
-      "default",
-      "practice",
-    ]);
-    expect(catalogue.editions[0].fingerprint).toBe(first.fingerprint);
-    await bringIn(app.deps, agent, programme, `${PRACTICE}\n`);
-    expect((await editionOf(programme)).rows).toBe("9");
-  });
 });
 
 describe("an import that does not come to its end", () => {

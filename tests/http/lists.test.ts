@@ -80,7 +80,7 @@ describe("a list made from a view", () => {
       stars: 2,
       byState: { in: 2, reserve: 0, held: 0, out: 0 },
       catalogueEdition: 1,
-      recipe: "practice",
+      recipe: { name: "Practice", number: 1, versionId: programme.recipeVersionId },
       merit: { name: "Reach", number: 1, terms: ["reach"] },
       card: { name: "Practice 30" },
       campaign: { name: "Half a year" },

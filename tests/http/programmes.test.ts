@@ -1,5 +1,4 @@
 import { beforeAll, describe, expect, test } from "vitest";
-import { JobRow } from "#server/database/entities/job.entity.ts";
 import { startTestApp, type TestApp } from "#tests/support/app.ts";
 import { buildPerson } from "#tests/support/factories.ts";
 
@@ -15,7 +14,7 @@ describe("a programme", () => {
     expect(body.programme).toMatchObject({
       name: "Cool Neighbours",
       description: "",
-      recipe: "default",
+      recipe: { name: "Default", number: 1 },
       edition: null,
       stars: 0,
       counts: { members: 1, extracts: 0 },
@@ -57,30 +56,5 @@ describe("a programme", () => {
     const { agent } = await on.as(await buildPerson(on.deps.db, { isInstallationAdministrator: true }));
     const { body } = await agent.post("/api/programmes").send({ name: "  " }).expect(400);
     expect(body.error.fields).toEqual({ name: "Give it a name." });
-  });
-});
-
-describe("another recipe", () => {
-  test("is a job that derives the catalogue anew, in the logbook", async () => {
-    const { agent, programme, person } = await on.asPerson(["curator"]);
-    const path = `/api/programmes/${programme.id}`;
-    const { body } = await agent.put(`${path}/recipe`).send({ recipe: "practice" }).expect(202);
-    expect(body.job).toMatchObject({ kind: "recompute", state: "queued" });
-    const job = await on.deps.db.manager.findOneByOrFail(JobRow, { id: body.job.id });
-    expect(job).toMatchObject({
-      programmeId: programme.id,
-      personId: person.id,
-      payload: { recipe: "practice" },
-    });
-    const { lines } = (await agent.get(`${path}/logbook`)).body;
-    expect(lines[0]).toMatchObject({ action: "programme.choose-recipe", after: { recipe: "practice" } });
-  });
-
-  test("that is in force already, or does not exist, starts nothing", async () => {
-    const { agent, programme } = await on.asPerson("lead");
-    const put = (recipe: string) => agent.put(`/api/programmes/${programme.id}/recipe`).send({ recipe });
-    expect((await put("default")).status).toBe(409);
-    expect((await put("magic")).status).toBe(400);
-    expect(await on.deps.db.manager.countBy(JobRow, { programmeId: programme.id })).toBe(0);
   });
 });

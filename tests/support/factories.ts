@@ -3,6 +3,7 @@ import { hashPassword } from "#server/auth/password.ts";
 import { Member } from "#server/database/entities/member.entity.ts";
 import { Person } from "#server/database/entities/person.entity.ts";
 import { Programme } from "#server/database/entities/programme.entity.ts";
+import { addShippedRecipes } from "#server/recipes/shipped.ts";
 import type { Role } from "#shared/policy/roles.ts";
 
 /** Of everyone the factories make. */
@@ -30,18 +31,29 @@ export const buildPerson = async (db: DataSource, more: Partial<Person> = {}): P
   );
 };
 
-export const buildProgramme = (db: DataSource, more: Partial<Programme> = {}): Promise<Programme> =>
-  db.manager.save(
+/** A programme with the recipes that every programme has, deriving by the one named. */
+export const buildProgramme = async (
+  db: DataSource,
+  { recipe = "default", ...more }: Partial<Programme> & { recipe?: "default" | "practice" } = {},
+): Promise<Programme> => {
+  const programme = await db.manager.save(
     db.manager.create(Programme, {
       name: `Programme ${next()}`,
       description: "",
       isInvented: true,
-      recipe: "default",
       edition: 0,
       createdAt: new Date(),
       ...more,
     }),
   );
+  const ids = await addShippedRecipes(db.manager, programme.id, programme.createdAt);
+  programme.recipeVersionId = ids[recipe];
+  await db.query("UPDATE programme SET recipe_version_id = ? WHERE programme_id = ?", [
+    programme.recipeVersionId,
+    programme.id,
+  ]);
+  return programme;
+};
 
 interface MemberParts {
   roles: readonly Role[];

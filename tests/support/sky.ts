@@ -5,8 +5,9 @@ import type { Programme } from "#server/database/entities/programme.entity.ts";
 import type { Deps } from "#server/deps.ts";
 import { deriveColumns } from "#server/derive/derive.ts";
 import { allocateGiven } from "#server/derive/star-columns.ts";
+import { recipeInUse } from "#server/recipes/queries.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
-import { findRecipe } from "#shared/science/recipes.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 
 /** A star as an extract would give it: a designation, perhaps an identifier, and numbers by column. */
 export interface GivenStar {
@@ -55,7 +56,7 @@ export const PRACTICE_STARS: GivenStar[] = [
   },
 ];
 
-const starRow = (stars: readonly GivenStar[], recipe: string) => {
+const starRow = (stars: readonly GivenStar[], recipe: RecipeSettings) => {
   const given = allocateGiven(stars.length);
   stars.forEach(({ values }, i) => {
     for (const [key, value] of Object.entries(values)) {
@@ -64,7 +65,7 @@ const starRow = (stars: readonly GivenStar[], recipe: string) => {
       column[i] = value;
     }
   });
-  const stellar = deriveColumns(given, stars.length, findRecipe(recipe).settings);
+  const stellar = deriveColumns(given, stars.length, recipe);
   const all = { ...given, ...stellar.values, ...stellar.blanks, ...stellar.methods };
   return (i: number): Record<string, unknown> => ({
     ...Object.fromEntries(
@@ -86,7 +87,8 @@ export const buildSky = async (
   firstId = 2n ** 32n + 1n,
 ): Promise<string[]> => {
   const number = programme.edition + 1;
-  const cells = starRow(stars, programme.recipe);
+  const { settings } = await recipeInUse(deps.db.manager, programme.id, programme.recipeVersionId);
+  const cells = starRow(stars, settings);
   const ids = stars.map((_, i) => String(firstId + BigInt(i)));
   const rows = stars.map(({ designation, sourceId }, i) => ({
     programme_id: programme.id,
@@ -106,7 +108,7 @@ export const buildSky = async (
     programmeId: programme.id,
     number,
     reason: "test",
-    recipe: programme.recipe,
+    recipeVersionId: programme.recipeVersionId,
     stars: stars.length,
     fingerprint: "0".repeat(64),
     madeAt: new Date(),

@@ -14,8 +14,9 @@ export class CatalogueEdition {
   @Column({ type: "varchar", length: 200 })
   reason!: string;
 
-  @Column({ type: "varchar", length: 20 })
-  recipe!: string;
+  /** Version of the recipe that it was derived by. */
+  @Column({ ...idColumn, name: "recipe_version_id" })
+  recipeVersionId!: string;
 
   @Column({ type: "int", unsigned: true })
   stars!: number;

@@ -14,6 +14,7 @@ import { MeritVersion } from "./merit.entity.ts";
 import { OneTimeLink } from "./one-time-link.entity.ts";
 import { Person } from "./person.entity.ts";
 import { Programme } from "./programme.entity.ts";
+import { RecipeVersion } from "./recipe.entity.ts";
 import { RefusedRow } from "./refused-row.entity.ts";
 import { SelectionVersion } from "./selection.entity.ts";
 import { StarEntity } from "./star.entity.ts";
@@ -37,6 +38,7 @@ export const ENTITIES = [
   OneTimeLink,
   Person,
   Programme,
+  RecipeVersion,
   RefusedRow,
   SelectionVersion,
   StarEntity,

@@ -1,5 +1,5 @@
 import { Column, Entity, PrimaryGeneratedColumn, VersionColumn } from "typeorm";
-import { momentColumn, nameColumn } from "../columns.ts";
+import { idColumn, momentColumn, nameColumn } from "../columns.ts";
 
 /** Everything one team can see hangs off its programme. */
 @Entity("programme")
@@ -17,8 +17,9 @@ export class Programme {
   @Column({ name: "is_invented", type: "boolean", default: false })
   isInvented!: boolean;
 
-  @Column({ type: "varchar", length: 20, default: "default" })
-  recipe!: string;
+  /** Version of the recipe in force. */
+  @Column({ ...idColumn, name: "recipe_version_id", default: 0 })
+  recipeVersionId!: string;
 
   /** Number of the catalogue edition in force; 0 before the first. Moving it is what makes an edition visible. */
   @Column({ type: "int", unsigned: true, default: 0 })

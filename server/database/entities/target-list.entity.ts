@@ -35,8 +35,9 @@ export class TargetList {
   @Column({ ...idColumn, name: "merit_version_id", nullable: true })
   meritVersionId!: string | null;
 
-  @Column({ type: "varchar", length: 20 })
-  recipe!: string;
+  /** Version of the recipe that its stars' values were derived by. */
+  @Column({ ...idColumn, name: "recipe_version_id" })
+  recipeVersionId!: string;
 
   @Column(hashColumn)
   fingerprint!: string;

@@ -3,6 +3,7 @@ import { Link } from "react-router-dom";
 import type { TargetList } from "#shared/api/lists.ts";
 import { findColumn } from "#shared/catalogue/columns.ts";
 import { type Cut, type ViewSpec, viewFromParams } from "#shared/catalogue/view.ts";
+import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { paths } from "#src/app/paths.ts";
 import { Moment } from "#src/ui/moment.tsx";
 import { SectionTitle } from "#src/ui/section-title.tsx";
@@ -46,7 +47,7 @@ export const Provenance = ({ programmeId, list }: { programmeId: string; list: T
         <Line name="Figure of merit">{named(list.merit)}</Line>
         <Line name="Instrument card">{named(list.card)}</Line>
         <Line name="Campaign">{named(list.campaign)}</Line>
-        <Line name="Recipe">{list.recipe}</Line>
+        <Line name="Recipe">{recipeLabel(list.recipe)}</Line>
         <Line name="Order">{orderWords(view)}</Line>
         <Line name="Set fingerprint">
           <span className="font-mono">{list.fingerprint}</span>

@@ -1,16 +1,14 @@
 import { useQuery } from "@tanstack/react-query";
 import { useState } from "react";
 import type { Programme } from "#shared/api/programmes.ts";
+import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { activeJobsOptions } from "#src/api/jobs.ts";
-import { useChooseRecipe } from "#src/api/programmes.ts";
+import { recipesOptions, useChooseRecipe } from "#src/api/recipes.ts";
 import { JobProgress } from "#src/lib/job-progress.tsx";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
-import { RECIPES } from "./recipe-differences.ts";
 import { RecipeTable } from "./recipe-table.tsx";
-
-const nameOf = (key: string): string => RECIPES.find((recipe) => recipe.key === key)?.name ?? key;
 
 /** The recompute that goes on: found again after the page was loaded anew, and kept on screen to its outcome. */
 const useRecompute = (programmeId: string, isAllowed: boolean) => {
@@ -26,16 +24,19 @@ export const RecipeChoice = ({ programme }: { programme: Programme }) => {
   const can = useCan();
   const choose = useChooseRecipe(programme.id);
   const { jobId, setJobId } = useRecompute(programme.id, can("job.read"));
-  const [wanted, setWanted] = useState(programme.recipe);
+  const { data: recipes = [] } = useQuery(recipesOptions(programme.id));
+  const [wanted, setWanted] = useState(programme.recipe.versionId);
+  const wantedName = recipes.find(({ versionId }) => versionId === wanted)?.name ?? programme.recipe.name;
   const recompute = () => choose.mutate(wanted, { onSuccess: ({ job }) => setJobId(job.id) });
   return (
     <div className="flex flex-col gap-4">
       <p>
-        The catalogue is derived by the recipe <span className="font-medium">{nameOf(programme.recipe)}</span>
-        .
+        The catalogue is derived by the recipe{" "}
+        <span className="font-medium">{recipeLabel(programme.recipe)}</span>.
       </p>
       <RecipeTable
-        inForce={programme.recipe}
+        recipes={recipes}
+        inForce={programme.recipe.versionId}
         wanted={wanted}
         onWant={can("programme.choose-recipe") ? setWanted : undefined}
       />
@@ -47,8 +48,12 @@ export const RecipeChoice = ({ programme }: { programme: Programme }) => {
           </p>
           <ErrorNotice error={choose.error} />
           <div>
-            <Button isBusy={choose.isPending} disabled={wanted === programme.recipe} onClick={recompute}>
-              Recompute with {nameOf(wanted)}
+            <Button
+              isBusy={choose.isPending}
+              disabled={wanted === programme.recipe.versionId}
+              onClick={recompute}
+            >
+              Recompute with {wantedName}
             </Button>
           </div>
         </>
@@ -58,7 +63,7 @@ export const RecipeChoice = ({ programme }: { programme: Programme }) => {
           key={jobId}
           programmeId={programme.id}
           jobId={jobId}
-          done={`The catalogue is derived by the recipe ${nameOf(programme.recipe)} now.`}
+          done={`The catalogue is derived by the recipe ${recipeLabel(programme.recipe)} now.`}
         />
       ) : null}
     </div>

@@ -1,11 +1,4 @@
-import {
-  DEFAULT_RECIPE,
-  PRACTICE_RECIPE,
-  type Recipe,
-  type RecipeSettings,
-} from "#shared/science/recipes.ts";
-
-export const RECIPES: readonly Recipe[] = [DEFAULT_RECIPE, PRACTICE_RECIPE];
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 
 const yesNo = (is: boolean): string => (is ? "yes" : "no");
 
@@ -44,7 +37,9 @@ export interface RecipeDifference {
 }
 
 /** The settings in which the recipes differ. */
-export const recipeDifferences = (recipes: readonly Recipe[] = RECIPES): RecipeDifference[] =>
+export const recipeDifferences = (
+  recipes: readonly { readonly settings: RecipeSettings }[],
+): RecipeDifference[] =>
   SETTINGS.map(({ label, of }) => ({ label, values: recipes.map(({ settings }) => of(settings)) })).filter(
     ({ values }) => new Set(values).size > 1,
   );

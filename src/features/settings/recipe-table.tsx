@@ -1,20 +1,19 @@
-import type { Programme } from "#shared/api/programmes.ts";
-import type { Recipe } from "#shared/science/recipes.ts";
+import type { Recipe } from "#shared/api/recipes.ts";
 import { LedgerTable } from "#src/ui/ledger-table.tsx";
 import { Pill } from "#src/ui/pill.tsx";
-import { RECIPES, recipeDifferences } from "./recipe-differences.ts";
-
-type Key = Programme["recipe"];
+import { recipeDifferences } from "./recipe-differences.ts";
 
 interface Props {
-  inForce: Key;
-  wanted: Key;
+  recipes: readonly Recipe[];
+  /** Ids of versions. */
+  inForce: string;
+  wanted: string;
   /** Absent for who may only look. */
-  onWant: ((recipe: Key) => void) | undefined;
+  onWant: ((versionId: string) => void) | undefined;
 }
 
-const Head = ({ recipe, inForce, wanted, onWant }: Props & { recipe: Recipe }) => {
-  const name = `${recipe.name}, version ${recipe.version}`;
+const Head = ({ recipe, inForce, wanted, onWant }: Omit<Props, "recipes"> & { recipe: Recipe }) => {
+  const name = `${recipe.name}, version ${recipe.number}`;
   return (
     <span className="flex min-h-6 flex-wrap items-center gap-2">
       {onWant ? (
@@ -23,35 +22,35 @@ const Head = ({ recipe, inForce, wanted, onWant }: Props & { recipe: Recipe }) =
             type="radio"
             name="recipe"
             className="size-4"
-            checked={wanted === recipe.key}
-            onChange={() => onWant(recipe.key)}
+            checked={wanted === recipe.versionId}
+            onChange={() => onWant(recipe.versionId)}
           />
           {name}
         </label>
       ) : (
         name
       )}
-      {inForce === recipe.key ? <Pill tone="calm">in force</Pill> : null}
+      {inForce === recipe.versionId ? <Pill tone="calm">in force</Pill> : null}
     </span>
   );
 };
 
 /** The recipes side by side, in what they differ. */
-export const RecipeTable = (props: Props) => (
+export const RecipeTable = ({ recipes, ...props }: Props) => (
   <LedgerTable
     caption="What the recipes differ in"
     heads={[
       { key: "what", label: "Differs in" },
-      ...RECIPES.map((recipe) => ({ key: recipe.key, label: <Head recipe={recipe} {...props} /> })),
+      ...recipes.map((recipe) => ({ key: recipe.versionId, label: <Head recipe={recipe} {...props} /> })),
     ]}
   >
-    {recipeDifferences().map(({ label, values }) => (
+    {recipeDifferences(recipes).map(({ label, values }) => (
       <tr key={label}>
         <th scope="row" className="border-b border-hair px-2 py-2 font-normal text-soft">
           {label}
         </th>
-        {RECIPES.map(({ key }, index) => (
-          <td key={key}>{values[index]}</td>
+        {recipes.map(({ versionId }, index) => (
+          <td key={versionId}>{values[index]}</td>
         ))}
       </tr>
     ))}

@@ -1,6 +1,7 @@
 import { describe, expect, test } from "vitest";
 import type { Programme } from "#shared/api/programmes.ts";
 import { can } from "#shared/policy/rights.ts";
+import { DEFAULT_RECIPE, PRACTICE_RECIPE } from "#shared/science/recipes.ts";
 import { piecesOf } from "#src/features/mailbox/body-text.tsx";
 import { nextStep } from "#src/features/overview/next-step.ts";
 import { recipeDifferences } from "#src/features/settings/recipe-differences.ts";
@@ -106,7 +107,7 @@ describe("the next step of a programme", () => {
 });
 
 test("recipes are told apart by what differs alone", () => {
-  const labels = recipeDifferences().map(({ label }) => label);
+  const labels = recipeDifferences([DEFAULT_RECIPE, PRACTICE_RECIPE]).map(({ label }) => label);
   expect(labels).toContain("[Fe/H] enters radius and mass");
   expect(labels).not.toContain("RUWE above which a star may be two");
 });
