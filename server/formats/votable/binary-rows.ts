@@ -45,6 +45,7 @@ export class BinaryRows {
   bytes = Buffer.alloc(131_072);
   end = 0;
   private at = 0;
+  private scratch = Buffer.alloc(1024);
   private view = new DataView(this.bytes.buffer, this.bytes.byteOffset, this.bytes.length);
   private readonly widths: readonly Width[];
   private readonly maskBytes: number;
@@ -238,12 +239,21 @@ export class BinaryRows {
     return text;
   }
 
-  /** UTF-16, most significant byte first. */
+  /** UTF-16, most significant byte first; most of it is Latin, for which a byte is enough. */
   private wideText(at: number, bytes: number): string {
-    const copy = Buffer.from(this.bytes.subarray(at, at + bytes));
-    const text = copy.swap16().toString("utf16le");
-    const stop = text.indexOf("\0");
-    return stop < 0 ? text : text.slice(0, stop);
+    if (bytes > this.scratch.length) this.scratch = Buffer.alloc(2 * bytes);
+    const { scratch, view } = this;
+    let isLatin = true;
+    let units = 0;
+    for (; 2 * units + 1 < bytes; units++) {
+      const unit = view.getUint16(at + 2 * units);
+      if (unit === NUL) break;
+      if (unit > 255) isLatin = false;
+      scratch[units] = unit;
+    }
+    if (isLatin) return units === 0 ? "" : scratch.toString("latin1", 0, units);
+    for (let i = 0; i < units; i++) scratch.writeUInt16LE(view.getUint16(at + 2 * i), 2 * i);
+    return scratch.toString("utf16le", 0, 2 * units);
   }
 
   private refuse(index: number, from: number, to: number, at: number): void {

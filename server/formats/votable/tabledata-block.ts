@@ -5,7 +5,6 @@ import type { TextCells } from "./text-cells.ts";
 import type { TextFeed } from "./text-feed.ts";
 
 const SPACE = 32;
-const CARRIAGE_RETURN = 13;
 /** Signs that XML forbids in any text (XML 1.0, W3C 2008, production 2 "Char"). */
 // biome-ignore lint/suspicious/noControlCharactersInRegex: these are the forbidden ones
 const FORBIDDEN = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\ufffe\uffff]/;
@@ -15,6 +14,27 @@ const pastSpace = (text: string, from: number): number => {
   while (text.charCodeAt(at) <= SPACE) at++;
   return at;
 };
+
+/** Remembers where a sign comes next, so that looking for it in piece after piece of a text goes over the text once. */
+class NextSign {
+  private text = "";
+  private from = 0;
+  private next = -1;
+
+  constructor(private readonly sign: string) {}
+
+  /** Whether the sign is from `from` up to `to`; places are asked for in their order. */
+  isIn(text: string, from: number, to: number): boolean {
+    if (text !== this.text || from < this.from) this.next = -1;
+    this.text = text;
+    this.from = from;
+    if (this.next < from) {
+      const next = text.indexOf(this.sign, from);
+      this.next = next < 0 ? text.length : next;
+    }
+    return this.next < to;
+  }
+}
 
 /**
  * Rows as elements. Rows that hold nothing but plain cells are taken by looking for their tags, which is many times
@@ -38,6 +58,9 @@ export class TabledataBlock implements DataBlock {
   private oddity = "";
   private isInRow = false;
   private line = 1;
+  /** References, and line ends that the parser makes one: neither stands for itself. */
+  private readonly references = new NextSign("&");
+  private readonly returns = new NextSign("\r");
   /** The text that was looked through for forbidden signs, and its first place that has one or its length. */
   private lookedAt = "";
   private plainUpTo = 0;
@@ -145,9 +168,9 @@ export class TabledataBlock implements DataBlock {
   private plainEnd(text: string): number {
     if (text !== this.lookedAt) {
       const at = text.search(FORBIDDEN);
-      this.lookedAt = text;
       this.plainUpTo = at < 0 ? text.length : at;
     }
+    this.lookedAt = text;
     return this.plainUpTo;
   }
 
@@ -166,7 +189,7 @@ export class TabledataBlock implements DataBlock {
         const to = text.indexOf("<", from);
         if (!text.startsWith(this.cellEnd, to)) return "unusual";
         cell = text.slice(from, to);
-        if (isUnusual(cell)) return "unusual";
+        if (this.references.isIn(text, from, to) || this.returns.isIn(text, from, to)) return "unusual";
         at = to + this.cellEnd.length;
       } else if (text.startsWith(this.emptyCell, at)) at += this.emptyCell.length;
       else return "unusual";
@@ -180,15 +203,3 @@ export class TabledataBlock implements DataBlock {
     return "taken";
   }
 }
-
-const AMPERSAND = 38;
-const GREATER = 62;
-
-/** Signs that the parser must see: references, line ends to be made one, and "]]>". */
-const isUnusual = (cell: string): boolean => {
-  for (let at = 0; at < cell.length; at++) {
-    const sign = cell.charCodeAt(at);
-    if (sign === AMPERSAND || sign === CARRIAGE_RETURN || sign === GREATER) return true;
-  }
-  return false;
-};
