@@ -1,5 +1,6 @@
 import type { ReadingPlan } from "#shared/api/extracts.ts";
 import { type CsvRecord, CsvSplitter } from "../formats/csv-splitter.ts";
+import { uniqueNames } from "../formats/delimited/unique-names.ts";
 import { type DecimalMark, type Delimiter, detectDialect } from "../formats/dialect.ts";
 import { detectEncoding, type Encoding, notATable, textDecoder } from "../formats/encoding.ts";
 import type { FileStorage } from "../storage/storage.ts";
@@ -12,7 +13,6 @@ const PIECES = 6;
 const TAIL = 48 * 1024;
 /** Rows of the beginning that are looked at: enough to judge by, few enough to answer at once. */
 const HEAD_ROWS = 800;
-const NAME_CHARACTERS = 200;
 
 export interface Sample {
   encoding: Encoding;
@@ -46,22 +46,6 @@ const readHead = async (files: FileStorage, key: string, bytes: number): Promise
   const head = await readRange(files, key, 0, Math.min(bytes, HEAD) - 1);
   if (head.includes(10) || bytes <= HEAD) return head;
   return readRange(files, key, 0, Math.min(bytes, LONGEST_HEAD) - 1);
-};
-
-/** Names that people can tell apart; what was changed about them is listed. */
-const uniqueNames = (cells: string[]): { header: string[]; renamed: Sample["renamed"] } => {
-  const seen = new Set<string>();
-  const renamed: Sample["renamed"] = [];
-  const header = cells.map((cell, index) => {
-    const plain = cell.trim().replace(index === 0 ? /^#\s*/ : /^$/, "");
-    const base = plain === "" ? `column ${index + 1}` : plain.slice(0, NAME_CHARACTERS);
-    let name = base;
-    for (let n = 2; seen.has(name.toLowerCase()); n++) name = `${base} (${n})`;
-    seen.add(name.toLowerCase());
-    if (name !== plain) renamed.push({ from: plain, to: name });
-    return name;
-  });
-  return { header, renamed };
 };
 
 const isBlankRecord = (r: CsvRecord): boolean => r.cells.every((cell) => cell.trim() === "");

@@ -18,7 +18,7 @@ const SAMPLE_CHARACTERS = 60;
 const MOST_LIKENESSES = 150;
 const LEAST_LIKENESS_CHARACTERS = 5;
 
-interface HeaderReading {
+export interface HeaderReading {
   key: string | undefined;
   rank: number;
   /** As the header spells it, if it does. */
@@ -26,7 +26,7 @@ interface HeaderReading {
 }
 
 /** `plx [mas]` and `parallax (mas)`: a name and its unit. `[Fe/H]` and `log(g)` are names. */
-const readHeader = (header: string): HeaderReading => {
+export const readHeader = (header: string): HeaderReading => {
   const whole = meaningOfHeader(header);
   if (whole) return { key: whole.key, rank: whole.rank, unit: "" };
   const parts = /^(.+?)\s*[[(]([^[\]]*)[\])]$/.exec(header.trim());
@@ -67,7 +67,7 @@ const raUnit = (sample: Sample, index: number): string => {
   return values.some((v) => v >= 24) ? "deg" : "";
 };
 
-const suggestUnit = (sample: Sample, index: number, key: string, spelled: string): string => {
+export const suggestUnit = (sample: Sample, index: number, key: string, spelled: string): string => {
   const canonical = findMeaning(key)?.unit ?? "";
   if (spelled !== "") return conversionTo(canonical, spelled) ? spelled : spelled.trim();
   return key === "ra" ? raUnit(sample, index) : canonical;

@@ -1,7 +1,10 @@
 import { plainNumber } from "#shared/format/numbers.ts";
 import type { FileColumn } from "./list-columns.ts";
 
-type MetaValue = string | number | readonly string[];
+/** What the header says of a column; where its values come from is not its business. */
+export type EcsvColumn = Omit<FileColumn, "value">;
+
+export type MetaValue = string | number | readonly string[];
 
 /** ECSV 1.0 (Astropy Proposal for Enhancement 6): comma-delimited, every header line behind "# ". */
 
@@ -20,7 +23,7 @@ const metaLines = (key: string, value: MetaValue): string[] => {
   return [`# - ${key}:`, ...value.map((item) => `#   - ${scalar(item)}`)];
 };
 
-const columnLine = (c: FileColumn): string => {
+const columnLine = (c: EcsvColumn): string => {
   const parts = [
     `name: ${c.name}`,
     ...(c.unit === "" ? [] : [`unit: ${scalar(unitText(c.unit))}`]),
@@ -39,7 +42,7 @@ const unitText = (unit: string): string =>
 
 /** The header: format line, columns, and what the file is. */
 export const ecsvHeader = (
-  columns: readonly FileColumn[],
+  columns: readonly EcsvColumn[],
   meta: Readonly<Record<string, MetaValue>>,
 ): string =>
   [

@@ -1,0 +1,72 @@
+import type { ColumnType } from "../table.ts";
+
+/** A cell as its column's type has it; null for a text that is none of that type. Blanks are NaN and the empty text. */
+export type NumberCell = (text: string) => number | null;
+export type TextCell = (text: string) => string | null;
+
+const WHOLE = /^[+-]?\d+$/;
+const REAL = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
+const WORDS: ReadonlyMap<string, number> = new Map([
+  ["nan", Number.NaN],
+  ["inf", Number.POSITIVE_INFINITY],
+  ["+inf", Number.POSITIVE_INFINITY],
+  ["-inf", Number.NEGATIVE_INFINITY],
+]);
+
+const whole =
+  (least: number, most: number): NumberCell =>
+  (text) => {
+    if (text === "") return Number.NaN;
+    const value = WHOLE.test(text) ? Number(text) : Number.NaN;
+    return value >= least && value <= most ? value : null;
+  };
+
+const float64: NumberCell = (text) => {
+  if (REAL.test(text)) return Number(text);
+  return text === "" ? Number.NaN : (WORDS.get(text.toLowerCase()) ?? null);
+};
+
+const float32: NumberCell = (text) => {
+  const value = float64(text);
+  return value === null ? null : Math.fround(value);
+};
+
+const NUMBER_CELLS: Readonly<Partial<Record<ColumnType, NumberCell>>> = {
+  int8: whole(-128, 127),
+  int16: whole(-32_768, 32_767),
+  int32: whole(-2_147_483_648, 2_147_483_647),
+  uint8: whole(0, 255),
+  uint16: whole(0, 65_535),
+  uint32: whole(0, 4_294_967_295),
+  float32,
+  float64,
+};
+
+const longWhole =
+  (least: bigint, most: bigint): TextCell =>
+  (text) => {
+    if (text === "") return "";
+    if (!WHOLE.test(text)) return null;
+    const value = BigInt(text.replace("+", ""));
+    return value >= least && value <= most ? String(value) : null;
+  };
+
+const BOOLEANS: ReadonlyMap<string, string> = new Map([
+  ["", ""],
+  ["true", "true"],
+  ["false", "false"],
+  ["1", "true"],
+  ["0", "false"],
+]);
+
+const TEXT_CELLS: Readonly<Partial<Record<ColumnType, TextCell>>> = {
+  int64: longWhole(-(2n ** 63n), 2n ** 63n - 1n),
+  uint64: longWhole(0n, 2n ** 64n - 1n),
+  boolean: (text) => BOOLEANS.get(text.toLowerCase()) ?? null,
+  text: (text) => text,
+};
+
+/** Reader of the cells of a column of numbers; undefined for the types whose values are kept as text. */
+export const numberCell = (type: ColumnType): NumberCell | undefined => NUMBER_CELLS[type];
+
+export const textCell = (type: ColumnType): TextCell => TEXT_CELLS[type] ?? ((text) => text);

@@ -1,0 +1,103 @@
+import type { CsvRecord } from "../csv-splitter.ts";
+import type { ColumnValues, RefusedRow, RowBatch } from "../table.ts";
+import { numberCell, textCell } from "./cells.ts";
+import type { EcsvColumn, EcsvHeader } from "./header.ts";
+
+const SHOWN_CHARACTERS = 40;
+
+/** A place where values of one column gather; `null`: the text is none of its type. */
+interface Gathering {
+  readonly index: number;
+  readonly mask: number | null;
+  readonly name: string;
+  readonly type: string;
+  read(text: string): number | string | null;
+  readonly blank: number | string;
+  values: (number | string)[];
+}
+
+const gatheringOf = ({ column, mask }: EcsvColumn, index: number): Gathering[] => {
+  if (column === null) return [];
+  const { name, type } = column;
+  const number = numberCell(type);
+  return [
+    number
+      ? { index, mask, name, type, read: (text) => number(text.trim()), blank: Number.NaN, values: [] }
+      : { index, mask, name, type, read: readText(type), blank: "", values: [] },
+  ];
+};
+
+const readText = (type: Parameters<typeof textCell>[0]): ((text: string) => string | null) => {
+  const read = textCell(type);
+  return type === "text" ? read : (text) => read(text.trim());
+};
+
+const isMasked = (cells: readonly string[], mask: number | null): boolean =>
+  mask !== null && /^(true|1)$/i.test((cells[mask] ?? "").trim());
+
+/** With blanks between the columns, several count as one and those at the ends for nothing, outside quotes. */
+const tokens = (text: string): string[] => {
+  const found = text.match(/"(?:[^"]|"")*"?|[^\s"]\S*/g) ?? [];
+  return found.map((token) =>
+    token.startsWith('"') ? token.replace(/^"|"$/g, "").replaceAll('""', '"') : token,
+  );
+};
+
+const isLoose = (text: string): boolean => text.startsWith(" ") || text.endsWith(" ") || text.includes("  ");
+
+/** Turns the records of the body into batches of typed columns. */
+export class EcsvRows {
+  private readonly gatherings: readonly Gathering[];
+  private readonly read: (number | string)[] = [];
+  private row = 0;
+
+  /** @param linesBefore lines of the file before the first record */
+  constructor(
+    private readonly header: EcsvHeader,
+    private readonly linesBefore: number,
+  ) {
+    this.gatherings = header.columns.flatMap(gatheringOf);
+  }
+
+  batch(records: readonly CsvRecord[], bytes: number): RowBatch {
+    const refused: RefusedRow[] = [];
+    let rows = 0;
+    for (const record of records) {
+      if (isOutsideTable(record)) continue;
+      this.row++;
+      const why = this.take(cellsOf(record, this.header.delimiter));
+      if (why === null) rows++;
+      else refused.push({ row: this.row, line: this.linesBefore + record.line, text: record.text, why });
+    }
+    return { rows, columns: this.gatherings.map(emptied), refused, bytes };
+  }
+
+  /** Adds one row to every column, or to none; why it was refused. */
+  private take(cells: readonly string[]): string | null {
+    const { gatherings, read } = this;
+    const width = this.header.columns.length;
+    if (cells.length !== width) return `This row has ${cells.length} values; the table has ${width} columns.`;
+    for (const [i, { index, mask, name, type, blank, ...column }] of gatherings.entries()) {
+      const text = cells[index] ?? "";
+      const value = isMasked(cells, mask) ? blank : column.read(text);
+      if (value === null)
+        return `“${text.slice(0, SHOWN_CHARACTERS)}” in ${name} is no value of the type ${type}.`;
+      read[i] = value;
+    }
+    for (const [i, { values, blank }] of gatherings.entries()) values.push(read[i] ?? blank);
+    return null;
+  }
+}
+
+/** Blank lines, and comments between the rows. */
+const isOutsideTable = ({ text }: CsvRecord): boolean => text.trim() === "" || text.trimStart()[0] === "#";
+
+export const cellsOf = ({ cells, text }: CsvRecord, delimiter: string): readonly string[] =>
+  delimiter === " " && isLoose(text) ? tokens(text) : cells;
+
+/** What has gathered, handed over. */
+const emptied = (gathering: Gathering): ColumnValues => {
+  const { values, blank } = gathering;
+  gathering.values = [];
+  return typeof blank === "number" ? Float64Array.from(values, Number) : values.map(String);
+};
