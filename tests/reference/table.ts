@@ -27,3 +27,18 @@ export const at = (row: readonly number[], index: number): number => {
   if (value === undefined) throw new Error(`The row has no number ${index}.`);
   return value;
 };
+
+/** Sets each row's difference against what is allowed for it, and names the row that has too much. */
+export const expectWithin = (
+  subject: keyof Inputs,
+  difference: (input: readonly number[], expected: readonly number[]) => number,
+  allowed: number | ((input: readonly number[]) => number),
+): void => {
+  for (const { input, expected } of referenceRows(subject)) {
+    const limit = typeof allowed === "number" ? allowed : allowed(input);
+    const found = difference(input, expected);
+    // Not `>`: a difference that is missing must fail too.
+    if (!(found <= limit))
+      throw new Error(`${subject} of ${input.join(", ")}: off by ${found}, allowed are ${limit}.`);
+  }
+};
