@@ -76,6 +76,36 @@ const quintic = (c: Quintic, x: number): number =>
 const slopeOfQuintic = (c: Quintic, x: number): number =>
   c[1] + x * (2 * c[2] + x * (3 * c[3] + x * (4 * c[4] + x * 5 * c[5])));
 
+/** M_Ks for which the mass relations are published; the radius relations hold in a part of it. */
+export const MASS_ABS_KS = { brightest: 4, faintest: 11 } as const;
+
+/**
+ * Mass over the whole range of the paper, M☉: `log M = −0.642 − 0.208 x − 8.43e−4 x² + 7.87e−3 x³ + 1.42e−4 x⁴ − 2.13e−4
+ * x⁵`, x = M_Ks − 7.5; scatter 2.0 %, more towards the ends.
+ *
+ * @param absKs absolute Ks (Vega), 4 to 11
+ * @returns NaN outside
+ * @see Mann et al. 2019, ApJ 871, 63, eq. 4 and Table 6
+ * @example massOverWholeRange(11) // 0.073542
+ */
+export const massOverWholeRange = (absKs: number): number =>
+  absKs >= MASS_ABS_KS.brightest && absKs <= MASS_ABS_KS.faintest
+    ? 10 ** quintic(MASS_COEFFICIENTS, absKs - MASS_ZERO_POINT)
+    : Number.NaN;
+
+/**
+ * The same with the metallicity term, M☉, for [Fe/H] −0.6 to 0.4; scatter 2.1 %.
+ *
+ * @see Mann et al. 2019, ApJ 871, 63, eq. 5 and Table 6
+ */
+export const massFehOverWholeRange = (absKs: number, feh: number): number =>
+  absKs >= MASS_ABS_KS.brightest &&
+  absKs <= MASS_ABS_KS.faintest &&
+  feh >= MASS_FEH.least &&
+  feh <= MASS_FEH.most
+    ? (1 + MASS_FEH_TERM * feh) * 10 ** quintic(MASS_FEH_COEFFICIENTS, absKs - MASS_ZERO_POINT)
+    : Number.NaN;
+
 /**
  * Mass, M☉: `log M = −0.642 − 0.208 x − 8.43e−4 x² + 7.87e−3 x³ + 1.42e−4 x⁴ − 2.13e−4 x⁵`, x = M_Ks − 7.5; scatter 2.0 %.
  * Published for 4 < M_Ks < 11; used here where the radius holds too, 4.6 to 9.8.

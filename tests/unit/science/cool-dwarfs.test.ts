@@ -7,8 +7,10 @@ import {
   coolDwarfTeffSlope,
   logMassFehSlope,
   logMassSlope,
+  massFehOverWholeRange,
   massFromAbsKs,
   massFromAbsKsFeh,
+  massOverWholeRange,
   radiusFehSlope,
   radiusFromAbsKs,
   radiusFromAbsKsFeh,
@@ -48,12 +50,39 @@ describe("radius and mass from M Ks", () => {
     expect(massFromAbsKs(8.17)).toBeCloseTo(0.1662, 3);
   });
 
-  test("masses printed by the author of Mann et al. 2019 agree within 1.5 %", () => {
-    const gj1214 = massFromAbsKs(8.782 + 5 - 5 * Math.log10(14.55));
-    const trappist1 = 10.296 + 5 - 5 * Math.log10(1000 / 80.4512);
-    expect(Math.abs(gj1214 / 0.1803 - 1)).toBeLessThan(0.015);
-    // M Ks 9.82 is just past where the radius holds: refused here, though the mass relation itself goes on to 11.
-    expect(massFromAbsKs(trappist1)).toBeNaN();
+  /** Computed; the wrong fifth power of one public program would give 0.484 and 0.113 at these ends. */
+  test.each([
+    [4, 0.743751, 0.750669, 0.749881],
+    [11, 0.073542, 0.074093, 0.074015],
+  ])("M Ks %d, where the mass alone is published", (m, m4, m5, m5Rich) => {
+    expect(massOverWholeRange(m)).toBeCloseTo(m4, 6);
+    expect(massFehOverWholeRange(m, 0)).toBeCloseTo(m5, 6);
+    expect(massFehOverWholeRange(m, 0.3)).toBeCloseTo(m5Rich, 6);
+    expect(massFromAbsKs(m)).toBeNaN();
+  });
+
+  test("inside the range in use both forms of the mass are one", () => {
+    for (const m of [4.6, 6.1, 9.8]) {
+      expect(massOverWholeRange(m)).toBe(massFromAbsKs(m));
+      expect(massFehOverWholeRange(m, -0.2)).toBe(massFromAbsKsFeh(m, -0.2));
+    }
+    for (const m of [3.99, 11.01, Number.NaN]) {
+      expect(massOverWholeRange(m)).toBeNaN();
+      expect(massFehOverWholeRange(m, 0)).toBeNaN();
+    }
+    for (const feh of [-0.61, 0.41, Number.NaN]) expect(massFehOverWholeRange(7, feh)).toBeNaN();
+  });
+
+  /** README of the authors' program: GJ 1214 0.1803 ± 0.0047 and TRAPPIST-1 0.0898 ± 0.0023, from the full posterior. */
+  test.each([
+    ["GJ 1214", 8.782, 1000 / 14.55, 0.1803, 0.1825, 0.1806],
+    ["TRAPPIST-1", 10.296, 80.4512, 0.0898, 0.0909, 0.0897],
+  ])("%s is within 1.5 percent of its authors' mass", (_, ks, parallax, printed, byEq4, byEq5) => {
+    const absKs = ks + 5 - 5 * Math.log10(1000 / parallax);
+    expect(Math.abs(massOverWholeRange(absKs) / printed - 1)).toBeLessThan(0.015);
+    expect(massOverWholeRange(absKs)).toBeCloseTo(byEq4, 4);
+    // The distances are rounded: a unit of the fourth digit.
+    expect(Math.abs(massFehOverWholeRange(absKs, 0) - byEq5)).toBeLessThan(1e-4);
   });
 
   test("nothing outside 4.6 to 9.8 and outside the metallicities of the samples", () => {
