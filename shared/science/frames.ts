@@ -1,7 +1,7 @@
 import { isLatitude, latitudeOf, longitudeOf, RADIANS_PER_DEGREE } from "./angles.ts";
 
 /** A rotation of the axes, row by row. */
-export type Rotation = readonly [number, number, number, number, number, number, number, number, number];
+type Rotation = readonly [number, number, number, number, number, number, number, number, number];
 
 /**
  * ICRS to galactic: ESA 1997, SP-1200, vol. 1, eq. 1.5.11. North galactic pole at α 192.85948°, δ 27.12825°; galactic
@@ -13,7 +13,7 @@ const GALACTIC: Rotation = [
 ];
 
 /** Mean obliquity of J2000.0, degrees: 84381.406″ (Capitaine, Wallace & Chapront 2003, A&A 412, 567; IAU 2006). */
-export const J2000_OBLIQUITY = 84_381.406 / 3600;
+const J2000_OBLIQUITY = 84_381.406 / 3600;
 
 /** A rotation about the x axis, which points to the equinox, by an obliquity in degrees: equatorial to ecliptic. */
 const aboutEquinox = (obliquity: number): Rotation => {
@@ -35,7 +35,7 @@ const FROM_ECLIPTIC = inverse(ECLIPTIC);
  *
  * @param target receives the longitude (0 ≤ longitude < 360) at 0 and the latitude at 1
  */
-export const rotate = (target: Float64Array, m: Rotation, longitude: number, latitude: number): void => {
+const rotate = (target: Float64Array, m: Rotation, longitude: number, latitude: number): void => {
   const b = isLatitude(latitude) ? latitude * RADIANS_PER_DEGREE : Number.NaN;
   const l = longitude * RADIANS_PER_DEGREE;
   const cos = Math.cos(b);

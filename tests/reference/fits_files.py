@@ -105,6 +105,16 @@ def masked(path):
     return {"columns": write(table, path)}
 
 
+def masked_unsigned(path):
+    """astropy writes TNULL of unsigned columns as the number that it stands for, not as what is stored."""
+    rows = 20
+    table = Table(masked=True)
+    for dtype in ["u2", "u4", "u8"]:
+        table[dtype] = MaskedColumn(np.arange(rows).astype(dtype), mask=np.arange(rows) % 4 == 0)
+    write(table, path)
+    return {"columns": [], "masked": rows // 4 * 3}
+
+
 def unicode_texts(path):
     names = ["Müller", "日本の星", "α Cen", "plain", "", "É", "𝛼"]
     table = Table({"name": np.array([name.encode("utf-8") for name in names]), "n": np.arange(len(names))})
@@ -112,16 +122,29 @@ def unicode_texts(path):
 
 
 def scaled(path):
-    stored = np.array([-32768, -99, 0, 1, 32767])
+    """astropy cannot scale back with this numpy; it writes the stored numbers, and their scales go in afterwards."""
+    stored = [-32768, -99, 0, 1, 32767]
     columns = [
-        fits.Column("i", "I", bscale=0.01, bzero=20.0, array=20.0 + 0.01 * stored),
-        fits.Column("j", "J", bscale=2.0, bzero=-7.0, array=2.0 * stored - 7.0),
-        fits.Column("signed", "B", bzero=-128, array=np.array([-128.0, -1.0, 0.0, 1.0, 127.0])),
-        fits.Column("k", "K", bscale=0.5, bzero=1.0, array=np.array([1.5, -3.0, 0.0, 2.0**40, 7.0])),
-        fits.Column("e", "E", bscale=0.5, bzero=1.0, array=np.array([1.5, -3.0, 0.0, 2.0**40, 7.0])),
+        fits.Column("i", "I", array=np.array(stored)),
+        fits.Column("j", "J", array=np.array(stored)),
+        fits.Column("signed", "B", array=np.array([0, 1, 127, 128, 255])),
+        fits.Column("k", "K", array=np.array(stored) * 2**30),
+        fits.Column("e", "E", array=np.array(stored) / 7),
+        fits.Column("d", "D", array=np.array(stored) / 7),
         fits.Column("bits", "X", array=np.array([[1], [0], [1], [1], [0]], bool)),
     ]
-    fits.BinTableHDU.from_columns(columns).writeto(path, overwrite=True)
+    scales = [(0.01, 20.0), (2.0, -7.0), (1, -128), (0.5, 0), (0.5, 1.0), (1e10, -3.0)]
+    hdu = fits.BinTableHDU.from_columns(columns)
+    for place, (scale, zero) in enumerate(scales, 1):
+        hdu.header[f"XSCAL{place}"] = scale
+        # astropy stumbles over a zero point of scaled 64-bit numbers.
+        if zero != 0:
+            hdu.header[f"XZERO{place}"] = zero
+    hdu.writeto(path, overwrite=True)
+    with open(path, "r+b") as file:
+        content = file.read().replace(b"XSCAL", b"TSCAL").replace(b"XZERO", b"TZERO")
+        file.seek(0)
+        file.write(content)
     table = Table.read(path, format="fits")
     table["bits"] = np.array(table["bits"]).reshape(-1)
     return {"columns": columns_of(table)}
@@ -134,7 +157,7 @@ def arrays(path):
     ragged = np.empty(rows, object)
     ragged[:] = [random.normal(size=length).astype("f4") for length in lengths]
     words = np.empty(rows, object)
-    words[:] = [np.array(list("word"[: length % 5])) for length in lengths]
+    words[:] = [np.array(list("words"[: length + 1])) for length in lengths]
     columns = [
         fits.Column("first", "J", array=np.arange(rows)),
         fits.Column("ragged", "PE()", array=ragged),
@@ -213,6 +236,7 @@ FILES = [
     many_rows,
     many_columns,
     masked,
+    masked_unsigned,
     unicode_texts,
     scaled,
     arrays,

@@ -6,7 +6,7 @@ import sys
 import erfa
 import numpy as np
 from astropy import units as u
-from astropy.constants import iau2015
+from astropy.constants import codata2018, iau2015
 from astropy.coordinates import (
     AltAz,
     BarycentricMeanEcliptic,
@@ -26,11 +26,14 @@ iers.conf.iers_degraded_accuracy = "ignore"
 
 
 def constants(rows):
-    """R_sun, GM_sun, R_earth, R_jup, au (SI units), M_bol of the Sun, au in R_sun."""
-    sun = iau2015
-    values = [sun.R_sun.si.value, sun.GM_sun.si.value, sun.R_earth.si.value, sun.R_jup.si.value]
-    bolometric = -2.5 * np.log10(sun.L_sun.si.value / iau2015.L_bol0.si.value)
-    return [values + [u.au.to(u.m), bolometric, u.au.to(u.m) / sun.R_sun.si.value]]
+    """The nominal constants of IAU 2015, then those of CODATA 2018, in SI units; last, M_bol of the Sun."""
+    nominal = [
+        getattr(iau2015, name)
+        for name in "R_sun GM_sun L_sun R_earth GM_earth R_jup GM_jup au pc L_bol0".split()
+    ]
+    measured = [getattr(codata2018, name) for name in "c h k_B sigma_sb G".split()]
+    bolometric = -2.5 * np.log10(iau2015.L_sun / iau2015.L_bol0).value
+    return [[constant.si.value for constant in nominal + measured] + [bolometric]]
 
 
 def distances(rows):

@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { neighbourLight, wingRadius } from "#shared/science/crowding.ts";
+import { wingRadius } from "#shared/science/crowding.ts";
 import { CUSTOMARY_LIMITS, moonClass } from "#shared/science/customary-limits.ts";
 
 test("moonlight has three classes", () => {
@@ -18,11 +18,6 @@ test("moonlight has three classes", () => {
 
 test("twilights are 6° apart by definition", () => {
   expect(CUSTOMARY_LIMITS.twilight).toEqual({ civil: -6, nautical: -12, astronomical: -18 });
-});
-
-test("a neighbour five magnitudes fainter adds a hundredth of the light", () => {
-  expect(neighbourLight(5)).toBeCloseTo(CUSTOMARY_LIMITS.neighbourLight, 15);
-  expect(neighbourLight(0)).toBe(1);
 });
 
 test("the wings of a star five magnitudes brighter reach ten times as far", () => {
