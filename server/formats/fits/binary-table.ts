@@ -136,15 +136,45 @@ const readWhole = (code: WholeCode, offset: number, blank: bigint | null, scale:
   return (block) => applyScale(read(block, offset, mark), scale.scale, scale.zero);
 };
 
+/**
+ * Some programs write TNULL of an unsigned column as the number itself, not as what is stored for it. The standard is
+ * followed, and a number that would be blank by the other reading is asked about.
+ */
+const watchMark = (read: Read, { header, place, findings }: Field, blank: bigint): Read => {
+  const name = columnName(header, place);
+  const number = Number(blank);
+  const text = String(blank);
+  return (block) => {
+    const values = read(block);
+    for (let row = 0; row < block.rows; row++)
+      if (values[row] === number || values[row] === text) askMark(text, name, block.firstRow + row, findings);
+    return values;
+  };
+};
+
+const askMark = (mark: string, name: string, row: number, findings: Findings): void =>
+  findings.add(
+    {
+      key: "fits-unsigned-null",
+      level: "ask",
+      message:
+        "Columns of unsigned numbers hold the very number that their TNULL names. By the rules of the format TNULL means what is stored, which is another number, but not all programs keep to that.",
+      hint: "If the number stands for no value, add it to the column's marks of a blank.",
+    },
+    `row ${row}, ${name}: ${mark}`,
+  );
+
 const wholeReader = (field: Field, code: WholeCode): ColumnReader | null => {
   const { header, place, offset, findings } = field;
   const scale = readScale(header, place);
   if (!scale) return leaveOut("scale", header, place, findings);
   const blank = blankOf(field, code);
+  const read = readWhole(code, offset, blank, scale);
+  const isUnsigned = scale.shift !== null && scale.shift > 0n;
   return {
     column: describeColumn(header, place, typeOfWhole(code, scale), blank === null ? null : String(blank)),
     bytes: field.form.bytes,
-    read: readWhole(code, offset, blank, scale),
+    read: isUnsigned && blank !== null ? watchMark(read, field, blank) : read,
   };
 };
 

@@ -81,6 +81,32 @@ describe("a binary table", () => {
     expect(cells[4]).toEqual(["", "9223372036854775809"]);
   });
 
+  test("asks about numbers that equal the TNULL of an unsigned column, which is a stored value", async () => {
+    const { cells, findings } = await readFits(
+      binaryFile([
+        {
+          name: "u2",
+          form: "I",
+          keywords: { TNULL: 99, TZERO: 32768 },
+          cells: [int16(99), int16(99 - 32768)],
+        },
+        {
+          name: "u8",
+          form: "K",
+          keywords: { TNULL: 7, TZERO: 2n ** 63n },
+          cells: [int64(7n), int64(7n - 2n ** 63n)],
+        },
+      ]),
+    );
+    expect(cells).toEqual([
+      [Number.NaN, 99],
+      ["", "7"],
+    ]);
+    expect(findings).toMatchObject([
+      { key: "fits-unsigned-null", level: "ask", examples: ["row 2, u2: 99", "row 2, u8: 7"] },
+    ]);
+  });
+
   test("reads logical values and bits as words, and a null byte as blank", async () => {
     const { types, cells, findings } = await readFits(
       binaryFile([
