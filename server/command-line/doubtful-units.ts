@@ -25,6 +25,9 @@ const LARGEST_PARALLAX_ARCSEC = 0.8;
 const LARGEST_MOTION_ARCSEC = 10.5;
 const COLDEST_K = 500;
 
+/** Beyond it no single star of a survey stands (common practice, no source). */
+const FARTHEST_KPC = 30;
+
 const motion: Doubt = {
   fitsBeyond: LARGEST_MOTION_ARCSEC,
   units: ["mas.yr-1", "arcsec.yr-1"],
@@ -39,6 +42,11 @@ const DOUBTS: Readonly<Record<string, Doubt>> = {
   },
   pmra: motion,
   pmdec: motion,
+  distance: {
+    fitsBeyond: FARTHEST_KPC,
+    units: ["pc", "kpc"],
+    why: "Stars are seen up to some 30 kpc away, so larger values would have been pc; all of these are smaller",
+  },
   teff: {
     fitsBeyond: COLDEST_K,
     units: ["K", "kK"],

@@ -1,4 +1,5 @@
 import { DERIVE_HELP, derive } from "./derive.ts";
+import { PRECISION_HELP, precision } from "./precision.ts";
 import { type Surroundings, write } from "./surroundings.ts";
 import { EXIT, exitCode, isClosedPipe, troubleText, usage } from "./trouble.ts";
 
@@ -9,12 +10,15 @@ interface Command {
 
 const COMMANDS: Readonly<Record<string, Command>> = {
   derive: { run: derive, help: DERIVE_HELP },
+  precision: { run: precision, help: PRECISION_HELP },
 };
 
 const HELP = `Works out what a transit survey can do with a star, without a server and without a database.
 
   shortlight derive FILE --card CARD --campaign CAMPAIGN
       every derived column of every star of an extract, with its error and the reason where it is blank
+  shortlight precision --diameters LIST --exposures LIST --magnitude M
+      how precisely a star can be measured, by diameter of the aperture and time
 
   shortlight COMMAND --help says more of each.
 

@@ -18,7 +18,8 @@ export interface Draft {
 }
 
 const failed = (path: string, error: unknown): unknown => {
-  const why = systemWords(error);
+  const isFolderMissing = error instanceof Error && "code" in error && error.code === "ENOENT";
+  const why = isFolderMissing ? "its folder does not exist" : systemWords(error);
   return why === undefined
     ? error
     : unprocessable("not-written", `The file ${path} cannot be written: ${why}.`, {
