@@ -8,6 +8,8 @@ export default defineConfig({
     restoreMocks: true,
     // Set here and not in a project: pool ids are unique only under a maximum that all projects share.
     maxWorkers: 2,
+    // Far above what a test takes: a busy machine is no failure.
+    testTimeout: 60_000,
     reporters: ["default"],
     projects: [
       {

@@ -1,7 +1,7 @@
 import { blankCode, PRESENT } from "#shared/catalogue/blank-reasons.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
 import { detectableRadius, leastTransits, transitsInCampaign } from "#shared/science/detection.ts";
-import { brightestUsable, noiseInOneHour } from "#shared/science/noise.ts";
+import { brightestUsable, noiseInOneHour, noiseParts } from "#shared/science/noise.ts";
 import { scaledAxis } from "#shared/science/orbit.ts";
 import type { RecipeSettings } from "#shared/science/recipes.ts";
 
@@ -9,9 +9,11 @@ import type { RecipeSettings } from "#shared/science/recipes.ts";
 export interface AssessedStar {
   /** Magnitude in the passband of the card, mag. */
   magnitude: number;
-  /** R☉ and its error. */
+  magnitudeError: number;
+  /** R☉. */
   radius: number;
-  radiusError: number;
+  /** Relative error of R★ T^(−1/4), by which the smallest planet scales. */
+  reachError: number;
   /** Orbit where the insolation is Earth's: au and days. */
   earthDistance: number;
   earthPeriod: number;
@@ -84,7 +86,7 @@ export const assessStar = (
   const { radius, lightShare, earthPeriod, duration } = star;
   result.rMin = detectableRadius(
     campaign,
-    recipe.duration,
+    recipe,
     radius,
     result.noise1h,
     lightShare,
@@ -93,7 +95,18 @@ export const assessStar = (
     scaledAxis(star.earthDistance, radius),
     duration,
   );
-  // R_min ∝ R★; the noise carries no error of its own, and the duration enters by its fourth root.
-  result.rMinError = (result.rMin * star.radiusError) / radius;
+  result.rMinError = result.rMin * Math.hypot(star.reachError, 0.5 * noiseError(star, card, result.noise1h));
   return result;
 };
+
+/** Half the step of magnitude over which the noise is seen to change, mag. */
+const STEP_MAG = 0.01;
+
+/** Relative error of the noise by that of the magnitude; a magnitude without one counts as exact, as the card does. */
+const noiseError = (star: AssessedStar, card: CardSettings, noise: number): number =>
+  star.magnitudeError > 0 ? (noiseSlope(card, star.magnitude) * star.magnitudeError) / noise : 0;
+
+/** ppm per mag. */
+const noiseSlope = (card: CardSettings, magnitude: number): number =>
+  (noiseParts(card, magnitude + STEP_MAG).total - noiseParts(card, magnitude - STEP_MAG).total) /
+  (2 * STEP_MAG);

@@ -1,3 +1,5 @@
+import { REACH_ERROR_KEY } from "#server/derive/star-columns.ts";
+import { errorKey } from "#shared/catalogue/columns.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
 import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { type AssessedStar, assessStar, newAssessment } from "./assess.ts";
@@ -19,8 +21,9 @@ export interface InstrumentColumns {
 /** Keys of the columns to read for that card. */
 export const assessedKeys = (card: CardSettings): readonly string[] => [
   card.passband,
+  errorKey(card.passband),
   "radius",
-  "radius_err",
+  REACH_ERROR_KEY,
   "earth_distance",
   "earth_period",
   "transit_duration",
@@ -40,13 +43,14 @@ const allocate = (length: number): InstrumentColumns => ({
 /** Fills `star` with the values of one row. */
 const reader = (columns: AssessedColumns, card: CardSettings, star: AssessedStar) => {
   const none = new Float64Array(0);
-  const [magnitude, radius, radiusError, distance, period, duration, share] = assessedKeys(card).map(
-    (key) => columns[key] ?? none,
-  );
+  const [magnitude, magnitudeError, radius, reachError, distance, period, duration, share] = assessedKeys(
+    card,
+  ).map((key) => columns[key] ?? none);
   return (i: number): void => {
     star.magnitude = magnitude?.[i] ?? Number.NaN;
+    star.magnitudeError = magnitudeError?.[i] ?? Number.NaN;
     star.radius = radius?.[i] ?? Number.NaN;
-    star.radiusError = radiusError?.[i] ?? Number.NaN;
+    star.reachError = reachError?.[i] ?? Number.NaN;
     star.earthDistance = distance?.[i] ?? Number.NaN;
     star.earthPeriod = period?.[i] ?? Number.NaN;
     star.duration = duration?.[i] ?? Number.NaN;
@@ -56,8 +60,9 @@ const reader = (columns: AssessedColumns, card: CardSettings, star: AssessedStar
 
 const blankStar = (): AssessedStar => ({
   magnitude: Number.NaN,
+  magnitudeError: Number.NaN,
   radius: Number.NaN,
-  radiusError: Number.NaN,
+  reachError: Number.NaN,
   earthDistance: Number.NaN,
   earthPeriod: Number.NaN,
   duration: Number.NaN,

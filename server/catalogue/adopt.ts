@@ -22,6 +22,7 @@ const TOGETHER: readonly Group[] = [
   group(["ra", "dec"], ["epoch"]),
   group(["pmra", "pmdec"], ["pmra_err", "pmdec_err"]),
   group(["teff_given"], ["teff_given_err"]),
+  group(["distance_given"], ["distance_given_err"]),
 ];
 const inTogether = new Set(TOGETHER.flatMap((g) => g.takes));
 

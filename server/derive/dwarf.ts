@@ -3,10 +3,8 @@ import {
   DWARF_LEAST_LOGG,
   mainSequenceAbsG,
 } from "#shared/science/main-sequence.ts";
+import type { RecipeSettings } from "#shared/science/recipes.ts";
 import type { Scratch } from "./scratch.ts";
-
-/** Hotter stars take their radius from light and temperature even where M_Ks would allow the relation, K. */
-const HOTTEST_COOL_DWARF_K = 4200;
 
 /** A low gravity or a place above the main sequence rules a dwarf out. With neither known it cannot be told. */
 export const judgeDwarf = (star: Scratch): void => {
@@ -15,5 +13,12 @@ export const judgeDwarf = (star: Scratch): void => {
   star.isDwarf = !star.isNotDwarf && (star.hasLogg || star.absG >= brightest);
 };
 
-/** Whether the relations for cool dwarfs may serve; a star of unknown temperature is judged by M_Ks alone. */
-export const isCool = (star: Scratch): boolean => !star.isNotDwarf && !(star.teff > HOTTEST_COOL_DWARF_K);
+/**
+ * Whether the relations for cool dwarfs may serve, within the recipe's magnitudes; a star of unknown temperature is judged
+ * by M_Ks alone.
+ */
+export const isCool = (star: Scratch, { ranges }: RecipeSettings): boolean =>
+  !star.isNotDwarf &&
+  !(star.teff > ranges.hottestCoolDwarfK) &&
+  star.absKs >= ranges.brightestAbsKs &&
+  star.absKs <= ranges.faintestAbsKs;

@@ -17,9 +17,12 @@ export const SOURCE = {
   radius: 7,
   mass: 8,
   light: 9,
+  extinction: 10,
 } as const;
 
-const SOURCES = 10;
+export type SourceName = keyof typeof SOURCE;
+
+const SOURCES = 11;
 
 export type ErrorVector = Float64Array;
 
@@ -50,14 +53,30 @@ export const relativeError = (vector: ErrorVector): number => {
 /** Change of an absolute magnitude per relative change of the parallax, mag. */
 export const PER_PARALLAX = 5 / Math.LN10;
 
-/** Sets `target` to the vector of a quantity that changes by `slope` (relative) per magnitude of M_Ks. */
-export const setKsErrors = (
+/** What of a star's magnitude is not sure. */
+interface MagnitudeErrors {
+  /** Relative error of the distance. */
+  readonly distanceError: number;
+  /** Error of E(B − V), mag. */
+  readonly ebvError: number;
+}
+
+/**
+ * Sets `target` to the vector of a quantity that changes by `slope` (relative) per magnitude of an absolute magnitude.
+ *
+ * @param own source of the apparent magnitude, and its error, mag
+ * @param perExcess extinction in the band per E(B − V)
+ */
+export const setMagnitudeErrors = (
   target: ErrorVector,
   slope: number,
-  parallaxError: number,
-  ksError: number,
+  star: MagnitudeErrors,
+  own: number,
+  ownError: number,
+  perExcess: number,
 ): void => {
   target.fill(0);
-  target[SOURCE.parallax] = slope * PER_PARALLAX * parallaxError;
-  target[SOURCE.ks] = slope * ksError;
+  target[SOURCE.parallax] = slope * PER_PARALLAX * star.distanceError;
+  target[own] = slope * ownError;
+  target[SOURCE.extinction] = -slope * perExcess * star.ebvError;
 };

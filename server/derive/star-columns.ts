@@ -1,13 +1,15 @@
 import { METHOD_KEYS } from "#server/database/star-table.ts";
 import { blankKey, type Column, columnsOf, errorKey } from "#shared/catalogue/columns.ts";
 
-/** The numeric keys of one row of given values; temperature stands apart as `teff_given`. NaN is "not given". */
+/** The numeric keys of one row of given values; temperature and distance stand apart as `…_given`. NaN is "not given". */
 export const GIVEN_KEYS: readonly string[] = [
   ...columnsOf("given").flatMap((c: Column) =>
     c.kind === "text" ? [] : c.hasError ? [c.key, errorKey(c.key)] : [c.key],
   ),
   "teff_given",
   "teff_given_err",
+  "distance_given",
+  "distance_given_err",
 ];
 
 /**
@@ -33,6 +35,9 @@ export const STELLAR_KEYS = [
   "earth_depth",
 ] as const;
 
+/** Relative error of R★ T^(−1/4), kept for the error of the smallest planet: it scales by that. */
+export const REACH_ERROR_KEY = "reach_err";
+
 export type StellarKey = (typeof STELLAR_KEYS)[number];
 
 /** Columns of one length by key. */
@@ -56,9 +61,9 @@ export const allocateGiven = (length: number): Columns =>
 export const allocateStellar = (length: number): StellarColumns => ({
   length,
   values: Object.fromEntries(
-    STELLAR_KEYS.flatMap((key) => [
-      [key, new Float64Array(length).fill(Number.NaN)],
-      [errorKey(key), new Float64Array(length).fill(Number.NaN)],
+    [...STELLAR_KEYS.flatMap((key) => [key, errorKey(key)]), REACH_ERROR_KEY].map((key) => [
+      key,
+      new Float64Array(length).fill(Number.NaN),
     ]),
   ),
   blanks: Object.fromEntries(STELLAR_KEYS.map((key) => [blankKey(key), new Uint8Array(length)])),

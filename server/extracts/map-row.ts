@@ -36,8 +36,8 @@ const [RA, DEC, EPOCH, SOURCE, DESIGNATION, RELEASE] = [
   at("release"),
 ];
 
-/** Temperature as given is kept apart from what the recipe makes of it. */
-const storedKey = (means: string): string => means.replace(/^teff/, "teff_given");
+/** Temperature and distance as given are kept apart from what the recipe makes of them. */
+const storedKey = (means: string): string => means.replace(/^(teff|distance)/, "$1_given");
 
 const cellsOf = (plan: ReadingPlan): Cell[] =>
   plan.columns

@@ -1,4 +1,6 @@
 import { type AssessedStar, type Assessment, assessStar, newAssessment } from "#server/assess/assess.ts";
+import { REACH_ERROR_KEY } from "#server/derive/star-columns.ts";
+import { errorKey } from "#shared/catalogue/columns.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
 import type { RecipeSettings } from "#shared/science/recipes.ts";
 
@@ -20,8 +22,9 @@ const ANY_CAMPAIGN: CampaignSettings = {
 
 export const assessedStar = (value: (key: string) => number, card: CardSettings): AssessedStar => ({
   magnitude: value(card.passband),
+  magnitudeError: value(errorKey(card.passband)),
   radius: value("radius"),
-  radiusError: value("radius_err"),
+  reachError: value(REACH_ERROR_KEY),
   earthDistance: value("earth_distance"),
   earthPeriod: value("earth_period"),
   duration: value("transit_duration"),

@@ -72,7 +72,13 @@ export const rowPresenter = (resolved: ResolvedView): ((row: StoredStar) => Omit
   };
 };
 
-const ENTRY_KEYS = [...GIVEN.flatMap((c) => [c.key, errorKey(c.key)]), "teff_given", "teff_given_err"];
+const ENTRY_KEYS = [
+  ...GIVEN.flatMap((c) => [c.key, errorKey(c.key)]),
+  "teff_given",
+  "teff_given_err",
+  "distance_given",
+  "distance_given_err",
+];
 
 export const presentEntry = (entry: StoredEntry) => ({
   extractId: String(entry.extract_id),
@@ -85,8 +91,8 @@ export const presentEntry = (entry: StoredEntry) => ({
   values: Object.fromEntries(
     ENTRY_KEYS.flatMap((key): [string, number][] => {
       const value = entry[key];
-      // What extracts give as a temperature is the given value of the column of that name.
-      return isNumber(value) ? [[key.replace("teff_given", "teff"), value]] : [];
+      // What extracts give as a temperature or distance is the given value of the column of that name.
+      return isNumber(value) ? [[key.replace("_given", ""), value]] : [];
     }),
   ),
 });

@@ -174,6 +174,13 @@ export const BLANK_REASONS = [
     "out of range",
     "The given values lead to no finite number; one of them is far from what a star can have.",
   ),
+  reason(
+    29,
+    "outside-extinction",
+    "out-of-range",
+    "out of range",
+    "The colour excess is negative, or the colour lies outside the range in which the extinction law has coefficients.",
+  ),
 ] as const satisfies readonly BlankReason[];
 
 export type BlankKey = (typeof BLANK_REASONS)[number]["key"];

@@ -276,6 +276,17 @@ export const COLUMNS = [
   ),
   column(
     "given",
+    "brightness",
+    "ebv",
+    "E(B − V)",
+    ["mag", "mag"],
+    "phot.color.excess;em.opt.B;em.opt.V",
+    3,
+    "Colour excess by dust between the star and the Sun",
+    withError,
+  ),
+  column(
+    "given",
     "flags",
     "ruwe",
     "RUWE",
@@ -314,7 +325,7 @@ export const COLUMNS = [
     ["pc", "pc"],
     "pos.distance",
     2,
-    "Distance by inversion of a parallax known to 10 % or better",
+    "Distance: as given, else from the parallax by the recipe",
     { ...withError, logAxis: true },
   ),
   column(

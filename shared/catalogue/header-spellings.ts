@@ -1,6 +1,6 @@
 import { type Column, columnsOf, errorKey } from "./columns.ts";
 
-/** What a column of a file can mean: a given quantity, the temperature, or the error of one of them. */
+/** What a column of a file can mean: a given quantity, the temperature, the distance, or the error of one of them. */
 export interface Meaning {
   readonly key: string;
   readonly label: string;
@@ -27,7 +27,7 @@ const meaningsOf = (c: Column): Meaning[] => {
 export const MEANINGS: readonly Meaning[] = [
   ...columnsOf("given").flatMap(meaningsOf),
   ...columnsOf("stellar")
-    .filter((c) => c.key === "teff")
+    .filter((c) => c.key === "teff" || c.key === "distance")
     .flatMap(meaningsOf),
 ];
 
@@ -74,6 +74,10 @@ const SPELLINGS: Readonly<Record<string, string>> = {
   ruwe: "ruwe",
   light_share: "light_share lightshare contamination_share target_fraction flux_fraction",
   teff: "teff t_eff teff_gspphot teffective temperature effective_temperature teff_k",
+  distance: "distance dist distance_pc dist_pc r_est rgeo r_med_geo",
+  distance_err: "distance_err e_distance distance_error dist_err e_dist dist_error",
+  ebv: "ebv e(b-v) e_b_v color_excess colour_excess reddening",
+  ebv_err: "ebv_err e_ebv ebv_error e_e(b-v)",
   teff_err: "teff_err e_teff teff_error eteff teff_unc sigma_teff",
 };
 

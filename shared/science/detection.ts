@@ -11,7 +11,7 @@ export const transitsInCampaign = (campaign: CampaignSettings, periodDays: numbe
   Math.floor(((campaign.lengthDays * campaign.duty) / periodDays) * (1 + ROUNDING));
 
 /**
- * Radius of the smallest planet found, Earth radii: `R★ √(SNR σ_T / (√N share))`, with `σ_T = σ₁ₕ / √T` (white noise).
+ * Radius of the smallest planet found, Earth radii: `R★ √(SNR σ_T / (√N share boost))`, with `σ_T = σ₁ₕ / √T` (white noise).
  *
  * @param radiusSolar radius of the star, R☉
  * @param snrLimit signal-to-noise ratio of a detection
@@ -19,6 +19,7 @@ export const transitsInCampaign = (campaign: CampaignSettings, periodDays: numbe
  * @param transits N
  * @param durationHours time that carries the signal, h: the whole transit for a box
  * @param lightShare F_target / F_total
+ * @param boost depth over k² by limb darkening; 1 leaves it out
  * @see Jenkins 2002, ApJ 575, 493, for the multiple-event statistic that it inverts
  * @example smallestPlanet(1, 7.1, 50, 4, 1, 1) // 1.4532 to 4 digits
  */
@@ -29,10 +30,11 @@ export const smallestPlanet = (
   transits: number,
   durationHours: number,
   lightShare: number,
+  boost = 1,
 ): number =>
   EARTH_RADII_PER_SOLAR *
   radiusSolar *
-  Math.sqrt((snrLimit * noise1hPpm * 1e-6) / (Math.sqrt(transits * durationHours) * lightShare));
+  Math.sqrt((snrLimit * noise1hPpm * 1e-6) / (Math.sqrt(transits * durationHours) * lightShare * boost));
 
 /**
  * Time that carries the signal of a trapezoid, in the unit of the period: `(T14 + 2 T23) / 3`.
@@ -44,6 +46,12 @@ export const trapezoidDuration = (period: number, a: number, k: number, b: numbe
 
 /** Least transits with which a planet counts as found: at least one, whatever the campaign asks. */
 export const leastTransits = (campaign: CampaignSettings): number => Math.max(1, campaign.leastTransits);
+
+/** How a signal is weighed: the recipe may overrule the campaign. */
+export const statisticOf = (
+  campaign: CampaignSettings,
+  { statistic }: RecipeSettings,
+): CampaignSettings["statistic"] => (statistic === "campaign" ? campaign.statistic : statistic);
 
 /** Impact parameter of the mean chord, √(1 − (π/4)²). */
 const MEAN_CHORD_IMPACT = Math.sqrt(1 - MEAN_CHORD ** 2);
@@ -59,7 +67,7 @@ const MEAN_CHORD_IMPACT = Math.sqrt(1 - MEAN_CHORD ** 2);
  */
 export const detectableRadius = (
   campaign: CampaignSettings,
-  duration: RecipeSettings["duration"],
+  recipe: RecipeSettings,
   radiusSolar: number,
   noise1hPpm: number,
   lightShare: number,
@@ -70,8 +78,8 @@ export const detectableRadius = (
 ): number => {
   const share = Number.isNaN(lightShare) ? 1 : lightShare;
   const box = smallestPlanet(radiusSolar, campaign.snrLimit, noise1hPpm, transits, boxHours, share);
-  if (campaign.statistic === "boxcar") return box;
-  const b = duration === "central" ? 0 : MEAN_CHORD_IMPACT;
+  if (statisticOf(campaign, recipe) === "boxcar") return box;
+  const b = recipe.duration === "central" ? 0 : MEAN_CHORD_IMPACT;
   const hours = trapezoidDuration(24 * periodDays, a, box / (EARTH_RADII_PER_SOLAR * radiusSolar), b);
   return smallestPlanet(radiusSolar, campaign.snrLimit, noise1hPpm, transits, hours, share);
 };

@@ -49,7 +49,7 @@ export const reachByPeriod = (
     const { radius, lightShare } = star;
     const rMin = detectableRadius(
       campaign,
-      recipe.duration,
+      recipe,
       radius,
       noise,
       lightShare,

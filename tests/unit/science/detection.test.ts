@@ -2,7 +2,14 @@ import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import type { CampaignSettings, FormulaCard } from "#shared/science/cards.ts";
 import { detectableRadius, smallestPlanet, transitsInCampaign } from "#shared/science/detection.ts";
-import { lightShareOfPair, radiusFactor } from "#shared/science/light-share.ts";
+import {
+  lightShareFromOthers,
+  lightShareOfMany,
+  lightShareOfPair,
+  othersFromLightShare,
+  radiusFactor,
+  undilutedDepth,
+} from "#shared/science/light-share.ts";
 import { reachByPeriod } from "#shared/science/reach.ts";
 import { PRACTICE_RECIPE } from "#shared/science/recipes.ts";
 import { transitDuration } from "#shared/science/transit.ts";
@@ -27,6 +34,11 @@ describe("smallest planet", () => {
     expect(smallestPlanet(radius, 7.1, noise, transits, 1, share)).toBeCloseTo(expected, 5);
   });
 
+  test("limb darkening deepens a transit, and so finds a smaller planet", () => {
+    expect(smallestPlanet(1, 7.1, 50, 4, 1, 1, 1.18)).toBeCloseTo(1.337793, 5);
+    expect(smallestPlanet(0.12, 7.1, 1000, 30, 1, 0.7, 1.15618)).toBeCloseTo(0.52384, 5);
+  });
+
   test("an Earth in 13.09548 hours at 20 ppm in 6.5 hours, four times: a statistic of 11.930", () => {
     const noise1h = 20 * Math.sqrt(6.5);
     expect(smallestPlanet(1, 11.93, noise1h, 4, 13.09548, 1)).toBeCloseTo(1, 4);
@@ -38,7 +50,7 @@ describe("smallest planet", () => {
     const of = (statistic: CampaignSettings["statistic"]) =>
       detectableRadius(
         { ...CAMPAIGN, statistic },
-        "central",
+        PRACTICE_RECIPE.settings,
         radius,
         noise,
         Number.NaN,
@@ -81,7 +93,31 @@ describe("light share", () => {
   });
 
   test("a share outside 0 to 1 has no factor", () => {
-    for (const share of [0, -0.1, 1.01, Number.NaN]) expect(radiusFactor(share)).toBeNaN();
+    for (const share of [0, -0.1, 1.01, Number.NaN]) {
+      expect(radiusFactor(share)).toBeNaN();
+      expect(undilutedDepth(100, share)).toBeNaN();
+      expect(othersFromLightShare(share)).toBeNaN();
+    }
+    expect(lightShareFromOthers(-0.1)).toBeNaN();
+  });
+
+  test("several neighbours add their light", () => {
+    expect(lightShareOfMany([])).toBe(1);
+    expect(lightShareOfMany([1.5])).toBeCloseTo(lightShareOfPair(1.5), 12);
+    expect(lightShareOfMany([0, 0, 0])).toBeCloseTo(0.25, 12);
+    expect(lightShareOfMany([1, Number.NaN])).toBeNaN();
+  });
+
+  test("depth grows as the square of the radius factor; both ratios convert into each other", () => {
+    const share = fc.double({ min: 0.01, max: 1, noNaN: true });
+    fc.assert(
+      fc.property(share, (s) => {
+        expect(undilutedDepth(100, s)).toBeCloseTo(100 * radiusFactor(s) ** 2, 8);
+        expect(lightShareFromOthers(othersFromLightShare(s))).toBeCloseTo(s, 12);
+      }),
+    );
+    // A transit on the fainter of two stars, 2 mag apart: its own share counts, and the depth is 7.3 times as seen (computed).
+    expect(undilutedDepth(1, lightShareOfPair(-2))).toBeCloseTo(7.31, 2);
   });
 });
 
@@ -114,7 +150,9 @@ describe("reach by period", () => {
   test("an orbit inside the star and a star outside the card's limits are blank", () => {
     expect(reach([0.001])).toEqual([null]);
     expect(
-      reachByPeriod({ ...star, magnitude: 3 }, card, CAMPAIGN, PRACTICE_RECIPE.settings, [10]).map((p) => p.rMin),
+      reachByPeriod({ ...star, magnitude: 3 }, card, CAMPAIGN, PRACTICE_RECIPE.settings, [10]).map(
+        (p) => p.rMin,
+      ),
     ).toEqual([null]);
   });
 });
