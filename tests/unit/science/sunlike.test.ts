@@ -1,6 +1,5 @@
 import { describe, expect, test } from "vitest";
 import { luminosityFromMagnitude, radiusFromLuminosity } from "#shared/science/luminosity.ts";
-import { mainSequenceAbsG } from "#shared/science/main-sequence.ts";
 import {
   bolometricCorrectionG,
   bolometricCorrectionGSlope,
@@ -124,19 +123,5 @@ describe("mass from Teff, log g and [Fe/H]", () => {
       slopeOf((v) => log(t, g, v), m),
       6,
     );
-  });
-});
-
-describe("mean main sequence", () => {
-  test("rows of the table (Pecaut & Mamajek 2013, version 2024.05.15) and between them", () => {
-    expect(mainSequenceAbsG(0.823)).toBeCloseTo(4.635, 6);
-    expect(mainSequenceAbsG(2.23)).toBeCloseTo(9.29, 6);
-    expect(mainSequenceAbsG(0.377)).toBeCloseTo(2.51, 6);
-    expect(mainSequenceAbsG(3.35)).toBeCloseTo(12.45, 6);
-    expect(mainSequenceAbsG((2.78 + 2.94) / 2)).toBeCloseTo((10.82 + 11.21) / 2, 6);
-  });
-
-  test("outside F0V to M5V there is none", () => {
-    for (const colour of [0.376, 3.351, Number.NaN]) expect(mainSequenceAbsG(colour)).toBeNaN();
   });
 });
