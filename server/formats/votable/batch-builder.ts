@@ -4,6 +4,8 @@ import type { ColumnType, ColumnValues, RefusedRow, RowBatch, TableColumn } from
 const MOST_CELLS = 262_144;
 const MOST_ROWS = 20_000;
 const LEAST_ROWS = 16;
+/** Rows that there is room for at first, so that a small table takes little memory. */
+const FIRST_ROWS = 256;
 /** Characters and refused rows that a batch may hold before it is given out early. */
 const MOST_HELD = 8_000_000;
 const MOST_REFUSED = 1_000;
@@ -21,14 +23,17 @@ export class BatchBuilder {
   private refused: RefusedRow[] = [];
   private numbers: Float64Array[] = [];
   private texts: string[][] = [];
+  /** Rows that there is room for, which grows up to the capacity. */
+  private room: number;
   private readonly capacity: number;
   private readonly isText: readonly boolean[];
-  private readonly noNumbers = new Float64Array(0);
 
   constructor(columns: readonly TableColumn[]) {
     const fitting = Math.floor(MOST_CELLS / Math.max(1, columns.length));
     this.capacity = Math.max(LEAST_ROWS, Math.min(MOST_ROWS, fitting));
+    this.room = Math.min(this.capacity, FIRST_ROWS);
     this.isText = columns.map((column) => isText(column.type));
+    this.numbers = this.isText.map((isTextColumn) => new Float64Array(isTextColumn ? 0 : this.room));
     this.begin();
   }
 
@@ -57,6 +62,7 @@ export class BatchBuilder {
   commit(): void {
     this.rows++;
     this.row++;
+    if (this.rows === this.room && this.rows < this.capacity) this.grow();
   }
 
   refuse(line: number | null, text: string, why: string): void {
@@ -67,23 +73,34 @@ export class BatchBuilder {
   take(bytes: number): RowBatch {
     const columns = this.isText.map(
       (isTextColumn, slot): ColumnValues =>
-        isTextColumn
-          ? (this.texts[slot] as string[]).slice(0, this.rows)
-          : (this.numbers[slot] as Float64Array).slice(0, this.rows),
+        isTextColumn ? this.textsOf(slot) : (this.numbers[slot] as Float64Array).slice(0, this.rows),
     );
     const batch = { rows: this.rows, columns, refused: this.refused, bytes };
     this.begin();
     return batch;
   }
 
+  /** Without the cells of a refused row that was the last. */
+  private textsOf(slot: number): string[] {
+    const texts = this.texts[slot] as string[];
+    texts.length = this.rows;
+    return texts;
+  }
+
   private begin(): void {
     this.rows = 0;
     this.held = 0;
     this.refused = [];
-    const used = this.numbers;
-    this.numbers = this.isText.map((isTextColumn, slot) =>
-      isTextColumn ? this.noNumbers : (used[slot] ?? new Float64Array(this.capacity)),
-    );
-    this.texts = this.isText.map((isTextColumn) => (isTextColumn ? new Array<string>(this.capacity) : []));
+    this.texts = this.isText.map(() => []);
+  }
+
+  private grow(): void {
+    this.room = Math.min(this.capacity, 4 * this.room);
+    this.numbers = this.numbers.map((used, slot) => {
+      if (this.isText[slot]) return used;
+      const larger = new Float64Array(this.room);
+      larger.set(used);
+      return larger;
+    });
   }
 }

@@ -1,5 +1,5 @@
 import type { BatchBuilder } from "./batch-builder.ts";
-import { brokenRow, unreadable } from "./faults.ts";
+import { brokenRow, short, unreadable } from "./faults.ts";
 import { type Field, nameOf, slotsOf } from "./fields.ts";
 import type { Findings } from "./findings.ts";
 import { nullNumber, nullText } from "./null-mark.ts";
@@ -27,14 +27,14 @@ const widthOf = (field: Field, index: number): Width => {
   if (!layout)
     throw unreadable(
       "votable-unknown-width",
-      `The column ${name} has the datatype "${field.datatype}" and the arraysize "${field.arraysize}", which the VOTable standard does not know, so the place of everything after it in a binary row is unknown.`,
+      `The column ${name} has the datatype "${short(field.datatype)}" and the arraysize "${short(field.arraysize)}", which the VOTable standard does not know, so the place of everything after it in a binary row is unknown.`,
       "Get the table in its TABLEDATA form.",
     );
   const { items, varies, dimensions } = layout.size;
   if (varies && dimensions > 1)
     throw unreadable(
       "votable-unclear-count",
-      `The column ${name} has arrays of the size ${field.arraysize}. Programs count the items of such arrays differently in the binary forms, so the place of everything after it is uncertain.`,
+      `The column ${name} has arrays of the size ${short(field.arraysize)}. Programs count the items of such arrays differently in the binary forms, so the place of everything after it is uncertain.`,
       "Get the table without that column, or in its TABLEDATA form.",
     );
   return { bits: layout.bits, bytes: varies ? -1 : Math.ceil((items * layout.bits) / 8) };

@@ -2,7 +2,7 @@ import type { PositionFrame, TableHeader } from "../table.ts";
 import { BatchBuilder } from "./batch-builder.ts";
 import { BinaryRows } from "./binary-rows.ts";
 import type { DataBlock } from "./data-block.ts";
-import { notVotable, unreadable } from "./faults.ts";
+import { notVotable, short, unreadable } from "./faults.ts";
 import { type Field, nameOf } from "./fields.ts";
 import type { Findings } from "./findings.ts";
 import type { MarkupEvents } from "./markup.ts";
@@ -93,7 +93,7 @@ export class VotableDocument implements MarkupEvents {
   }
 
   private openRoot(name: string): void {
-    if (name !== "VOTABLE") throw notVotable(`its outermost element is ${name.slice(0, 80)}, not VOTABLE`);
+    if (name !== "VOTABLE") throw notVotable(`its outermost element is ${short(name)}, not VOTABLE`);
   }
 
   private openInside(name: string, parent: string, attributes: Attributes, prefix: string): void {
@@ -234,7 +234,7 @@ export class VotableDocument implements MarkupEvents {
     if (encoding !== undefined && encoding.trim().toLowerCase() !== "base64")
       throw unreadable(
         "votable-stream-encoding",
-        `The rows of the table are encoded as "${encoding.slice(0, 40)}"; base64 is what can be read inside a file.`,
+        `The rows of the table are encoded as "${short(encoding)}"; base64 is what can be read inside a file.`,
         "Get the table in its TABLEDATA form or with base64.",
       );
     const { fields, batch } = this.chosen;

@@ -7,6 +7,12 @@ const GET_AGAIN = "Get the file again from its service or archive and bring it a
 /** No piece of text, tag or row of a real table comes near this; without a limit one cell could fill the memory. */
 export const MOST_CHARACTERS = 4_000_000;
 
+const LONGEST_QUOTE = 80;
+
+/** As much of a text of the file as a message should quote. */
+export const short = (text: string, most = LONGEST_QUOTE): string =>
+  text.length > most ? `${text.slice(0, most)}…` : text;
+
 export const notVotable = (why: string): AppError =>
   new AppError(422, "not-a-votable", `This is no VOTable: ${why}.`, {
     hint: "Check that the file is the table itself and not a page or a message of the service that was saved instead.",

@@ -1,4 +1,5 @@
 import type { ColumnType, PositionFrame, TableColumn } from "../table.ts";
+import { short } from "./faults.ts";
 
 interface Datatype {
   /** Bits of one item in the binary forms. */
@@ -81,8 +82,9 @@ export const fieldOf = (words: FieldWords): Field => {
   };
 };
 
-/** How a person names a field: its name, else its place from 1. */
-export const nameOf = (field: Field, index: number): string => field.name || `column ${index + 1}`;
+/** How a message names a field: its name, else its place from 1. */
+export const nameOf = (field: Field, index: number): string =>
+  field.name === "" ? `column ${index + 1}` : short(field.name);
 
 /** The columns of a table, without the fields whose cells hold several values. */
 export const columnsOf = (fields: readonly Field[]): TableColumn[] =>

@@ -1,5 +1,5 @@
 import { SaxesParser } from "saxes";
-import { brokenMarkup, MOST_CHARACTERS, tooLong, unreadable } from "./faults.ts";
+import { brokenMarkup, MOST_CHARACTERS, short, tooLong, unreadable } from "./faults.ts";
 import type { TextFeed } from "./text-feed.ts";
 
 const DEEPEST = 64;
@@ -35,7 +35,7 @@ export class Markup {
 
   constructor(private readonly events: MarkupEvents) {
     this.parser.on("error", (error) => {
-      throw brokenMarkup(this.line(), error.message.replace(/^[^ ]*\d+:\d+: /, "").replace(/\.$/, ""));
+      throw brokenMarkup(this.line(), short(error.message.replace(/^[^ ]*\d+:\d+: /, "").replace(/\.$/, "")));
     });
     this.parser.on("doctype", refuseEntities);
     this.parser.on("opentag", (tag) => this.opened(tag.name, tag.attributes));

@@ -1,13 +1,14 @@
 import type { OpenTable, RowBatch, TableReader } from "../table.ts";
 import { type ChosenTable, VotableDocument } from "./document.ts";
-import { endsInMiddle, notVotable, unreadable } from "./faults.ts";
+import { endsInMiddle, notVotable, short, unreadable } from "./faults.ts";
 import { Findings } from "./findings.ts";
 import { Markup } from "./markup.ts";
 import { TextFeed } from "./text-feed.ts";
 import { AFTER_END, FEWER_ROWS, MORE_ROWS, STRAY_BYTES } from "./words.ts";
 
-/** Characters that may stand before the data: many times what thousands of described columns take. */
-const LONGEST_HEAD = 64_000_000;
+/** Characters that may stand before the data: several times what thousands of described columns take. */
+const LONGEST_HEAD = 20_000_000;
+const LONGEST_SERVICE_WORDS = 300;
 
 /** A document being read: the text, the markup in it, and what it says. */
 class Reading {
@@ -73,11 +74,13 @@ class Reading {
     if (serviceError !== null)
       return unreadable(
         "votable-service-error",
-        `The service answered with an error and no table: ${serviceError || "it does not say which"}.`,
+        `The service answered with an error and no table: ${short(serviceError, LONGEST_SERVICE_WORDS) || "it does not say which"}.`,
         "Change the query by what the service says, and bring the answer that holds a table.",
       );
     const what =
-      emptyTables.length === 0 ? "there is no table in it" : `its table ${emptyTables[0]} has no data`;
+      emptyTables.length === 0
+        ? "there is no table in it"
+        : `its table ${short(emptyTables[0] ?? "")} has no data`;
     return unreadable(
       "votable-no-data",
       `The VOTable holds no rows: ${what}.`,
@@ -91,7 +94,7 @@ class Reading {
       const rest = this.feed.text.slice(this.feed.at).trim();
       this.feed.at = this.feed.text.length;
       if (rest === "") continue;
-      this.findings.add(AFTER_END, rest.slice(0, 80));
+      this.findings.add(AFTER_END, short(rest));
       return;
     } while (await this.feed.more());
   }

@@ -1,7 +1,7 @@
 import { Base64Decoder } from "./base64.ts";
 import type { BinaryRows } from "./binary-rows.ts";
 import type { DataBlock } from "./data-block.ts";
-import { brokenMarkup } from "./faults.ts";
+import { brokenMarkup, short } from "./faults.ts";
 import type { Markup } from "./markup.ts";
 import type { TextFeed } from "./text-feed.ts";
 
@@ -37,7 +37,7 @@ export class StreamBlock implements DataBlock {
   }
 
   open(name: string): void {
-    throw brokenMarkup(this.line(), `the element ${name.slice(0, 40)} stands inside the encoded rows`);
+    throw brokenMarkup(this.line(), `the element ${short(name)} stands inside the encoded rows`);
   }
 
   text(text: string): void {

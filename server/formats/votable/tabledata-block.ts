@@ -1,5 +1,5 @@
 import type { DataBlock } from "./data-block.ts";
-import { brokenMarkup, MOST_CHARACTERS, tooLong } from "./faults.ts";
+import { brokenMarkup, MOST_CHARACTERS, short, tooLong } from "./faults.ts";
 import type { Markup } from "./markup.ts";
 import type { TextCells } from "./text-cells.ts";
 import type { TextFeed } from "./text-feed.ts";
@@ -96,7 +96,7 @@ export class TabledataBlock implements DataBlock {
     else if (name === "TD" && this.isInRow && this.cell === null) {
       this.cell = "";
       if (attributes.encoding !== undefined) this.oddity = "a cell has an encoding of its own";
-    } else throw brokenMarkup(this.line, `the element ${name.slice(0, 40)} stands inside the rows`);
+    } else throw brokenMarkup(this.line, `the element ${short(name)} stands inside the rows`);
   }
 
   text(text: string): void {

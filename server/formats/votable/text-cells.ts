@@ -1,5 +1,6 @@
 import { isBlankWord, parseNumber } from "../numbers.ts";
 import type { BatchBuilder } from "./batch-builder.ts";
+import { short } from "./faults.ts";
 import { type Field, nameOf, slotsOf } from "./fields.ts";
 import type { Findings } from "./findings.ts";
 import { hexadecimalNumber, longText, nullNumber, nullText } from "./null-mark.ts";
@@ -136,8 +137,7 @@ export class TextCells {
 
   private refuse(index: number, cell: string): false {
     const field = this.fields[index] as Field;
-    const text = cell.trim().slice(0, 80);
-    this.why = `"${text}" in ${nameOf(field, index)} is not a value of the type ${field.datatype}`;
+    this.why = `"${short(cell.trim())}" in ${nameOf(field, index)} is not a value of the type ${field.datatype}`;
     return false;
   }
 }

@@ -1,4 +1,4 @@
-import { unreadable } from "./faults.ts";
+import { short, unreadable } from "./faults.ts";
 
 /** Enough for any XML declaration. */
 export const DECLARATION_BYTES = 1024;
@@ -33,7 +33,7 @@ export const xmlEncoding = (start: Uint8Array): string => {
   } catch {
     throw unreadable(
       "unknown-encoding",
-      `The file says that its text is encoded as "${label}", which cannot be decoded here.`,
+      `The file says that its text is encoded as "${short(label)}", which cannot be decoded here.`,
       "Save the file as UTF-8 and bring it as a new extract.",
     );
   }
