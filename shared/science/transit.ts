@@ -142,5 +142,14 @@ export const MEDIAN_CHORD = Math.sqrt(3) / 2;
 /** Mean of (1 − b²)^(1/4) over impact parameters from 0 to 1, by which a signal-to-noise ratio shrinks. */
 export const MEAN_ROOT_CHORD = 0.8740191847640399;
 
+/**
+ * Duration averaged over impact parameters, in the unit of the period: `(π/4) (P/π) asin(1/a) √(1 − e²)`, about
+ * `(P / 4a) √(1 − e²)`.
+ *
+ * @see Burke et al. 2015, ApJ 809, 8, eq. 1, whose numeric factor in print is not the 24/4 of hours and days
+ */
+export const meanDuration = (period: number, a: number, e = 0): number =>
+  leavesStar(a, e) ? MEAN_CHORD * centralDuration(period, a) * Math.sqrt(1 - e * e) : Number.NaN;
+
 /** Depth without limb darkening, ppm: `10⁶ k²`. */
 export const depthPpm = (k: number): number => 1e6 * k * k;

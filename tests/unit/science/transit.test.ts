@@ -22,6 +22,7 @@ import {
   MEAN_CHORD,
   MEAN_ROOT_CHORD,
   MEDIAN_CHORD,
+  meanDuration,
   meanTransitProbability,
   scaledAxisFromDuration,
   transitDuration,
@@ -228,6 +229,13 @@ describe("characteristic durations", () => {
     expect(ingressDuration(t0, k, 1)).toBeNaN();
     expect(approximateDuration(t0, 1.1)).toBeNaN();
     expect(characteristicDuration(10, 1)).toBeNaN();
+  });
+
+  test("the mean duration is about P / 4a, shorter on eccentric orbits", () => {
+    expect(meanDuration(HOURS_PER_YEAR, AU_PER_SOLAR_RADIUS)).toBeCloseTo(10.1917, 4);
+    expect(meanDuration(1000, 200) / (1000 / 800)).toBeCloseTo(1, 4);
+    expect(meanDuration(1000, 200, 0.6) / meanDuration(1000, 200)).toBeCloseTo(0.8, 12);
+    expect(meanDuration(1000, 2, 0.6)).toBeNaN();
   });
 
   test("means over impact parameters: π/4, √3/2 in the median, 0.874017 for the root (computed)", () => {
