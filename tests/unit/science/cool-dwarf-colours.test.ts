@@ -48,6 +48,16 @@ describe("temperature of cool dwarfs from colour", () => {
     ["bp-rp, feh", 2.5, 0, 3534.7],
     ["bp-rp, feh", 2.5, 0.3, 3581.1],
     ["bp-rp, feh", 3.0, 0, 3265.6],
+    ["bp-rp, feh", 2.9, 0.25, 3353.5],
+    ["v-j, feh", 4.4, 0.25, 3279.9],
+    ["v-ic, feh", 2.7, 0.25, 3367.2],
+    ["r-z, feh", 1.9, 0.25, 3444.5],
+    ["r-j, feh", 3.6, 0.25, 3342.4],
+    ["bp-rp, j-h", 2.9, 0.55, 3302.7],
+    ["v-j, j-h", 4.4, 0.55, 3207.4],
+    ["v-ic, j-h", 2.7, 0.55, 3310.5],
+    ["r-z, j-h", 1.9, 0.55, 3380.5],
+    ["r-j, j-h", 3.6, 0.55, 3263.5],
   ] as const)("%s %d, %d gives %d K", (key, colour, second, teff) => {
     expect(Math.abs(coolDwarfTeffFromColour(COOL_DWARF_ROWS[key], colour, second) - teff)).toBeLessThan(
       0.051,

@@ -39,6 +39,36 @@ describe("temperature from twelve colours", () => {
     expect(sunlikeTeffFromColour(SUNLIKE_ROWS["bp-rp"], colour, logg, feh)).toBeCloseTo(teff, 1);
   });
 
+  /** Computed from the table of Casagrande et al. 2021, term by term: a dwarf and a giant in every colour. */
+  test.each([
+    ["bp-rp", 0.92, 4.4, -0.3, 5445.5],
+    ["bp-rp", 1.14, 2.5, -0.7, 4811.3],
+    ["bp-j", 1.35, 4.4, -0.3, 5771.6],
+    ["bp-j", 2.22, 2.5, -0.7, 4521.7],
+    ["bp-h", 1.84, 4.4, -0.3, 5542.9],
+    ["bp-h", 2.2, 2.5, -0.7, 5084.7],
+    ["bp-ks", 1.86, 4.4, -0.3, 5587.4],
+    ["bp-ks", 2.3, 2.5, -0.7, 5065.8],
+    ["rp-j", 0.54, 4.4, -0.3, 5782.9],
+    ["rp-j", 0.98, 2.5, -0.7, 4413.0],
+    ["rp-h", 0.76, 4.4, -0.3, 6015.1],
+    ["rp-h", 1.1, 2.5, -0.7, 5230.1],
+    ["rp-ks", 0.86, 4.4, -0.3, 5873.1],
+    ["rp-ks", 1.2, 2.5, -0.7, 5186.6],
+    ["g-j", 0.93, 4.4, -0.3, 6027.0],
+    ["g-j", 1.72, 2.5, -0.7, 4400.2],
+    ["g-h", 1.19, 4.4, -0.3, 6050.8],
+    ["g-h", 1.63, 2.5, -0.7, 5267.4],
+    ["g-ks", 1.24, 4.4, -0.3, 6027.6],
+    ["g-ks", 1.68, 2.5, -0.7, 5315.0],
+    ["g-bp", -0.66, 4.4, -0.3, 4345.4],
+    ["g-bp", -0.9, 2.5, -0.7, 3786.5],
+    ["g-rp", 0.43, 4.4, -0.3, 6114.7],
+    ["g-rp", 0.55, 2.5, -0.7, 5277.1],
+  ] as const)("%s %d, log g %d, [Fe/H] %d gives %d K", (key, colour, logg, feh, teff) => {
+    expect(Math.abs(sunlikeTeffFromColour(SUNLIKE_ROWS[key], colour, logg, feh) - teff)).toBeLessThan(0.051);
+  });
+
   test("HD 122563, dereddened, is 4678 K as its author prints", () => {
     // README of the author's program: log g 1.40, [Fe/H] −2.75, BP 6.3975, RP 5.1787, E(B − V) 0.003.
     const [bp, rp, ebv] = [6.3975, 5.1787, 0.003];
