@@ -1,9 +1,13 @@
+import type { DataSum } from "./data-sum.ts";
+
 const NOTHING = new Uint8Array(0);
 
 /** The bytes of a file in order, taken in sizes of the reader's own choice. Holds one piece of the source at a time. */
 export class ByteSource {
   /** Bytes taken so far. */
   position = 0;
+  /** Adds up all bytes that are taken while it is set. */
+  sum: DataSum | null = null;
   private readonly pieces: AsyncIterator<Uint8Array>;
   private piece: Uint8Array = NOTHING;
   private at = 0;
@@ -43,6 +47,7 @@ export class ByteSource {
   }
 
   private advance(size: number): void {
+    this.sum?.add(this.piece.subarray(this.at, this.at + size));
     this.at += size;
     this.position += size;
   }

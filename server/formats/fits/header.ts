@@ -104,6 +104,14 @@ const addBlock = (header: FitsHeader, block: Uint8Array): boolean => {
   return true;
 };
 
+const checkBeginning = (block: Uint8Array, first: "SIMPLE" | "XTENSION"): void => {
+  const begins = Buffer.from(block.subarray(0, first.length)).toString("latin1");
+  if (first === "SIMPLE") {
+    if (begins !== first) throw notFits();
+  } else if (!first.startsWith(begins))
+    throw badHeader(`A header begins with ${quoted(begins)} where ${first} belongs.`);
+};
+
 /**
  * The header that begins here; null where the file ends instead.
  *
@@ -119,11 +127,7 @@ export const readHeader = async (
     const filled = await source.fill(block);
     if (blocks === 0) {
       if (filled === 0) return null;
-      const begins = Buffer.from(block.subarray(0, Math.min(filled, first.length))).toString("latin1");
-      if (begins !== first)
-        throw first === "SIMPLE"
-          ? notFits()
-          : badHeader(`A header begins with ${quoted(begins)} where ${first} belongs.`);
+      checkBeginning(block.subarray(0, filled), first);
     }
     if (filled < BLOCK_LENGTH) throw cutOff("a header does not reach its END");
     if (!addBlock(header, block)) return header;

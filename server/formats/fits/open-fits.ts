@@ -9,7 +9,7 @@ import { Findings } from "./findings.ts";
 import type { Hdu } from "./hdu.ts";
 import { readMeta } from "./meta.ts";
 import { readRows } from "./rows.ts";
-import { findTable, type Opened, surveyRest } from "./survey.ts";
+import { beginSum, findTable, type Opened, surveyRest } from "./survey.ts";
 
 /** The standard's own bound, since keywords have eight characters. */
 const MOST_COLUMNS = 999;
@@ -83,6 +83,7 @@ async function* batchesOf(
   findings: Findings,
 ): AsyncGenerator<RowBatch> {
   try {
+    beginSum(source, opened);
     yield* readRows(source, opened.table, readers);
     if (opened.table.rows > 0) await surveyRest(source, opened, findings);
   } finally {

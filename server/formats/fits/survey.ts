@@ -1,5 +1,6 @@
 import { AppError } from "../../errors.ts";
 import type { ByteSource } from "./byte-source.ts";
+import { DataSum } from "./data-sum.ts";
 import { counted, cutOff, noTable, notFits, quoted } from "./errors.ts";
 import type { Findings } from "./findings.ts";
 import { describeHdu, type Hdu, paddingOf } from "./hdu.ts";
@@ -122,19 +123,45 @@ const passData = async (source: ByteSource, bytes: number, findings: Findings): 
   return skipped === bytes;
 };
 
-/** Looks at what comes behind the rows, to name the tables that are not read. */
+const checkSum = ({ header }: Hdu, sum: DataSum, findings: Findings): void => {
+  const declared = header.number("DATASUM");
+  if (Number.isNaN(declared) || sum.value() === declared) return;
+  findings.add(
+    {
+      key: "fits-sum",
+      level: "ask",
+      message:
+        "The table's bytes do not add up to the sum that the file gives for them (DATASUM). Some of them were changed on the way, or a program changed the table without a new sum.",
+      hint: "Get the file again. If it stays so, compare some values with their source before you trust the table.",
+    },
+    `${declared} in the file, ${sum.value()} from its bytes`,
+  );
+};
+
+/** The sum of the table's data is taken from here on, where the file has one to compare it with. */
+export const beginSum = (source: ByteSource, { table }: Opened): void => {
+  if (table.header.text("DATASUM") !== null) source.sum = new DataSum();
+};
+
+/** Looks at what comes behind the rows: whether the data are sound, and which tables are not read. */
 export const surveyRest = async (source: ByteSource, opened: Opened, findings: Findings): Promise<void> => {
   const { table } = opened;
-  let rest = table.dataBytes - table.rows * table.rowBytes + paddingOf(table);
-  for (let headers = opened.headers; headers < MOST_HEADERS; headers++) {
-    if (!(await passData(source, rest, findings))) return;
+  const behindRows = table.dataBytes - table.rows * table.rowBytes + paddingOf(table);
+  if (!(await passData(source, behindRows, findings))) return;
+  if (source.sum) checkSum(table, source.sum, findings);
+  source.sum = null;
+  await surveyTables(source, opened.headers, findings);
+};
+
+const surveyTables = async (source: ByteSource, from: number, findings: Findings): Promise<void> => {
+  for (let headers = from; headers < MOST_HEADERS; headers++) {
     const at = source.position;
     const header = await nextHeader(source, () => true, findings);
     if (!header) return;
     const hdu = describeOrNote(header, headers, at, findings);
     if (!hdu) return;
     if (isTable(hdu)) noteOther(hdu, findings);
-    rest = hdu.dataBytes + paddingOf(hdu);
+    if (!(await passData(source, hdu.dataBytes + paddingOf(hdu), findings))) return;
   }
 };
 

@@ -162,6 +162,44 @@ describe("the end of a file", () => {
   });
 });
 
+describe("the sum of the data", () => {
+  // 1 000 times 1, and the heap's 5 bytes 01 to 05 as 0x01020304 and 0x05000000 (computed).
+  const sum = 1000 + 0x01020304 + 0x05000000;
+  const summed = (value: string) => {
+    const first = table("a", 1000);
+    const heap = Buffer.from([1, 2, 3, 4, 5]);
+    return fitsFile({ ...first, heap, cards: [card("DATASUM", value)] }, table("b", 2));
+  };
+
+  test.each([1, 3, 2880, 10_007])("is that of the file, in pieces of %i bytes", async (size) => {
+    const { findings } = await readFits(summed(String(sum)), size);
+    expect(keysOf(findings)).toEqual(["fits-other-tables"]);
+  });
+
+  test("brings its carries around", async () => {
+    const rows = Array.from({ length: 5 }, () => int32(-2));
+    const columns = [{ name: "a", form: "J" }];
+    // Five times 2³² − 2 is 5 × 2³² − 10, and the carries add 4 to 2³² − 10 (computed).
+    const cards = [card("DATASUM", String(2 ** 32 - 6))];
+    expect(keysOf((await readFits(fitsFile({ columns, rows, cards }))).findings)).toEqual([]);
+  });
+
+  test("asks where it is another", async () => {
+    const file = summed(String(sum));
+    file[2880 * 2 + 2000] = 9;
+    const { findings } = await readFits(file);
+    expect(findings[0]).toMatchObject({
+      key: "fits-sum",
+      level: "ask",
+      examples: [`${sum} in the file, ${sum + 9 * 2 ** 24} from its bytes`],
+    });
+  });
+
+  test.each(["", "unknown"])("is not looked at where the file has none: %j", async (value) => {
+    expect(keysOf((await readFits(summed(value))).findings)).toEqual(["fits-other-tables"]);
+  });
+});
+
 describe("the source", () => {
   test("is let go after the last row, at a stop in between and at an error", async () => {
     const file = fitsFile(table("a", 50_000));
@@ -179,6 +217,30 @@ describe("the source", () => {
     expect(released).toHaveBeenCalledTimes(2);
     for await (const _ of (await openFits(watched(file))).batches);
     expect(released).toHaveBeenCalledTimes(3);
+  });
+
+  test("is read no further than its batches are taken, however long it is", async () => {
+    const head = fitsFile({
+      ...table("a", 0),
+      counts: { NAXIS1: 4000, NAXIS2: 2 ** 40 },
+      columns: [{ form: "4000A" }],
+    });
+    let given = 0;
+    async function* endless() {
+      yield head;
+      const piece = new Uint8Array(100_000);
+      for (;;) {
+        given += piece.length;
+        yield piece;
+      }
+    }
+    let batches = 0;
+    for await (const batch of (await openFits(endless())).batches) {
+      expect(given - (batch.bytes - head.length)).toBeLessThan(100_000);
+      expect(batch.rows * 4000).toBeLessThan(2 ** 23);
+      if (++batches === 5) break;
+    }
+    expect(batches).toBe(5);
   });
 
   test("is counted as it is read", async () => {
