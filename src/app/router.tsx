@@ -77,6 +77,10 @@ const programmeScreens: RouteObject[] = [
       Component: (await import("#src/features/settings/settings-page.tsx")).SettingsPage,
     }),
   },
+  {
+    path: "settings/recipes/:recipeId",
+    lazy: async () => ({ Component: (await import("#src/features/settings/recipe-page.tsx")).RecipePage }),
+  },
 ];
 
 const personScreens: RouteObject[] = [

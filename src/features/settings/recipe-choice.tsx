@@ -1,70 +1,73 @@
 import { useQuery } from "@tanstack/react-query";
-import { useState } from "react";
+import { Link } from "react-router-dom";
 import type { Programme } from "#shared/api/programmes.ts";
-import { recipeLabel } from "#shared/format/recipe-label.ts";
-import { activeJobsOptions } from "#src/api/jobs.ts";
-import { recipesOptions, useChooseRecipe } from "#src/api/recipes.ts";
-import { JobProgress } from "#src/lib/job-progress.tsx";
-import { useCan } from "#src/lib/rights.ts";
-import { Button } from "#src/ui/button.tsx";
+import type { Recipe } from "#shared/api/recipes.ts";
+import { recipeLabel, shortHash } from "#shared/format/recipe-label.ts";
+import { recipesOptions, recipeVersionOptions } from "#src/api/recipes.ts";
+import { paths } from "#src/app/paths.ts";
+import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
-import { RecipeTable } from "./recipe-table.tsx";
+import { LedgerTable } from "#src/ui/ledger-table.tsx";
+import { Loading } from "#src/ui/loading.tsx";
+import { Moment } from "#src/ui/moment.tsx";
+import { Pill } from "#src/ui/pill.tsx";
+import { RecomputeProgress, useRecompute } from "./recipe-recompute.tsx";
+import { savedByWords } from "./recipe-words.ts";
 
-/** The recompute that goes on: found again after the page was loaded anew, and kept on screen to its outcome. */
-const useRecompute = (programmeId: string, isAllowed: boolean) => {
-  const [jobId, setJobId] = useState<string>();
-  const { data } = useQuery({ ...activeJobsOptions(programmeId), enabled: isAllowed });
-  const active = data?.find(({ kind }) => kind === "recompute")?.id;
-  if (active !== undefined && active !== jobId) setJobId(active);
-  return { jobId, setJobId };
-};
+const Row = ({
+  recipe,
+  inForce,
+}: {
+  recipe: Recipe;
+  inForce: { id: string; number: number } | undefined;
+}) => (
+  <tr>
+    <th scope="row" className="border-b border-hair px-2 py-2 align-top font-normal">
+      <Link
+        to={paths.programme.to(useProgrammeId(), "settings", `/recipes/${recipe.id}`)}
+        className="font-medium underline decoration-edge underline-offset-4 wrap-anywhere hover:decoration-ink"
+      >
+        {recipe.name}
+      </Link>{" "}
+      {inForce?.id === recipe.id ? <Pill tone="calm">version {inForce.number} in force</Pill> : null}
+      {recipe.note ? <span className="block max-w-prose text-xs text-soft">{recipe.note}</span> : null}
+    </th>
+    <td className="text-right font-mono text-[13px]">{recipe.number}</td>
+    <td className="font-mono text-[13px]">{shortHash(recipe.hash)}</td>
+    <td>
+      <Moment at={recipe.savedAt} isShort />
+      <span className="block text-xs text-soft">{savedByWords(recipe)}</span>
+    </td>
+  </tr>
+);
 
-/** The recipe in force, what another would change, and the recompute that brings it into force. */
+const HEADS = [
+  { label: "Recipe" },
+  { label: "Newest version", isNumber: true },
+  { label: "Hash" },
+  { label: "Saved" },
+];
+
+/** The recipe in force and those that there are; each opens on a page of its own. */
 export const RecipeChoice = ({ programme }: { programme: Programme }) => {
-  const can = useCan();
-  const choose = useChooseRecipe(programme.id);
-  const { jobId, setJobId } = useRecompute(programme.id, can("job.read"));
-  const { data: recipes = [] } = useQuery(recipesOptions(programme.id));
-  const [wanted, setWanted] = useState(programme.recipe.versionId);
-  const wantedName = recipes.find(({ versionId }) => versionId === wanted)?.name ?? programme.recipe.name;
-  const recompute = () => choose.mutate(wanted, { onSuccess: ({ job }) => setJobId(job.id) });
+  const recompute = useRecompute(programme.id);
+  const recipes = useQuery(recipesOptions(programme.id));
+  const inForce = useQuery(recipeVersionOptions(programme.id, programme.recipe.versionId));
   return (
     <div className="flex flex-col gap-4">
       <p>
-        The catalogue is derived by the recipe{" "}
-        <span className="font-medium">{recipeLabel(programme.recipe)}</span>.
+        The catalogue is derived by{" "}
+        <span className="font-mono text-[13px]">{recipeLabel(programme.recipe)}</span>.
       </p>
-      <RecipeTable
-        recipes={recipes}
-        inForce={programme.recipe.versionId}
-        wanted={wanted}
-        onWant={can("programme.choose-recipe") ? setWanted : undefined}
-      />
-      {can("programme.choose-recipe") ? (
-        <>
-          <p className="text-[13px] text-soft">
-            Another recipe derives every star anew and makes the next catalogue edition. Until it is ready the
-            present edition stays in use; editions and lists made before keep their values.
-          </p>
-          <ErrorNotice error={choose.error} />
-          <div>
-            <Button
-              isBusy={choose.isPending}
-              disabled={wanted === programme.recipe.versionId}
-              onClick={recompute}
-            >
-              Recompute with {wantedName}
-            </Button>
-          </div>
-        </>
-      ) : null}
-      {jobId ? (
-        <JobProgress
-          key={jobId}
-          programmeId={programme.id}
-          jobId={jobId}
-          done={`The catalogue is derived by the recipe ${recipeLabel(programme.recipe)} now.`}
-        />
+      <RecomputeProgress programme={programme} recompute={recompute} />
+      {recipes.isPending ? <Loading /> : null}
+      <ErrorNotice error={recipes.error} onRetry={() => void recipes.refetch()} />
+      {recipes.data ? (
+        <LedgerTable caption="Recipes of the programme" heads={HEADS}>
+          {recipes.data.map((recipe) => (
+            <Row key={recipe.id} recipe={recipe} inForce={inForce.data} />
+          ))}
+        </LedgerTable>
       ) : null}
     </div>
   );

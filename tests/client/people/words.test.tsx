@@ -1,10 +1,8 @@
 import { describe, expect, test } from "vitest";
 import type { Programme } from "#shared/api/programmes.ts";
 import { can } from "#shared/policy/rights.ts";
-import { DEFAULT_RECIPE, PRACTICE_RECIPE } from "#shared/science/recipes.ts";
 import { piecesOf } from "#src/features/mailbox/body-text.tsx";
 import { nextStep } from "#src/features/overview/next-step.ts";
-import { recipeDifferences } from "#src/features/settings/recipe-differences.ts";
 import { homeOf, joinedProgramme, ownAddress } from "#src/features/sign-in/destination.ts";
 import { asClock } from "#src/features/sign-in/use-wait.ts";
 import { deedOf, differencesOf } from "#src/lib/logbook-words.ts";
@@ -104,10 +102,4 @@ describe("the next step of a programme", () => {
     expect(step && can({ roles: ["curator"] }, step.right)).toBe(true);
     expect(step && can({ roles: ["guest"] }, step.right)).toBe(false);
   });
-});
-
-test("recipes are told apart by what differs alone", () => {
-  const labels = recipeDifferences([DEFAULT_RECIPE, PRACTICE_RECIPE]).map(({ label }) => label);
-  expect(labels).toContain("[Fe/H] enters radius and mass");
-  expect(labels).not.toContain("RUWE above which a star may be two");
 });
