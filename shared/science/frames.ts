@@ -66,3 +66,22 @@ export const icrsToEcliptic = (target: Float64Array, ra: number, dec: number): v
 /** Writes right ascension and declination (ICRS) of a position on the mean ecliptic of J2000.0: the way back. */
 export const eclipticToIcrs = (target: Float64Array, longitude: number, latitude: number): void =>
   rotate(target, FROM_ECLIPTIC, longitude, latitude);
+
+/**
+ * Writes ecliptic longitude and latitude of an equatorial position for the same equinox, by an obliquity in degrees: that of
+ * date, or another convention for J2000.0 (84381.411″ and 84381.448″ are in use). See {@link rotate}.
+ */
+export const equatorialToEcliptic = (
+  target: Float64Array,
+  ra: number,
+  dec: number,
+  obliquity: number,
+): void => rotate(target, aboutEquinox(obliquity), ra, dec);
+
+/** Writes right ascension and declination of an ecliptic position: the inverse of {@link equatorialToEcliptic}. */
+export const eclipticToEquatorial = (
+  target: Float64Array,
+  longitude: number,
+  latitude: number,
+  obliquity: number,
+): void => rotate(target, aboutEquinox(-obliquity), longitude, latitude);

@@ -1,5 +1,5 @@
 import { RADIANS_PER_DEGREE } from "./angles.ts";
-import { isOrder, isPixel, nestedCentre, nestedOf, placeOf } from "./healpix.ts";
+import { isOrder, isPixel, nestedCentre, nestedOf, nestedPixel, placeOf } from "./healpix.ts";
 import { separation } from "./separation.ts";
 
 /** Steps in x and y to the eight pixels around, from south-west clockwise. */
@@ -80,6 +80,25 @@ const pixelRadius = (order: number): number => {
 const MARGIN = 1e-12;
 
 /**
+ * A disc up to this wide, degrees at order 0, stays within the pixel of its centre and the neighbours of that pixel: a
+ * quarter of the mean side, and no pixel is half as narrow as the mean.
+ */
+const SURELY_WITHIN_NEIGHBOURS = 14;
+
+/** Pixels that together hold the disc, of an order at which they are not many. */
+const firstPixels = (
+  order: number,
+  longitude: number,
+  latitude: number,
+  radius: number,
+): { depth: number; pixels: number[] } => {
+  const depth = Math.min(order, Math.floor(Math.log2(SURELY_WITHIN_NEIGHBOURS / radius)));
+  if (depth < 1) return { depth: 0, pixels: Array.from({ length: 12 }, (_, face) => face) };
+  const pixel = nestedPixel(depth, longitude, latitude);
+  return { depth, pixels: [pixel, ...nestedNeighbours(depth, pixel)].sort((a, b) => a - b) };
+};
+
+/**
  * Nested indices of all pixels that a disc touches, rising. A few that it only comes near are among them, and none is left
  * out: what is meant for a search, which measures the distances itself.
  *
@@ -95,8 +114,9 @@ export const pixelsTouchingDisc = (
 ): number[] => {
   if (!isOrder(order) || !(radius >= 0)) return [];
   const centre = new Float64Array(2);
-  let pixels = Array.from({ length: 12 }, (_, face) => face);
-  for (let depth = 0; depth <= order; depth++) {
+  const first = firstPixels(order, longitude, latitude, radius);
+  let pixels = first.pixels;
+  for (let depth = first.depth; depth <= order; depth++) {
     const reach = radius + pixelRadius(depth) + MARGIN;
     const kept = pixels.filter((pixel) => {
       nestedCentre(centre, depth, pixel);

@@ -1,6 +1,7 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { julianDateOfEpoch } from "#shared/science/epoch.ts";
+import { eclipticToEquatorial, equatorialToEcliptic } from "#shared/science/frames.ts";
 import { meanObliquity } from "#shared/science/obliquity.ts";
 import { dateToIcrs, generalPrecession, icrsToDate } from "#shared/science/precession.ts";
 import { separation } from "#shared/science/separation.ts";
@@ -19,6 +20,35 @@ describe("the obliquity", () => {
   test("of J2026.0 is 23.435896795°", () => {
     // Computed.
     expect(meanObliquity(julianDateOfEpoch(2026))).toBeCloseTo(23.435896795, 9);
+  });
+});
+
+describe("ecliptic coordinates of date", () => {
+  // SOFA test suite, t_eqec06 and t_eceq06, radians. They count the frame bias, 0.023″, and nothing else that is left out.
+  const BIAS_ARCSEC = 0.025;
+
+  test("of SOFA's test position", () => {
+    const date = 2_440_000.5 + 1234.5;
+    const [ra = 0, dec = 0] = written(2, (target) =>
+      icrsToDate(target, 1.234 / RADIANS, 0.987 / RADIANS, date),
+    );
+    const [longitude = 0, latitude = 0] = written(2, (target) =>
+      equatorialToEcliptic(target, ra, dec, meanObliquity(date)),
+    );
+    expect(
+      3600 * separation(longitude, latitude, 1.3425099189946545 / RADIANS, 0.5926215259704608 / RADIANS),
+    ).toBeLessThan(BIAS_ARCSEC);
+  });
+
+  test("of SOFA's test position, back among the stars", () => {
+    const date = 2_456_165.901182685;
+    const [ra = 0, dec = 0] = written(2, (target) =>
+      eclipticToEquatorial(target, 5.1 / RADIANS, -0.9 / RADIANS, meanObliquity(date)),
+    );
+    const [icrsRa = 0, icrsDec = 0] = written(2, (target) => dateToIcrs(target, ra, dec, date));
+    expect(
+      3600 * separation(icrsRa, icrsDec, 5.533459733613628 / RADIANS, -1.2465429325544806 / RADIANS),
+    ).toBeLessThan(BIAS_ARCSEC);
   });
 });
 

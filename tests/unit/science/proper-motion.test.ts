@@ -95,6 +95,28 @@ describe("without a radial velocity", () => {
   });
 });
 
+describe("what is left out is small beside what a straight line in α and δ leaves out", () => {
+  test("the straight line is 164 mas off in 16 years and 4.6″ in 84", () => {
+    // Computed: 164.33 and 4551.2 mas.
+    for (const [years, mas] of [
+      [-16, 164.33],
+      [84, 4551.2],
+    ] as const) {
+      const [ra = 0, dec = 0] = moved(BARNARD, -110.47, years);
+      const straightRa = BARNARD[0] + (BARNARD[3] * years) / 3.6e6 / Math.cos((BARNARD[1] * Math.PI) / 180);
+      const straightDec = BARNARD[1] + (BARNARD[4] * years) / 3.6e6;
+      expect(Math.abs(3.6e6 * separation(ra, dec, straightRa, straightDec) - mas)).toBeLessThan(0.06);
+    }
+  });
+
+  test("light-time is 0.03 mas in 16 years", () => {
+    // Computed with SOFA's starpm: 269.4520734275, 4.6934104669, parallax 546.435309.
+    const [ra = 0, dec = 0, parallax] = moved(BARNARD, -110.47, -16);
+    expect(3.6e6 * separation(ra, dec, 269.4520734275, 4.6934104669)).toBeCloseTo(0.03, 2);
+    expect(parallax).toBeCloseTo(546.435309, 3);
+  });
+});
+
 test("Proxima in 2000", () => {
   // Computed, from digits that are from memory.
   expectElements(

@@ -1,5 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { julianDateOfInstant } from "#shared/science/epoch.ts";
+import { eclipticToEquatorial } from "#shared/science/frames.ts";
+import { meanObliquity } from "#shared/science/obliquity.ts";
 import { separation } from "#shared/science/separation.ts";
 import {
   FIRST_SUN_JD,
@@ -24,6 +26,22 @@ describe("the Sun", () => {
     // Computed.
     expect(sunLongitudeOfDate(2_448_908.5)).toBeCloseTo(199.90299, 5);
     expect(sunDistance(2_448_908.5)).toBeCloseTo(0.997661, 6);
+  });
+
+  test("on the equator of date", () => {
+    const ofDate = (date: number): [number, number] => {
+      const [ra = 0, dec = 0] = written(2, (target) =>
+        eclipticToEquatorial(target, sunLongitudeOfDate(date), 0, meanObliquity(date)),
+      );
+      return [ra, dec];
+    };
+    // Meeus 1998, example 25.a: α 198.38083°, δ −7.78507°.
+    expect(separation(...ofDate(2_448_908.5), 198.38083, -7.78507)).toBeLessThan(0.01);
+    // Computed, for 2026 October 4, 0h UTC, 69.2 s later in TT, with the obliquity of the same low-precision formulas, which
+    // is 0.0007° less: 0.37° from the place among the stars below.
+    const [ra, dec] = ofDate(julianDateOfInstant(Date.UTC(2026, 9, 4)) + 69.2 / 86_400);
+    expect(ra).toBeCloseTo(189.9144, 3);
+    expect(dec).toBeCloseTo(-4.2682, 3);
   });
 
   test("is where an ephemeris has it among the stars", () => {
