@@ -181,7 +181,8 @@ export class BinaryRows {
         this.setText(index, slot, isNull ? "" : this.view.getBigInt64(at).toString());
         return true;
       case "boolean":
-        return this.setBoolean(slot, isNull ? NUL : this.view.getUint8(at), field.layout?.bits === 1);
+        if (isNull) this.batch.setText(slot, "");
+        return isNull || this.setBoolean(slot, this.view.getUint8(at), field.layout?.bits === 1);
       default:
         this.setText(index, slot, isNull ? "" : this.text(at, bytes, field.layout?.bits === 16));
         return true;

@@ -15,6 +15,7 @@ import {
   type Attributes,
   frameOf,
   isSourceInfo,
+  NO_DATA,
   OTHER_TABLES,
   OVERFLOW,
   oneLine,
@@ -30,6 +31,8 @@ const MOST_SOURCES = 100;
 const MOST_SYSTEMS = 1_000;
 
 const BINARY_FORMS = new Set(["BINARY", "BINARY2"]);
+
+const titleOf = (table: TableDraft): string => table.title || "a table without a name";
 
 /** The table that is read. */
 export interface ChosenTable {
@@ -58,16 +61,22 @@ export class VotableDocument implements MarkupEvents {
   private words = "";
   private variant = "";
   private isReadingChosen = false;
+  /** The tables without data, and the first of them that has columns. */
   private readonly tablesWithoutData: string[] = [];
+  private emptyTable: TableDraft | null = null;
 
   constructor(
     private readonly encoding: string,
     private readonly findings: Findings,
   ) {}
 
-  /** Names of the tables that have no data; they are named where there is no other. */
-  get emptyTables(): readonly string[] {
-    return this.tablesWithoutData;
+  /** Takes the first table that has columns for one of no rows, which some programs write without data. */
+  chooseEmpty(): void {
+    if (!this.emptyTable) return;
+    this.tablesWithoutData.splice(this.tablesWithoutData.indexOf(titleOf(this.emptyTable)), 1);
+    this.table = this.emptyTable;
+    this.choose("no data");
+    this.findings.add(NO_DATA);
   }
 
   open(name: string, attributes: Attributes, prefix: string): void {
@@ -157,9 +166,10 @@ export class VotableDocument implements MarkupEvents {
 
   private closeTable(): void {
     if (this.table && !this.isReadingChosen) {
-      const title = this.table.title || "a table without a name";
+      const title = titleOf(this.table);
       if (this.chosen) this.findings.add(OTHER_TABLES, title);
       else if (this.tablesWithoutData.length < MOST_SOURCES) this.tablesWithoutData.push(title);
+      if (!this.chosen && this.table.fields.length > 0) this.emptyTable ??= this.table;
     }
     this.isReadingChosen = false;
     this.table = null;
@@ -261,6 +271,7 @@ export class VotableDocument implements MarkupEvents {
       anonymousFrames: this.anonymousFrames,
     });
     this.chosen = { header, fields, batch: new BatchBuilder(header.columns) };
+    this.emptyTable = null;
     this.isReadingChosen = true;
     this.tellOf(this.table, fields);
   }

@@ -25,7 +25,7 @@ class Reading {
   async head(): Promise<ChosenTable> {
     await this.pastBlanks();
     while (!this.document.chosen) {
-      if (this.document.isClosed) throw this.noData();
+      if (this.document.isClosed) return this.withoutData();
       if (!(await this.step())) throw this.cutOff("before the rows of a table begin");
       if (this.feed.used > LONGEST_HEAD) throw notVotable("it goes on and on without the rows of a table");
     }
@@ -69,22 +69,20 @@ class Reading {
     return endsInMiddle(this.feed.lineAt(this.feed.text.length), where);
   }
 
-  private noData(): Error {
-    const { serviceError, emptyTables } = this.document;
+  private withoutData(): ChosenTable {
+    const { serviceError } = this.document;
     if (serviceError !== null)
-      return unreadable(
+      throw unreadable(
         "votable-service-error",
         `The service answered with an error and no table: ${short(serviceError, LONGEST_SERVICE_WORDS) || "it does not say which"}.`,
         "Change the query by what the service says, and bring the answer that holds a table.",
       );
-    const what =
-      emptyTables.length === 0
-        ? "there is no table in it"
-        : `its table ${short(emptyTables[0] ?? "")} has no data`;
-    return unreadable(
-      "votable-no-data",
-      `The VOTable holds no rows: ${what}.`,
-      "Get the table with its data, not its description alone.",
+    this.document.chooseEmpty();
+    if (this.document.chosen) return this.document.chosen;
+    throw unreadable(
+      "votable-no-table",
+      "The VOTable holds no table: there is no TABLE with columns in it.",
+      "Check that the query or download asked for a table and not for something else.",
     );
   }
 

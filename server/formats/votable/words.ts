@@ -42,6 +42,13 @@ export const OTHER_TABLES: FindingWords = {
   hint: "To bring another one, save it as a file of its own.",
 };
 
+export const NO_DATA: FindingWords = {
+  key: "votable-no-data",
+  level: "ask",
+  message: "The table has columns but no data, not even an empty place for them.",
+  hint: "Check that the answer was meant to hold no rows, and is not the description of a table alone.",
+};
+
 export const PARAMETERS: FindingWords = {
   key: "votable-parameters",
   level: "note",
@@ -97,7 +104,7 @@ export const timeSystemText = ({ timescale, timeorigin, refposition }: Attribute
     `at ${refposition ?? "an unknown place"}`,
   ].join(", ");
 
-/** Names of INFO elements that say where a table comes from ("Data Origin in the VO", IVOA Note 2024, section 3). */
+/** Names of INFO elements that say where a table comes from: those of the IVOA Note "Data Origin in the VO", from memory. */
 const SOURCE_INFO = new Set([
   "acknowledgement",
   "article",

@@ -273,6 +273,16 @@ describe("columns of several values", () => {
     expect((await readWhole(oneColumn(field, ["5"]))).rows).toEqual([[5]]);
   });
 
+  test("a blank by its mask is one in columns of every kind", async () => {
+    const fields = ["boolean", "bit", "long", "double", "char"]
+      .map((type) => `<FIELD name="${type}" datatype="${type}"/>`)
+      .join("");
+    const { rows } = await readWhole(
+      votable(fields, stream("BINARY2", hex(`f8 54 80 ${"01".repeat(8)} ${"40".repeat(8)} 41`))),
+    );
+    expect(rows).toEqual([["", "", "", Number.NaN, ""]]);
+  });
+
   test("the ninth field has the first bit of the second byte of the mask", async () => {
     const fields = Array.from({ length: 9 }, (_, i) => `<FIELD name="f${i}" datatype="unsignedByte"/>`).join(
       "",

@@ -192,6 +192,21 @@ describe("no rows", () => {
   );
 });
 
+describe("no data at all", () => {
+  test("is a table of no rows where there are columns, and asked about", async () => {
+    const empty = (name: string): string => `<TABLE name="${name}">${INT}</TABLE>`;
+    const document = `<VOTABLE><RESOURCE><TABLE name="bare"/>${empty("stars")}${empty("more")}</RESOURCE></VOTABLE>`;
+    const { header, rows, findings } = await readWhole(document);
+    expect(header.meta.title).toBe("stars");
+    expect(header.columns.map((c) => c.name)).toEqual(["n"]);
+    expect(rows).toEqual([]);
+    expect(findings).toMatchObject([
+      { key: "votable-other-tables", examples: ["bare", "more"] },
+      { key: "votable-no-data", level: "ask" },
+    ]);
+  });
+});
+
 describe("files that cannot be read say why", () => {
   const elsewhere = '<BINARY><STREAM href="http://example.org/rows"/></BINARY>';
 
@@ -199,8 +214,8 @@ describe("files that cannot be read say why", () => {
     ["not-a-votable", "", "empty"],
     ["not-a-votable", "ra,dec\n1,2\n", "does not begin with markup"],
     ["not-a-votable", "<!DOCTYPE html><html><body>", "html"],
-    ["votable-no-data", "<VOTABLE/>", "no table"],
-    ["votable-no-data", `<VOTABLE><RESOURCE><TABLE name="t">${INT}</TABLE></RESOURCE></VOTABLE>`, "t has no"],
+    ["votable-no-table", "<VOTABLE/>", "no table"],
+    ["votable-no-table", "<VOTABLE><RESOURCE><TABLE/></RESOURCE></VOTABLE>", "no table"],
     ["votable-no-columns", votable("", ONE_ROW), "no FIELD"],
     ["votable-fits-inside", votable(INT, '<FITS><STREAM encoding="base64"/></FITS>'), "FITS"],
     ["votable-data-elsewhere", votable(INT, elsewhere), "not in the file"],
