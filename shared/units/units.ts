@@ -54,9 +54,9 @@ const UNITS: readonly Unit[] = [
   unit(
     "gravity",
     1,
-    "dex(cm.s-2) log(cm.s-2) log(cm/s2) log(cgs) log.cm.s-2 cgs dex dex(cgs) cm.s-2 cm/s2 log10(cm.s-2) log(cm.s**-2)",
+    "dex(cm.s-2) dex(cm/s2) log(cm.s-2) log(cm/s2) log(cgs) log.cm.s-2 cgs dex dex(cgs) cm.s-2 cm/s2 log10(cm.s-2) log(cm.s**-2)",
   ),
-  unit("gravity", 1, "dex(m.s-2) log(m.s-2) log(m/s2) log(si) dex(si)", 2),
+  unit("gravity", 1, "dex(m.s-2) dex(m/s2) log(m.s-2) log(m/s2) log(si) dex(si)", 2),
   unit("abundance", 1, "dex dex(solar) log log(sun) sun solar -"),
   unit("date", 1, "yr year years a julianyear jyear jyr j.yr"),
   unit("date", 1 / DAYS_PER_YEAR, "jd juliandate julianday d(jd)", 2000 - J2000 / DAYS_PER_YEAR),

@@ -9,7 +9,7 @@ export interface HeaderLines {
 }
 
 /** Room for some thousand columns with long descriptions; a header beyond it would fill the memory. */
-const MOST_BYTES = 4 * 1024 * 1024;
+const MOST_BYTES = 2 * 1024 * 1024;
 
 const HASH = 35;
 const NEWLINE = 10;

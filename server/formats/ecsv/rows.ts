@@ -20,30 +20,34 @@ const gatheringOf = ({ column, mask }: EcsvColumn, index: number): Gathering[] =
   if (column === null) return [];
   const { name, type } = column;
   const number = numberCell(type);
-  return [
-    number
-      ? { index, mask, name, type, read: (text) => number(text.trim()), blank: Number.NaN, values: [] }
-      : { index, mask, name, type, read: readText(type), blank: "", values: [] },
-  ];
-};
-
-const readText = (type: Parameters<typeof textCell>[0]): ((text: string) => string | null) => {
-  const read = textCell(type);
-  return type === "text" ? read : (text) => read(text.trim());
+  const read = number ?? textCell(type);
+  const blank = number ? Number.NaN : "";
+  return [{ index, mask, name, type, read: (text) => read(text.trim()), blank, values: [] }];
 };
 
 const isMasked = (cells: readonly string[], mask: number | null): boolean =>
   mask !== null && /^(true|1)$/i.test((cells[mask] ?? "").trim());
 
-/** With blanks between the columns, several count as one and those at the ends for nothing, outside quotes. */
-const tokens = (text: string): string[] => {
-  const found = text.match(/"(?:[^"]|"")*"?|[^\s"]\S*/g) ?? [];
-  return found.map((token) =>
-    token.startsWith('"') ? token.replace(/^"|"$/g, "").replaceAll('""', '"') : token,
-  );
-};
+const unquoted = (token: string): string =>
+  token.startsWith('"') ? token.replace(/^"|"$/g, "").replaceAll('""', '"') : token.trim();
 
-const isLoose = (text: string): boolean => text.startsWith(" ") || text.endsWith(" ") || text.includes("  ");
+/** With blanks between the columns, several count as one and those at the ends for nothing, outside quotes. */
+const betweenBlanks = (text: string): string[] => text.match(/"(?:[^"]|"")*"?|[^\s"]\S*/g) ?? [];
+
+/** With commas between the columns, blanks around a quoted cell count for nothing. */
+const betweenCommas = (text: string): string[] =>
+  Array.from(text.matchAll(/(?:^|,)\s*("(?:[^"]|"")*"?|[^,]*)/g), (match) => match[1] ?? "");
+
+const isLoose = (text: string, delimiter: string): boolean =>
+  delimiter === " "
+    ? text.startsWith(" ") || text.endsWith(" ") || text.includes("  ")
+    : text.startsWith(" ") || text.includes(', "');
+
+/** The cells of a record; one that is written with more blanks than need be is parted again, by looser rules. */
+export const cellsOf = ({ cells, text }: CsvRecord, delimiter: string): readonly string[] => {
+  if (!isLoose(text, delimiter)) return cells;
+  return (delimiter === " " ? betweenBlanks(text) : betweenCommas(text)).map(unquoted);
+};
 
 /** Turns the records of the body into batches of typed columns. */
 export class EcsvRows {
@@ -91,9 +95,6 @@ export class EcsvRows {
 
 /** Blank lines, and comments between the rows. */
 const isOutsideTable = ({ text }: CsvRecord): boolean => text.trim() === "" || text.trimStart()[0] === "#";
-
-export const cellsOf = ({ cells, text }: CsvRecord, delimiter: string): readonly string[] =>
-  delimiter === " " && isLoose(text) ? tokens(text) : cells;
 
 /** What has gathered, handed over. */
 const emptied = (gathering: Gathering): ColumnValues => {

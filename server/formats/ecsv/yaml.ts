@@ -1,16 +1,44 @@
-import { parseDocument } from "yaml";
+import { Lexer, parseDocument } from "yaml";
 import { badHeader } from "./errors.ts";
 
 /** Aliases may not unfold to more than this: a few lines could stand for millions of nodes. */
 const MOST_ALIASES = 100;
 
 /**
+ * Depth of lists within lists, by brackets and by the place where a line begins: the parser calls itself for each, and
+ * would end the process where the stack ends.
+ */
+const MOST_BRACKETS = 64;
+const MOST_INDENT = 200;
+/** Several thousand columns take half of it; what the parser makes of more would fill the memory. */
+const MOST_LEXEMES = 400_000;
+
+const isTooDeep = (text: string): boolean => {
+  let [depth, count] = [0, 0];
+  for (const lexeme of new Lexer().lex(text)) {
+    if (lexeme === "[" || lexeme === "{") depth++;
+    else if (lexeme === "]" || lexeme === "}") depth--;
+    if (depth > MOST_BRACKETS || ++count > MOST_LEXEMES) return true;
+  }
+  return text.split("\n").some((line) => (/^ *(?:[-?:] +)*/.exec(line)?.[0].length ?? 0) > MOST_INDENT);
+};
+
+const OPTIONS = {
+  schema: "failsafe",
+  logLevel: "silent",
+  // Each key would be compared with all before it: hostile headers have many.
+  uniqueKeys: false,
+} as const;
+
+/**
  * The header's YAML as plain values. Every scalar stays the text that it is, so that a column named `1e3` or `no` keeps
  * its name; tags of one program (`!astropy.table.SerializedColumn`) count for nothing.
  */
 export const readYaml = (text: string): unknown => {
+  if (isTooDeep(text))
+    throw badHeader("The header cannot be read as YAML: it holds too many lists within lists.");
   try {
-    const document = parseDocument(text, { schema: "failsafe", logLevel: "silent", prettyErrors: true });
+    const document = parseDocument(text, OPTIONS);
     const [error] = document.errors;
     if (error) throw error;
     return document.toJS({ maxAliasCount: MOST_ALIASES });
