@@ -17,13 +17,22 @@ const COLOURS = Object.keys(BC_KS_ROWS) as CoolDwarfColour[];
 describe("bolometric correction to Ks", () => {
   /** Computed from this project's fit to the published rows. */
   test.each([
-    [2.7, 2.476],
-    [3.5, 2.6091],
-    [4.5, 2.7494],
-    [5.5, 2.8607],
-    [6.5, 2.9429],
-  ])("V − J %d gives %d", (colour, correction) => {
-    expect(bolometricCorrectionKsFromColour("v-j", colour)).toBeCloseTo(correction, 4);
+    ["v-j", 2.7, 2.476],
+    ["v-j", 3.5, 2.6091],
+    ["v-j", 4.5, 2.7494],
+    ["v-j", 5.5, 2.8607],
+    ["v-j", 6.5, 2.9429],
+    ["r-j", 3.6, 2.7143],
+    ["r-z", 1.9, 2.6672],
+    ["v-ic", 2.7, 2.6939],
+    ["bp-rp", 2.9, 2.7027],
+  ] as const)("%s %d gives %d", (colour, value, correction) => {
+    expect(Math.abs(bolometricCorrectionKsFromColour(colour, value) - correction)).toBeLessThan(5.1e-5);
+  });
+
+  test("its scatter is 0.036 to 0.040 mag by colour", () => {
+    const scatters = Object.fromEntries(COLOURS.map((colour) => [colour, BC_KS_ROWS[colour].scatter]));
+    expect(scatters).toEqual({ "v-j": 0.036, "r-j": 0.036, "r-z": 0.038, "bp-rp": 0.04, "v-ic": 0.04 });
   });
 
   /** From F_bol and Ks of the star table of Mann et al. 2015. */

@@ -158,6 +158,28 @@ describe("temperature of cool dwarfs from colour", () => {
     }
   });
 
+  test("scatters are those of the table, with the zero point of 60 K in quadrature", () => {
+    // Mann et al. 2015, Table 2 (erratum version), K.
+    expect(Object.fromEntries(ROWS.map(([key, row]) => [key, row.scatterK]))).toEqual({
+      "bp-rp": 52,
+      "v-j": 55,
+      "v-ic": 53,
+      "r-z": 58,
+      "r-j": 58,
+      "bp-rp, feh": 45,
+      "v-j, feh": 42,
+      "v-ic, feh": 48,
+      "r-z, feh": 50,
+      "r-j, feh": 47,
+      "bp-rp, j-h": 49,
+      "v-j, j-h": 48,
+      "v-ic, j-h": 52,
+      "r-z, j-h": 55,
+      "r-j, j-h": 52,
+    });
+    expect(coolDwarfTeffScatter(COOL_DWARF_ROWS["v-j, feh"])).toBeCloseTo(Math.hypot(42, 60), 12);
+  });
+
   test("the plain row of BP − RP is the relation that stands alone", () => {
     const row = COOL_DWARF_ROWS["bp-rp"];
     for (const colour of [1.95, 2.7, 3.6, 4.5]) {

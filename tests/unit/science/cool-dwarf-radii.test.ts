@@ -23,6 +23,16 @@ describe("radius from temperature", () => {
     },
   );
 
+  /** Computed from Mann et al. 2015, Table 1 (erratum version): without and with [Fe/H]. */
+  test.each([
+    [2900, -0.3, 0.141089, 0.123054],
+    [3400, 0.2, 0.335284, 0.38973],
+    [3900, -0.1, 0.586874, 0.555428],
+  ])("%d K and [Fe/H] %d give %d and %d", (teff, feh, plain, withFeh) => {
+    expect(radiusFromTeff(teff)).toBeCloseTo(plain, 6);
+    expect(radiusFromTeffFeh(teff, feh)).toBeCloseTo(withFeh, 6);
+  });
+
   // Computed: the cubic without [Fe/H] is flat near 2740 K, the other near 4060 K.
   test("hotter is larger, and richer in iron is larger", () => {
     fc.assert(

@@ -34,6 +34,7 @@ describe("extinction", () => {
 
   test("a negative reddening and colours outside give none", () => {
     for (const band of BANDS) expect(extinction(band, -0.01, 0.8)).toBeNaN();
+    for (const colour of [0.2, 2.55]) expect(extinction("g", 0, colour)).toBe(0);
     for (const colour of [0.19, 2.56, Number.NaN])
       for (const band of ["g", "bp", "rp"] as const) expect(extinction(band, 0, colour)).toBeNaN();
   });

@@ -23,6 +23,9 @@ describe("temperatures on the interferometric scale", () => {
     ["v-j", 1.198, 5611],
     ["v-h", 1.484, 5691],
     ["g-i", 0.5, 5859.8],
+    ["g-r", 0.45, 5657.4],
+    ["g-h", 1.9, 5529.6],
+    ["g-k", 1.95, 5567.5],
   ] as const)("%s %d gives %d K", (key, colour, teff) => {
     expect(Math.abs(interferometricTeff(INTERFEROMETRIC_ROWS[key], colour) - teff)).toBeLessThan(0.51);
   });
@@ -38,6 +41,21 @@ describe("temperatures on the interferometric scale", () => {
       expect(teff).toBeGreaterThan(5600);
       expect(teff).toBeLessThan(5772);
     }
+  });
+
+  test("every colour holds between the limits of the table", () => {
+    const limits = Object.entries(INTERFEROMETRIC_ROWS).map(([key, row]) => [key, row.bluest, row.reddest]);
+    expect(limits).toEqual([
+      ["b-v", -0.02, 1.73],
+      ["b-v, cubic", -0.02, 1.73],
+      ["v-j", -0.12, 4.24],
+      ["v-h", -0.13, 4.77],
+      ["v-k", -0.15, 5.04],
+      ["g-r", -0.23, 1.4],
+      ["g-i", -0.43, 2.78],
+      ["g-h", -0.12, 5.59],
+      ["g-k", -0.01, 5.86],
+    ]);
   });
 
   test("at both ends the temperatures are those of A and M stars, and outside there are none", () => {

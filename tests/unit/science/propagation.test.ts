@@ -77,7 +77,8 @@ describe("first-order errors agree with drawing", () => {
     const { deviation } = spreadOf(DRAWS, () =>
       radiusFromLuminosity(1 + 0.02 * normal(), 5772 + 40 * normal()),
     );
-    expect(radiusError(0.02, 40 / 5772)).toBeCloseTo(deviation, 3);
+    expect(radiusError(0.02, 40 / 5772) / deviation).toBeCloseTo(1, 2);
+    expect(radiusError(0.06, 0.02)).toBeCloseTo(0.05, 12);
   });
 });
 

@@ -100,6 +100,25 @@ describe("temperature from twelve colours", () => {
     for (const teff of found) expect(Math.abs(teff - 5785)).toBeLessThan(1.5 * 92);
   });
 
+  /** Limits of the program of Casagrande et al. 2021: dwarfs, giants. */
+  test.each([
+    ["bp-rp", [0.2, 2.0], [0.2, 2.55]],
+    ["bp-j", [0.25, 3.0], [0.9, 4.2]],
+    ["bp-h", [0.4, 4.0], [0.4, 4.9]],
+    ["bp-ks", [0.3, 4.2], [0.3, 5.3]],
+    ["rp-j", [0.2, 1.05], [0.6, 1.55]],
+    ["rp-h", [0.2, 1.6], [0.2, 2.45]],
+    ["rp-ks", [0.2, 1.85], [0.2, 2.7]],
+    ["g-j", [0.15, 2.1], [1.0, 2.8]],
+    ["g-h", [0.25, 2.6], [0.25, 3.7]],
+    ["g-ks", [0.2, 2.8], [0.2, 3.9]],
+    ["g-bp", [-1.0, -0.15], [-1.4, -0.15]],
+    ["g-rp", [0.15, 0.85], [0.15, 1.15]],
+  ] as const)("%s holds for dwarfs %o and giants %o", (key, dwarfs, giants) => {
+    expect(SUNLIKE_ROWS[key].dwarfs).toEqual(dwarfs);
+    expect(SUNLIKE_ROWS[key].giants).toEqual(giants);
+  });
+
   test("outside the colours of dwarfs and of giants there is none", () => {
     for (const row of ROWS)
       for (const [logg, limits] of [

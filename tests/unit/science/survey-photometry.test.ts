@@ -10,6 +10,11 @@ test.each([
   expect(unsaturatedG(g)).toBeCloseTo(corrected, 6);
 });
 
+test("colours are taken from these magnitudes on", () => {
+  // Program of Casagrande et al. 2021.
+  expect(BRIGHTEST_MAG).toEqual({ g: 6, bp: 5, rp: 5, j: 5, h: 4.8, ks: 4.2 });
+});
+
 test("G of 8 and fainter stays, and stars brighter than 6 give none", () => {
   expect(unsaturatedG(8)).toBe(8);
   expect(unsaturatedG(12.3)).toBe(12.3);
