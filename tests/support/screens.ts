@@ -51,6 +51,16 @@ export const SCREENS: readonly (Omit<ScreenAt, "path"> & { path: (f: Furnished) 
   { name: "plan", path: inProgramme("plan"), ready: "h1" },
   { name: "logbook", path: inProgramme("logbook"), ready: "h1" },
   { name: "settings", path: inProgramme("settings"), ready: "h1" },
+  {
+    name: "recipe",
+    path: inProgramme((f) => `settings/recipes/${f.programme.recipeVersionId}`),
+    ready: "table",
+  },
+  {
+    name: "form of a recipe",
+    path: inProgramme((f) => `settings/recipes/${f.programme.recipeVersionId}?edit=copy`),
+    ready: "form",
+  },
   { name: "me", path: () => "/me", ready: "h1" },
 ];
 

@@ -27,6 +27,10 @@ export const valueAt = (settings: RecipeSettings, path: string): unknown =>
 const labelOf = (options: readonly Option[], value: unknown): string =>
   options.find((option) => option.value === value)?.label ?? String(value);
 
+/** "1. Distance as given; 2. Inverse of the parallax"; one alone needs no number. */
+const inOrder = (labels: readonly string[]): string =>
+  labels.length === 1 ? labels.join() : labels.map((label, i) => `${i + 1}. ${label}`).join("; ");
+
 const releaseWords = ({ astrometricQuality }: RecipeSettings): string =>
   astrometricQuality.byRelease.map(({ release, limit }) => `${release}: ${figureWords(limit)}`).join(", ") ||
   "none";
@@ -38,7 +42,7 @@ const wordsOf = (settings: RecipeSettings, key: SettingKey): string | null => {
   if (value === undefined) return null;
   if (isFigure(key)) return `${figureWords(Number(value))} ${FIGURES[key].unit}`.trim();
   if (isOrder(key) && Array.isArray(value))
-    return value.map((each) => labelOf(ORDERS[key].options, each)).join(", then ");
+    return inOrder(value.map((each) => labelOf(ORDERS[key].options, each)));
   if (typeof value === "boolean") return labelOf(CHOICES.usesFeh.options, value ? ON_OFF.on : ON_OFF.off);
   return isChoice(key) ? labelOf(CHOICES[key].options, value) : null;
 };

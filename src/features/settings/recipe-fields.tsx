@@ -164,7 +164,7 @@ export const RecipeFields = (props: Props) =>
       className="grid gap-x-8 gap-y-3 border-t border-rule py-5 md:grid-cols-[14rem_minmax(0,1fr)]"
     >
       <div>
-        <h3 className="text-[19px]">{title}</h3>
+        <h2 className="text-[22px]">{title}</h2>
         {note ? <p className="mt-1 text-[13px] text-soft">{note}</p> : null}
       </div>
       <div className="flex min-w-0 flex-col gap-4">

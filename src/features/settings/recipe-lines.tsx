@@ -17,6 +17,12 @@ const publishedOf = ({ key }: SettingLine): string =>
     .filter(Boolean)
     .join(" ");
 
+const Value = ({ line, at }: { line: SettingLine; at: number }) => {
+  const value = line.values[at];
+  if (value === null || value === undefined) return <span className="text-faint">not in use</span>;
+  return isFigure(line.key) ? <span className="font-mono text-[13px]">{value}</span> : value;
+};
+
 const Line = ({
   line,
   recipes,
@@ -35,8 +41,8 @@ const Line = ({
       {isDifferenceOnly ? null : <span className="block text-xs text-soft">{publishedOf(line)}</span>}
     </th>
     {recipes.map(({ versionId }, i) => (
-      <td key={versionId} className={isFigure(line.key) ? "font-mono text-[13px]" : "wrap-anywhere"}>
-        {line.values[i] ?? <span className="text-faint">not in use</span>}
+      <td key={versionId} className="w-[30%] wrap-anywhere">
+        <Value line={line} at={i} />
       </td>
     ))}
   </tr>

@@ -56,7 +56,7 @@ const colours = (keys: readonly string[]): Option[] =>
     label: value
       .split("-")
       .map((band) => BANDS[band] ?? band)
-      .join(" − "),
+      .join("\u00a0−\u00a0"),
   }));
 
 const COOL_SOURCE = "Mann et al. 2015, ApJ 804, 64";
@@ -112,7 +112,7 @@ export const FIGURES = {
     when: { choice: "extinctionRule", is: "by-distance" },
   },
   logg: { path: "assumed.logg", label: "log g", unit: "dex", range: "logg", source: "Common practice" },
-  loggError: { path: "assumed.loggError", label: "Its error", unit: "dex", range: "loggError" },
+  loggError: { path: "assumed.loggError", label: "Error of log g", unit: "dex", range: "loggError" },
   feh: {
     path: "assumed.feh",
     label: "[Fe/H]",
@@ -120,7 +120,7 @@ export const FIGURES = {
     range: "feh",
     source: `Range: ${SUNLIKE_SOURCE}`,
   },
-  fehError: { path: "assumed.fehError", label: "Its error", unit: "dex", range: "fehError" },
+  fehError: { path: "assumed.fehError", label: "Error of [Fe/H]", unit: "dex", range: "fehError" },
   coolestSunlikeK: {
     path: "ranges.coolestSunlikeK",
     label: "Coolest star with a sun-like temperature",

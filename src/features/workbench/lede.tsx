@@ -1,7 +1,8 @@
 import { useQuery } from "@tanstack/react-query";
-import type { ViewSummary } from "#shared/api/stars.ts";
+import type { Catalogue, ViewSummary } from "#shared/api/stars.ts";
 import type { ViewSpec } from "#shared/catalogue/view.ts";
 import { count } from "#shared/format/numbers.ts";
+import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { campaignsOptions, cardsOptions } from "#src/api/instruments.ts";
 import { meritsOptions } from "#src/api/merits.ts";
 import { catalogueOptions } from "#src/api/stars.ts";
@@ -34,6 +35,12 @@ const withChosen = (versions: readonly Version[], chosen: Version | null, none: 
     })),
 ];
 
+/** "Edition 2: extract 2, Motions, by Default v1 · 3f2a91c0"; a recompute names its recipe itself. */
+const editionWords = ({ number, reason, recipe }: Catalogue["editions"][number]): string => {
+  const label = recipeLabel(recipe);
+  return `Edition ${number}: ${reason}${reason.includes(label) ? "" : `, by ${label}`}`;
+};
+
 /** The one sentence that says what is on screen; its underlined parts change it. The page's heading. */
 export const Lede = ({ programmeId, view, summary, ask }: Props) => {
   const catalogue = useQuery(catalogueOptions(programmeId));
@@ -53,7 +60,7 @@ export const Lede = ({ programmeId, view, summary, ask }: Props) => {
           { value: null, label: "The newest edition" },
           ...(catalogue.data?.editions ?? []).map((e) => ({
             value: String(e.number),
-            label: `Edition ${e.number}: ${e.reason}`,
+            label: editionWords(e),
           })),
         ]}
         onChoose={(edition) => ask({ edition: edition === null ? null : Number(edition) })}

@@ -88,7 +88,7 @@ describe("recipes side by side", () => {
     const found = lines(recipeDifferences([DEFAULT_RECIPE, PRACTICE_RECIPE]));
     expect(found.find(({ key }) => key === "usesFeh")?.values).toEqual(["Where it is given", "Never"]);
     expect(found.find(({ key }) => key === "distanceOrder")?.values).toEqual([
-      "Distance as given, then Inverse of the parallax",
+      "1. Distance as given; 2. Inverse of the parallax",
       "Inverse of the parallax",
     ]);
     expect(found.map(({ key }) => key)).not.toContain("ruweLimit");
