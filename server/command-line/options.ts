@@ -30,7 +30,8 @@ export const readOptions = <const O extends Readonly<Record<string, Option>>>(
     const { values, positionals } = parseArgs({ args: [...args], options: known, allowPositionals: true });
     return { values: values as Values<O>, positionals };
   } catch (error) {
-    const why = error instanceof Error ? (error.message.split(". To specify")[0] ?? "") : String(error);
+    const said = error instanceof Error ? error.message : String(error);
+    const why = said.replaceAll("\n", " ").split(/[.?] To specify/)[0] ?? "";
     throw usage(`${why.replace(/\.$/, "")}.`, `\`shortlight ${command} --help\` lists the options.`);
   }
 };
