@@ -1,6 +1,6 @@
 import { isBlankWord } from "../numbers.ts";
 import type { ColumnType, ColumnValues } from "../table.ts";
-import { isPointLeftOut, readAsciiNumber, readAsciiWhole } from "./ascii-numbers.ts";
+import { isPointLeftOut, readAsciiNumber, readAsciiWhole, readPlainNumber } from "./ascii-numbers.ts";
 import { applyScale } from "./binary-cells.ts";
 import { type ColumnReader, columnName, describeColumn, type RowBlock } from "./columns.ts";
 import { badHeader, counted, quoted } from "./errors.ts";
@@ -10,7 +10,7 @@ import type { Hdu } from "./hdu.ts";
 import type { FitsHeader } from "./header.ts";
 import { leaveOut } from "./left-out.ts";
 import { readScale } from "./scale.ts";
-import { readTexts } from "./text-cells.ts";
+import { readText, readTexts } from "./text-cells.ts";
 
 /** A column of an ASCII table in its place. */
 interface Field {
@@ -80,16 +80,29 @@ const refuse = (block: RowBlock, row: number, { name }: Field, text: string): vo
 const numberIn = (text: string, { code, decimals }: AsciiForm): number =>
   code === "I" ? Number(readAsciiWhole(text) ?? Number.NaN) : readAsciiNumber(text, decimals);
 
+/** A field that is no plain number: blank, refused, or spelled in a rarer way. */
+const readRareNumber = (block: RowBlock, row: number, field: Field): number => {
+  const text = readText(block, row, field.offset, field.form.width).trim();
+  if (text === field.mark) return Number.NaN;
+  const value = numberIn(text, field.form);
+  if (Number.isNaN(value)) {
+    if (!isBlank(field, text, block.firstRow + row)) refuse(block, row, field, text);
+  } else if (isPointLeftOut(text, field.form.decimals)) askPoint(field, block.firstRow + row, text, value);
+  return value;
+};
+
 const readNumbers = (block: RowBlock, field: Field): Float64Array => {
-  const texts = readTexts(block, field.offset, field.form.width, field.name, field.findings);
-  const values = new Float64Array(block.rows);
-  for (let row = 0; row < block.rows; row++) {
-    const text = texts[row]?.trim() ?? "";
-    const value = text === field.mark ? Number.NaN : numberIn(text, field.form);
-    values[row] = value;
-    if (Number.isNaN(value)) {
-      if (!isBlank(field, text, block.firstRow + row)) refuse(block, row, field, text);
-    } else if (isPointLeftOut(text, field.form.decimals)) askPoint(field, block.firstRow + row, text, value);
+  const { bytes, rows, rowBytes } = block;
+  const { code, width, decimals } = field.form;
+  const marked = readAsciiNumber(field.mark ?? "", 0);
+  const values = new Float64Array(rows);
+  for (let row = 0, at = field.offset; row < rows; row++, at += rowBytes) {
+    const value = readPlainNumber(bytes, at, at + width, decimals > 0);
+    // A mark is met by its number too, however many zeros either has behind its point.
+    if (value === marked) values[row] = Number.NaN;
+    else if (Number.isNaN(value) || (code === "I" && !Number.isInteger(value)))
+      values[row] = readRareNumber(block, row, field);
+    else values[row] = value;
   }
   return values;
 };

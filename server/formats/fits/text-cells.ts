@@ -14,6 +14,17 @@ const endOfText = (bytes: Uint8Array, from: number, width: number): number => {
   return end;
 };
 
+/** The text of a single cell, each byte a letter. */
+export const readText = (
+  { bytes, rowBytes }: RowBlock,
+  row: number,
+  offset: number,
+  width: number,
+): string => {
+  const from = row * rowBytes + offset;
+  return bytes.toString("latin1", from, endOfText(bytes, from, width));
+};
+
 /** Copies a column's cells one behind the other, and says whether all of them are ASCII. */
 const gather = (block: RowBlock, offset: number, width: number, cells: Uint8Array): boolean => {
   const { bytes, rows, rowBytes } = block;

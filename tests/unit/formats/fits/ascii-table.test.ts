@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { readAsciiNumber } from "#server/formats/fits/ascii-numbers.ts";
+import { readAsciiNumber, readPlainNumber } from "#server/formats/fits/ascii-numbers.ts";
 import { asciiFile, keysOf, readFits } from "./fits-file.ts";
 
 describe("an ASCII table", () => {
@@ -44,7 +44,7 @@ describe("an ASCII table", () => {
           { name: "k", form: "I12", from: 7, keywords: { TNULL: "0" } },
           { name: "a", form: "A3", from: 19, keywords: { TNULL: "***" } },
         ],
-        [" -9.99           0***", "                  ab ", "******         NaNxyz", "  1.00           5***"],
+        ["-9.990           0***", "                  ab ", "******         NaNxyz", "  1.00           5***"],
       ),
     );
     expect(cells).toEqual([
@@ -183,5 +183,40 @@ describe("numbers in ASCII", () => {
         },
       ),
     );
+  });
+
+  // Whatever the quick way reads, it reads to the last digit as the thorough one does, which goes by way of a text.
+  test("are the same from their bytes as from their text", () => {
+    const digits = fc.string({ unit: fc.constantFrom(..."0123456789"), maxLength: 9 });
+    const field = fc
+      .tuple(
+        fc.constantFrom("", " ", "-", "+", "--"),
+        digits,
+        fc.constantFrom("", ".", ".", "..", ","),
+        digits,
+        fc.constantFrom("", "", "E", "e-", "D+", "d", "x"),
+        fc.constantFrom("", "", "0", "5", "12", "22", "40", "400"),
+        fc.constantFrom("", " ", "\0"),
+      )
+      .map((parts) => parts.join(""));
+    let plain = 0;
+    fc.assert(
+      fc.property(field, (text) => {
+        const bytes = Buffer.from(`9${text}9`);
+        const value = readPlainNumber(bytes, 1, bytes.length - 1, false);
+        if (Number.isNaN(value)) return;
+        plain++;
+        expect(value).toBe(readAsciiNumber(text.trim(), 0));
+      }),
+      { numRuns: 3000 },
+    );
+    expect(plain).toBeGreaterThan(200);
+  });
+
+  test("are left to a closer look without the point that their form leaves out", () => {
+    const bytes = Buffer.from("  12  1.2");
+    expect(readPlainNumber(bytes, 0, 4, true)).toBeNaN();
+    expect(readPlainNumber(bytes, 0, 4, false)).toBe(12);
+    expect(readPlainNumber(bytes, 4, 9, true)).toBe(1.2);
   });
 });
