@@ -1,6 +1,4 @@
-import type { ColumnType } from "../table.ts";
-
-/** A cell as its column's type has it; null for a text that is none of that type. Blanks are NaN and the empty text. */
+/** A cell as its column's data type has it; null for a text that is none of that type. Blanks are NaN and the empty text. */
 export type NumberCell = (text: string) => number | null;
 export type TextCell = (text: string) => string | null;
 
@@ -26,20 +24,39 @@ const float64: NumberCell = (text) => {
   return text === "" ? Number.NaN : (WORDS.get(text.toLowerCase()) ?? null);
 };
 
+/** Half precision keeps 11 binary digits down to 2^−14 and steps of 2^−24 below, and ends at 65 504. */
+const toHalf = (value: number): number => {
+  const size = Math.abs(value);
+  if (!Number.isFinite(value) || size === 0) return value;
+  const step = 2 ** Math.max(Math.floor(Math.log2(size)) - 10, -24);
+  const steps = size / step;
+  const below = Math.floor(steps);
+  const isUp = steps - below > 0.5 || (steps - below === 0.5 && below % 2 === 1);
+  const rounded = (isUp ? below + 1 : below) * step;
+  return Math.sign(value) * (rounded > 65_504 ? Number.POSITIVE_INFINITY : rounded);
+};
+
+const float16: NumberCell = (text) => {
+  const value = float64(text);
+  return value === null ? null : toHalf(value);
+};
+
 const float32: NumberCell = (text) => {
   const value = float64(text);
   return value === null ? null : Math.fround(value);
 };
 
-const NUMBER_CELLS: Readonly<Partial<Record<ColumnType, NumberCell>>> = {
+const NUMBER_CELLS: Readonly<Record<string, NumberCell>> = {
   int8: whole(-128, 127),
   int16: whole(-32_768, 32_767),
   int32: whole(-2_147_483_648, 2_147_483_647),
   uint8: whole(0, 255),
   uint16: whole(0, 65_535),
   uint32: whole(0, 4_294_967_295),
+  float16,
   float32,
   float64,
+  float128: float64,
 };
 
 const longWhole =
@@ -59,14 +76,13 @@ const BOOLEANS: ReadonlyMap<string, string> = new Map([
   ["0", "false"],
 ]);
 
-const TEXT_CELLS: Readonly<Partial<Record<ColumnType, TextCell>>> = {
+const TEXT_CELLS: Readonly<Record<string, TextCell>> = {
   int64: longWhole(-(2n ** 63n), 2n ** 63n - 1n),
   uint64: longWhole(0n, 2n ** 64n - 1n),
-  boolean: (text) => BOOLEANS.get(text.toLowerCase()) ?? null,
-  text: (text) => text,
+  bool: (text) => BOOLEANS.get(text.toLowerCase()) ?? null,
 };
 
-/** Reader of the cells of a column of numbers; undefined for the types whose values are kept as text. */
-export const numberCell = (type: ColumnType): NumberCell | undefined => NUMBER_CELLS[type];
+/** Reader of the cells of a column of numbers; undefined for data types whose values are kept as text. */
+export const numberCell = (datatype: string): NumberCell | undefined => NUMBER_CELLS[datatype];
 
-export const textCell = (type: ColumnType): TextCell => TEXT_CELLS[type] ?? ((text) => text);
+export const textCell = (datatype: string): TextCell => TEXT_CELLS[datatype] ?? ((text) => text);

@@ -5,6 +5,7 @@ import { entriesOf, readYaml, textIn } from "./yaml.ts";
 /** One column of the file; one that is left out still takes its place in every row. */
 export interface EcsvColumn {
   readonly name: string;
+  readonly datatype: string;
   /** Null where the column is left out. */
   readonly column: TableColumn | null;
   /** Why it is left out; empty where it is read. */
@@ -58,7 +59,7 @@ const columnOf = (node: unknown, index: number): Omit<EcsvColumn, "mask"> => {
   if (typeof name !== "string" || name === "") throw badHeader(`Column ${index + 1} has no name.`);
   const datatype = textIn(fields.get("datatype"));
   const why = whyLeftOut(datatype, textIn(fields.get("subtype")));
-  if (why !== "") return { name, column: null, why };
+  if (why !== "") return { name, datatype, column: null, why };
   const column: TableColumn = {
     name,
     type: TYPES[datatype] ?? "text",
@@ -68,7 +69,7 @@ const columnOf = (node: unknown, index: number): Omit<EcsvColumn, "mask"> => {
     nullMark: null,
     frame: null,
   };
-  return { name, column, why };
+  return { name, datatype, column, why };
 };
 
 /** Names of masks by the name of what they mask: masked columns may be written with their mask beside them. */

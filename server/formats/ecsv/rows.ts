@@ -10,19 +10,18 @@ interface Gathering {
   readonly index: number;
   readonly mask: number | null;
   readonly name: string;
-  readonly type: string;
+  readonly datatype: string;
   read(text: string): number | string | null;
   readonly blank: number | string;
   values: (number | string)[];
 }
 
-const gatheringOf = ({ column, mask }: EcsvColumn, index: number): Gathering[] => {
+const gatheringOf = ({ column, name, datatype, mask }: EcsvColumn, index: number): Gathering[] => {
   if (column === null) return [];
-  const { name, type } = column;
-  const number = numberCell(type);
-  const read = number ?? textCell(type);
+  const number = numberCell(datatype);
+  const read = number ?? textCell(datatype);
   const blank = number ? Number.NaN : "";
-  return [{ index, mask, name, type, read: (text) => read(text.trim()), blank, values: [] }];
+  return [{ index, mask, name, datatype, read: (text) => read(text.trim()), blank, values: [] }];
 };
 
 const isMasked = (cells: readonly string[], mask: number | null): boolean =>
@@ -81,11 +80,11 @@ export class EcsvRows {
     const { gatherings, read } = this;
     const width = this.header.columns.length;
     if (cells.length !== width) return `This row has ${cells.length} values; the table has ${width} columns.`;
-    for (const [i, { index, mask, name, type, blank, ...column }] of gatherings.entries()) {
+    for (const [i, { index, mask, name, datatype, blank, ...column }] of gatherings.entries()) {
       const text = cells[index] ?? "";
       const value = isMasked(cells, mask) ? blank : column.read(text);
       if (value === null)
-        return `“${text.slice(0, SHOWN_CHARACTERS)}” in ${name} is no value of the type ${type}.`;
+        return `“${text.slice(0, SHOWN_CHARACTERS)}” in ${name} is no value of the type ${datatype}.`;
       read[i] = value;
     }
     for (const [i, { values, blank }] of gatherings.entries()) values.push(read[i] ?? blank);

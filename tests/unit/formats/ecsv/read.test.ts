@@ -128,6 +128,14 @@ describe("the body", () => {
     expect(rows).toEqual([[Math.fround(12.345)]]);
   });
 
+  test("half precision is rounded as numpy rounds it", async () => {
+    const texts = ["0.1", "65500.0", "65520", "6e-08", "-1.00048828125", "1.00146484375", "nan"];
+    const { rows } = await readEcsv(ecsv(["{name: h, datatype: float16}"], `h\n${texts.join("\n")}\n`));
+    // Computed by numpy: float(np.float16(x)).
+    const halves = [0.0999755859375, 65504, Number.POSITIVE_INFINITY, 2 ** -24, -1, 1.001953125, null];
+    expect(rows).toEqual(halves.map((value) => [value]));
+  });
+
   test("comments and blank lines stand between rows; a quoted hash is a value", async () => {
     expect((await readEcsv(ecsv([B], 'b\n# no row\n\n"#1"\nx\n'))).rows).toEqual([["#1"], ["x"]]);
   });
