@@ -86,10 +86,10 @@ const ABS_G = distanceModulus("G", "A_G", (s) => absoluteMagnitude(s.g, s.distan
 
 const BP_RP: Definition = {
   method: null,
-  formula: "BP - RP - R_C * E_BV",
-  inputs: ["BP", "RP", "R_C", "E_BV"],
+  formula: "BP - RP - R_BP_RP * E_BV",
+  inputs: ["BP", "RP", "R_BP_RP", "E_BV"],
   reference: EXTINCTION_REFERENCE,
-  compute: (star) => star.bp - star.rp - (extinctionOf(star, "bp") - extinctionOf(star, "rp")),
+  compute: (star) => star.bp - star.rp - star.bpRpPerExcess * star.ebv,
 };
 
 export const BRIGHTNESS_DEFINITIONS = {
@@ -102,8 +102,17 @@ export const BRIGHTNESS_DEFINITIONS = {
 } satisfies Record<string, DefinitionOf>;
 
 /** Extinction of this star in a band, mag; 0 where nothing reddens it. */
-export const extinctionOf = (star: Scratch, band: ExtinctionBand): number =>
+const extinctionOf = (star: Scratch, band: ExtinctionBand): number =>
   star.ebv === 0 ? 0 : extinction(band, star.ebv, star.bp - star.rp);
+
+/** V has no coefficient in that law; 3.1 is the usual ratio of extinction to reddening (common practice, no source). */
+const V_PER_EXCESS = 3.1;
+
+/** Extinction in a band per E(B − V); 0 where nothing reddens the star. */
+export const perExcess = (star: Scratch, band: ExtinctionBand | "v"): number => {
+  if (star.ebv === 0) return 0;
+  return band === "v" ? V_PER_EXCESS : extinctionOf(star, band) / star.ebv;
+};
 
 /** Why a parallax gives no distance. */
 const distanceReason = (parallax: number, error: number): BlankKey => {
@@ -191,6 +200,7 @@ const dim = (star: Scratch, recipe: RecipeSettings): void => {
   star.firstColour = star.bp - star.rp - BP_RP_REDDENING * star.ebv;
   star.extinctionKs = star.ebv === 0 ? 0 : EXTINCTION_KS.compute(star, recipe);
   star.extinctionG = EXTINCTION_G.compute(star, recipe);
+  star.bpRpPerExcess = perExcess(star, "bp") - perExcess(star, "rp");
   star.bpRp = BP_RP.compute(star, recipe);
   star.bpRpError = Math.sqrt(star.bpError * star.bpError + star.rpError * star.rpError);
 };

@@ -52,7 +52,10 @@ export const only =
   () =>
     definition;
 
+/** Where nothing held, the first that has a range says what it was held against. */
 export const byMethod =
   (...definitions: readonly Definition[]): DefinitionOf =>
   (_star, _recipe, method) =>
-    definitions.find((definition) => definition.method === method);
+    definitions.find((definition) =>
+      method === undefined ? definition.ranges !== undefined : definition.method === method,
+    );

@@ -26,3 +26,6 @@ export const polynomial = (symbol: string, coefficients: readonly number[]): str
 
 /** `M_Ks - 7.5`, `T_eff - 5780`. */
 export const shifted = (symbol: string, zeroPoint: number): string => `(${symbol} - ${zeroPoint})`;
+
+/** A fraction in percent, without the digits that binary fractions add: `2.89 %`. */
+export const percent = (fraction: number): string => `${Number((100 * fraction).toPrecision(6))} %`;

@@ -100,8 +100,7 @@ export const LUMINOSITY_DEFINITIONS = {
   luminosity: byMethod(LIGHT_FROM_KS, LIGHT_FROM_G, LIGHT_FROM_RADIUS),
 } satisfies Record<string, DefinitionOf>;
 
-/** Luminosity from M_G and its bolometric correction, into the scratch; false where it does not hold. */
-export const lightFromG = (star: Scratch, recipe: RecipeSettings): boolean => {
+const lightFromG = (star: Scratch, recipe: RecipeSettings): boolean => {
   star.correctionG = correctionGOf(star.teff).compute(star, recipe);
   const luminosity = LIGHT_FROM_G.compute(star, recipe);
   if (Number.isNaN(luminosity)) return false;
@@ -139,12 +138,33 @@ const tryMethod = (method: LuminosityMethod, star: Scratch, recipe: RecipeSettin
   return method === "correction-g" ? lightFromG(star, recipe) : lightFromRadius(star, recipe);
 };
 
-/** Luminosity by the first method of the recipe that holds. */
+/**
+ * Luminosity without a radius, into the scratch, for a radius that rests on it: by the first bolometric correction of the
+ * recipe that holds. False where none does.
+ */
+export const lightByCorrection = (star: Scratch, recipe: RecipeSettings): boolean => {
+  for (const method of recipe.luminosity) {
+    if (method === "radius-and-temperature" || !tryMethod(method, star, recipe)) continue;
+    star.lightMethod = method;
+    return true;
+  }
+  return false;
+};
+
+const write = (star: Scratch, out: Slots, method: LuminosityMethod): void => {
+  out.luminosity.method(star.row, method);
+  out.luminosity.value(star.row, star.luminosity, star.luminosityErrors);
+};
+
+/** Luminosity by the first method of the recipe that holds; one that a radius rests on stays as it is. */
 export const deriveLuminosity = (star: Scratch, recipe: RecipeSettings, out: Slots): void => {
+  if (star.lightMethod !== null) {
+    write(star, out, star.lightMethod);
+    return;
+  }
   for (const method of recipe.luminosity) {
     if (!tryMethod(method, star, recipe)) continue;
-    out.luminosity.method(star.row, method);
-    out.luminosity.value(star.row, star.luminosity, star.luminosityErrors);
+    write(star, out, method);
     return;
   }
   star.luminosity = Number.NaN;

@@ -24,7 +24,7 @@ import {
 } from "#shared/science/sunlike.ts";
 import { byMethod, type Definition, type DefinitionOf, only } from "./definition.ts";
 import { isCool } from "./dwarf.ts";
-import { polynomial, shifted, term } from "./formula-text.ts";
+import { percent, polynomial, shifted, term } from "./formula-text.ts";
 import { combine, SOURCE, scale, setMagnitudeErrors } from "./relative-error.ts";
 import type { Scratch } from "./scratch.ts";
 import type { Slots } from "./slots.ts";
@@ -38,7 +38,7 @@ const COOL: Definition = {
   formula: `10^(${polynomial(MAGNITUDE, MASS_COEFFICIENTS)})`,
   inputs: ["M_Ks"],
   ranges: ({ ranges }) => [{ symbol: "M_Ks", from: ranges.brightestAbsKs, to: ranges.faintestAbsKs }],
-  scatter: `${100 * MASS_SCATTER} %`,
+  scatter: percent(MASS_SCATTER),
   reference: `${MANN_2019}, eq. 4.`,
   compute: ({ absKs }) => massFromAbsKs(absKs),
 };
@@ -51,7 +51,7 @@ const COOL_FEH: Definition = {
     { symbol: "M_Ks", from: ranges.brightestAbsKs, to: ranges.faintestAbsKs },
     { symbol: "FeH", from: MASS_FEH.least, to: MASS_FEH.most },
   ],
-  scatter: `${100 * MASS_FEH_SCATTER} %`,
+  scatter: percent(MASS_FEH_SCATTER),
   reference: `${MANN_2019}, eq. 5.`,
   compute: ({ absKs, feh }) => massFromAbsKsFeh(absKs, feh),
 };
@@ -60,7 +60,7 @@ const FROM_SPECTRUM: Definition = {
   method: "spectrum",
   formula: spectralFormula(SPECTRAL_MASS_COEFFICIENTS),
   inputs: ["T_eff", "logg", "FeH"],
-  scatter: `${100 * SPECTRAL_MASS_SCATTER} %`,
+  scatter: percent(SPECTRAL_MASS_SCATTER),
   reference: "Torres, Andersen & Giménez 2010, A&A Rev. 18, 67, eq. 5 and Table 4.",
   compute: ({ teff, logg, feh }) => massFromSpectrum(teff, logg, feh),
 };

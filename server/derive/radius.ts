@@ -24,8 +24,8 @@ import {
 } from "#shared/science/spectral-radius.ts";
 import { byMethod, type Definition, type DefinitionOf } from "./definition.ts";
 import { isCool } from "./dwarf.ts";
-import { polynomial, term } from "./formula-text.ts";
-import { lightFromG } from "./luminosity.ts";
+import { percent, polynomial, term } from "./formula-text.ts";
+import { lightByCorrection } from "./luminosity.ts";
 import { combine, SOURCE, scale, setMagnitudeErrors } from "./relative-error.ts";
 import type { Scratch } from "./scratch.ts";
 import type { Slots } from "./slots.ts";
@@ -39,7 +39,7 @@ const COOL: Definition = {
   formula: polynomial("M_Ks", RADIUS_COEFFICIENTS),
   inputs: ["M_Ks"],
   ranges: ({ ranges }) => [{ symbol: "M_Ks", from: ranges.brightestAbsKs, to: ranges.faintestAbsKs }],
-  scatter: `${100 * RADIUS_SCATTER} %`,
+  scatter: percent(RADIUS_SCATTER),
   reference: `${MANN_2015}, eq. 4; published for ${COOL_DWARF_ABS_KS.brightest} to ${COOL_DWARF_ABS_KS.faintest}.`,
   compute: ({ absKs }) => radiusFromAbsKs(absKs),
 };
@@ -53,7 +53,7 @@ const COOL_FEH: Definition = {
     { symbol: "M_Ks", from: ranges.brightestAbsKs, to: ranges.faintestAbsKs },
     { symbol: "FeH", from: RADIUS_FEH.least, to: RADIUS_FEH.most },
   ],
-  scatter: `${100 * RADIUS_FEH_SCATTER} %`,
+  scatter: percent(RADIUS_FEH_SCATTER),
   reference: `${MANN_2015}, eq. 5.`,
   compute: ({ absKs, feh }) => radiusFromAbsKsFeh(absKs, feh),
 };
@@ -71,7 +71,7 @@ const FROM_SPECTRUM: Definition = {
   method: "spectrum-size",
   formula: spectralFormula(SPECTRAL_RADIUS_COEFFICIENTS),
   inputs: ["T_eff", "logg", "FeH"],
-  scatter: `${100 * SPECTRAL_RADIUS_SCATTER} %`,
+  scatter: percent(SPECTRAL_RADIUS_SCATTER),
   reference: "Torres, Andersen & Giménez 2010, A&A Rev. 18, 67, eq. 6 and Table 4.",
   compute: ({ teff, logg, feh }) => radiusFromSpectrum(teff, logg, feh),
 };
@@ -112,7 +112,7 @@ const coolRadius = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean 
 };
 
 const radiusFromLight = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => {
-  if (!lightFromG(star, recipe)) return false;
+  if (!lightByCorrection(star, recipe)) return false;
   star.radius = FROM_LIGHT.compute(star, recipe);
   combine(star.radiusErrors, 0.5, star.luminosityErrors, -2, star.teffErrors);
   out.radius.method(star.row, FROM_LIGHT.method);
@@ -143,6 +143,7 @@ const tryMethod = (method: RadiusMethod, star: Scratch, recipe: RecipeSettings, 
 
 /** Radius by the first method of the recipe that holds. */
 export const deriveRadius = (star: Scratch, recipe: RecipeSettings, out: Slots): void => {
+  star.lightMethod = null;
   for (const method of recipe.radius) {
     if (!tryMethod(method, star, recipe, out)) continue;
     out.radius.value(star.row, star.radius, star.radiusErrors);

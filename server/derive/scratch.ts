@@ -1,3 +1,4 @@
+import type { LuminosityMethod } from "#shared/science/recipes.ts";
 import { errorVector } from "./relative-error.ts";
 
 /**
@@ -45,6 +46,8 @@ export const newScratch = () => ({
   /** BP − RP without reddening. */
   bpRp: Number.NaN,
   bpRpError: Number.NaN,
+  /** Its reddening per E(B − V). */
+  bpRpPerExcess: 0,
   /** The colour, without reddening, that gives the temperature, and its error. */
   colour: Number.NaN,
   colourError: Number.NaN,
@@ -68,6 +71,8 @@ export const newScratch = () => ({
   correctionKs: Number.NaN,
   correctionG: Number.NaN,
   luminosity: Number.NaN,
+  /** By which correction the luminosity came about that the radius rests on; null where it rests on none. */
+  lightMethod: null as LuminosityMethod | null,
   radius: Number.NaN,
   mass: Number.NaN,
   density: Number.NaN,

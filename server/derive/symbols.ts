@@ -127,6 +127,7 @@ export const SYMBOLS = {
     error: (s) => s.ebvError,
   },
   R_C: setting("reddening of the colour per E(B − V)", "", (s) => s.colourPerExcess),
+  R_BP_RP: setting("reddening of BP − RP per E(B − V)", "", (s) => s.bpRpPerExcess),
   f_plx: setting(
     "relative error of the parallax",
     "",

@@ -29,7 +29,7 @@ import {
   sunlikeTeffIronSlope,
 } from "#shared/science/sunlike-colours.ts";
 import { BRIGHTEST_MAG, FAINTEST_SATURATED_G } from "#shared/science/survey-photometry.ts";
-import { extinctionOf } from "./brightness.ts";
+import { perExcess } from "./brightness.ts";
 import { byMethod, type Definition, type DefinitionOf } from "./definition.ts";
 import { polynomial, sum, term } from "./formula-text.ts";
 import { at, errorAt, type Inputs } from "./inputs.ts";
@@ -166,20 +166,13 @@ const write = (star: Scratch, out: Slots, method: MethodKey | null): void => {
   out.teff.method(star.row, method);
 };
 
-/** V has no coefficient in that law; 3.1 is the usual ratio of extinction to reddening (common practice, no source). */
-const V_PER_EXCESS = 3.1;
-
-/** Change of a band's magnitude per E(B − V). */
-const perExcess = (star: Scratch, band: Band): number =>
-  band === "v" ? V_PER_EXCESS : extinctionOf(star, band) / star.ebv;
-
 const readColour = (
   star: Scratch,
   { bands, colour }: SunlikeStep | CoolStep,
   recipe: RecipeSettings,
 ): void => {
   const [first, second] = bands;
-  star.colourPerExcess = star.ebv === 0 ? 0 : perExcess(star, first) - perExcess(star, second);
+  star.colourPerExcess = perExcess(star, first) - perExcess(star, second);
   star.colour = colour.compute(star, recipe);
   const a = errorOf(star, first);
   const b = errorOf(star, second);

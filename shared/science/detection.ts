@@ -54,7 +54,7 @@ export const statisticOf = (
 ): CampaignSettings["statistic"] => (statistic === "campaign" ? campaign.statistic : statistic);
 
 /** Impact parameter of the mean chord, √(1 − (π/4)²). */
-const MEAN_CHORD_IMPACT = Math.sqrt(1 - MEAN_CHORD ** 2);
+export const MEAN_CHORD_IMPACT = Math.sqrt(1 - MEAN_CHORD ** 2);
 
 /**
  * Radius of the smallest planet found on one orbit, Earth radii, by the campaign's statistic. A box weighs the whole

@@ -1,0 +1,143 @@
+import type { WorkingInput } from "#shared/api/workings.ts";
+import { PRESENT } from "#shared/catalogue/blank-reasons.ts";
+import { EARTH_RADII_PER_SOLAR } from "#shared/science/constants.ts";
+import {
+  MEAN_CHORD_IMPACT,
+  smallestPlanet,
+  statisticOf,
+  trapezoidDuration,
+} from "#shared/science/detection.ts";
+import { scaledAxis } from "#shared/science/orbit.ts";
+import type { AssessedStar } from "./assess.ts";
+import { noiseSteps } from "./noise-steps.ts";
+import { derived, input, ofCard, type Seen, type SeenStep } from "./seen.ts";
+
+const transitsStep = ({ star, assessment, campaign }: Seen): SeenStep => ({
+  key: "transits",
+  symbol: "N",
+  label: "transits in the campaign",
+  unit: "",
+  value: assessment.transits,
+  formula: "floor(length * duty / P_E * (1 + 1e-12))",
+  inputs: [
+    ofCard("length", "length of the campaign", "d", campaign.lengthDays),
+    ofCard("duty", "share of the time that is observed", "", campaign.duty),
+    input("derived", "P_E", "period at Earth's insolation", "d", star.earthPeriod, "earth_period"),
+  ],
+  reference: "Whole periods in the observed time; the factor undoes the rounding of binary fractions.",
+});
+
+const share = (star: AssessedStar): WorkingInput =>
+  Number.isNaN(star.lightShare)
+    ? input("assumed", "share", "light share, not known: the star counts as alone", "", 1)
+    : input("given", "share", "light share, F_target / F_total", "", star.lightShare);
+
+const PLANET = "k_E * R * sqrt(SNR * 1e-6 * sigma / (sqrt(N * T_sig) * share))";
+
+const planetInputs = ({ star, assessment, campaign }: Seen): WorkingInput[] => [
+  ofCard("k_E", "solar radius in Earth radii", "", EARTH_RADII_PER_SOLAR),
+  input("derived", "R", "radius of the star", "solRad", star.radius, "radius"),
+  ofCard("SNR", "signal-to-noise ratio of a detection", "", campaign.snrLimit),
+  input("derived", "sigma", "noise in one hour", "ppm", assessment.noise1h, "noise_1h"),
+  input("derived", "N", "transits in the campaign", "", assessment.transits, "transits"),
+  share(star),
+];
+
+const JENKINS =
+  "Jenkins 2002, ApJ 575, 493: the multiple-event statistic, solved for the radius; white noise.";
+
+const boxStep = (
+  seen: Seen,
+  key: string,
+  symbol: string,
+  label: string,
+  value: number,
+  weighed: WorkingInput,
+): SeenStep => ({
+  key,
+  symbol,
+  label,
+  unit: "earthRad",
+  value,
+  formula: PLANET,
+  inputs: [...planetInputs(seen), weighed],
+  reference: JENKINS,
+});
+
+const duration = (star: AssessedStar): WorkingInput =>
+  input(
+    "derived",
+    "T_sig",
+    "duration of the transit, all of it a box",
+    "h",
+    star.duration,
+    "transit_duration",
+  );
+
+/** Box first: the trapezoid of a planet of that radius gives the time that counts. */
+const trapezoidSteps = (seen: Seen): SeenStep[] => {
+  const { star, assessment, campaign, recipe } = seen;
+  const lightShare = Number.isNaN(star.lightShare) ? 1 : star.lightShare;
+  const box = smallestPlanet(
+    star.radius,
+    campaign.snrLimit,
+    assessment.noise1h,
+    assessment.transits,
+    star.duration,
+    lightShare,
+  );
+  const boxed = boxStep(seen, "box_radius", "R_box", "smallest planet of a box", box, duration(star));
+  const b = recipe.duration === "central" ? 0 : MEAN_CHORD_IMPACT;
+  const a = scaledAxis(star.earthDistance, star.radius);
+  const k = box / (EARTH_RADII_PER_SOLAR * star.radius);
+  const signal: SeenStep = {
+    key: "signal_hours",
+    symbol: "T_sig",
+    label: "time that carries the signal, (T14 + 2 T23) / 3",
+    unit: "h",
+    value: trapezoidDuration(24 * star.earthPeriod, a, k, b),
+    formula:
+      "24 * P_E / pi / 3 * (asin(sqrt((1 + R_box / (k_E * R))^2 - b^2) / sqrt(a_R^2 - b^2)) + 2 * asin(sqrt((1 - R_box / (k_E * R))^2 - b^2) / sqrt(a_R^2 - b^2)))",
+    inputs: [
+      input("derived", "P_E", "period at Earth's insolation", "d", star.earthPeriod, "earth_period"),
+      derived(boxed),
+      ofCard("k_E", "solar radius in Earth radii", "", EARTH_RADII_PER_SOLAR),
+      input("derived", "R", "radius of the star", "solRad", star.radius, "radius"),
+      input(
+        "recipe",
+        "b",
+        "impact parameter: 0 through the centre, that of the mean chord on average",
+        "",
+        b,
+      ),
+      input("derived", "a_R", "semi-major axis over stellar radius", "", a, "scaled_axis"),
+    ],
+    reference:
+      "Kipping 2023, arXiv:2305.06790, for the weight; Winn 2010, arXiv:1001.2010, for the durations.",
+  };
+  return [
+    boxStep(seen, "r_min", "R_min", "smallest planet found", assessment.rMin, derived(signal)),
+    signal,
+    boxed,
+  ];
+};
+
+const planetSteps = (seen: Seen): SeenStep[] =>
+  statisticOf(seen.campaign, seen.recipe) === "boxcar"
+    ? [boxStep(seen, "r_min", "R_min", "smallest planet found", seen.assessment.rMin, duration(seen.star))]
+    : trapezoidSteps(seen);
+
+/** Numbers on the way to a blank are no values: they may lie outside what the card or the campaign allows. */
+const blanked = (steps: readonly SeenStep[], blank: number): readonly SeenStep[] =>
+  blank === PRESENT ? steps : steps.map((step) => ({ ...step, value: Number.NaN }));
+
+/** Every step towards the instrument's quantities of one star, by key. */
+export const seenSteps = (seen: Seen): ReadonlyMap<string, SeenStep> => {
+  const { rMinBlank, noiseBlank } = seen.assessment;
+  const steps = [
+    ...blanked(planetSteps(seen), rMinBlank),
+    transitsStep(seen),
+    ...blanked(noiseSteps(seen), noiseBlank),
+  ];
+  return new Map(steps.map((step) => [step.key, step]));
+};
