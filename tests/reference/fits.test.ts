@@ -11,6 +11,8 @@ interface WrittenFile {
   columns: { name: string; cells: (string | null)[] }[];
   leftOut?: string[];
   others?: string[];
+  descriptions?: string[];
+  ucds?: string[];
   /** Blank cells by astropy's own reading. */
   masked?: number;
   header?: Record<"ucd" | "description" | "title" | "source" | "equinox" | "system", string>;
@@ -120,6 +122,15 @@ describe("a FITS file that astropy wrote", () => {
     expect(table.findings).toMatchObject([
       { key: "fits-other-tables", examples: written("several_parts").others },
     ]);
+  });
+
+  test("describes its columns in comments", async () => {
+    const table = await read("described");
+    compare("described", table);
+    const { columns, meta } = table.reader.header;
+    expect(columns.map((column) => column.description)).toEqual(written("described").descriptions);
+    expect(columns.map((column) => column.ucd)).toEqual(written("described").ucds);
+    expect([columns[1]?.unit, meta.description]).toEqual(["mas yr-1", null]);
   });
 
   test("says the same of itself", async () => {

@@ -204,6 +204,20 @@ def several_parts(path):
     return {"columns": columns_of(Table.read(path, format="fits", hdu="STARS")), "others": ["ERRORS: 7 rows"]}
 
 
+def described(path):
+    """What FITS has no keywords for stands in comments."""
+    table = Table({"a": np.arange(2), "b": np.arange(2.0)})
+    table["a"].description = "A description that is much longer than one record of a header can hold, it's so"
+    table["a"].info.meta = {"ucd": "meta.id;meta.main"}
+    table["b"].description = "short"
+    table["b"].unit = "mas / yr"
+    return {
+        "columns": write(table, path),
+        "descriptions": [table[name].description for name in table.colnames],
+        "ucds": ["meta.id;meta.main", ""],
+    }
+
+
 def long_header(path):
     """Texts longer than a record, quotes in them, and records of every kind."""
     table = Table({"a": np.arange(2)})
@@ -242,6 +256,7 @@ FILES = [
     arrays,
     ascii_table,
     several_parts,
+    described,
     long_header,
 ]
 

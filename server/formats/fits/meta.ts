@@ -1,6 +1,7 @@
 import type { PositionFrame, TableMeta } from "../table.ts";
 import type { Findings } from "./findings.ts";
 import type { FitsHeader } from "./header.ts";
+import { isBlockBegin, isBlockEnd } from "./serialized-columns.ts";
 
 /** Keywords that name where a table comes from. All but the last two are of the standard. */
 const SOURCE_KEYWORDS = ["REFERENC", "AUTHOR", "ORIGIN", "BIBCODE", "DOI"] as const;
@@ -16,8 +17,6 @@ const DOI = /\b10\.\d{4,9}\/\S+/;
 const ABOUT_FORMAT =
   /FITS \(Flexible Image Transport System\)|Astronomy and Astrophysics', volume 376|2001A&A\.\.\.376\.\.359H/;
 
-const BLOCK_BEGINS = /^\s*--BEGIN-.*--\s*$/;
-const BLOCK_ENDS = /^\s*--END-.*--\s*$/;
 const MOST_CHARACTERS = 10_000;
 
 /** Comments in words: without what a program keeps there for itself, and without words about the format. */
@@ -25,9 +24,9 @@ const plainComments = (header: FitsHeader): string[] => {
   const lines: string[] = [];
   let isInBlock = false;
   for (const line of header.comments) {
-    if (BLOCK_BEGINS.test(line)) isInBlock = true;
+    if (isBlockBegin(line)) isInBlock = true;
     if (!isInBlock && !ABOUT_FORMAT.test(line) && line.trim() !== "") lines.push(line.trim());
-    if (BLOCK_ENDS.test(line)) isInBlock = false;
+    if (isBlockEnd(line)) isInBlock = false;
   }
   return lines;
 };

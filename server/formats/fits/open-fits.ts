@@ -9,6 +9,7 @@ import { Findings } from "./findings.ts";
 import type { Hdu } from "./hdu.ts";
 import { readMeta } from "./meta.ts";
 import { readRows } from "./rows.ts";
+import { withSerializedWords } from "./serialized-columns.ts";
 import { beginSum, findTable, type Opened, surveyRest } from "./survey.ts";
 
 /** The standard's own bound, since keywords have eight characters. */
@@ -102,7 +103,10 @@ const open = async (source: ByteSource) => {
     format: "fits",
     variant: table.kind,
     encoding: null,
-    columns: readers.map((reader) => reader.column),
+    columns: withSerializedWords(
+      readers.map((reader) => reader.column),
+      table.header.comments,
+    ),
     declaredRows: table.rows,
     meta: readMeta([table.header, file], findings),
   };

@@ -46,6 +46,63 @@ describe("what a header says of its columns", () => {
     expect(column).toMatchObject({ name: "plx", description });
   });
 
+  describe("may stand in a block of comments", () => {
+    const blockCards = (yaml: readonly string[]) => [
+      "COMMENT --BEGIN-INVENTED-SERIALIZED-COLUMNS--",
+      ...yaml.map((line) => `COMMENT ${line}`),
+      "COMMENT --END-INVENTED-SERIALIZED-COLUMNS--",
+    ];
+    const described = (yaml: readonly string[]) =>
+      columnsOf(
+        fitsFile({
+          columns: [
+            { name: "a", form: "J", keywords: { TUNIT: "mag" } },
+            { name: "b", form: "J" },
+          ],
+          rows: [Buffer.alloc(8)],
+          cards: blockCards(yaml),
+        }),
+      );
+
+    test("where the keywords are silent", async () => {
+      const long = "  description: Brightness of the star in a band that has a long name, ";
+      const columns = await described([
+        "datatype:",
+        "- name: a",
+        "  unit: Jy",
+        // Lines of more than 70 characters are cut there, and marked by one more.
+        `${long.padEnd(70, ".")}\\`,
+        "and so on",
+        "  meta: !!omap",
+        "  - {ucd: phot.mag}",
+        "- {name: b, unit: mas, meta: {ucd: pos.parallax}}",
+        "- {name: c, unit: m}",
+      ]);
+      expect(columns).toMatchObject([
+        {
+          name: "a",
+          unit: "mag",
+          ucd: "phot.mag",
+          description: `${long.slice(15).padEnd(55, ".")}and so on`,
+        },
+        { name: "b", unit: "mas", ucd: "pos.parallax", description: "" },
+      ]);
+    });
+
+    test.each([
+      [["datatype: {"]],
+      [["datatype: 5"]],
+      [["- - -"]],
+      [["[".repeat(60), "[".repeat(60)]],
+      [["datatype:", "- 7", "- {name: [a]}"]],
+    ])("which is passed over where it makes no sense: %j", async (yaml) => {
+      expect(await described(yaml)).toMatchObject([
+        { name: "a", unit: "mag", ucd: "", description: "" },
+        { name: "b", unit: "", ucd: "", description: "" },
+      ]);
+    });
+  });
+
   test("goes on in CONTINUE records", async () => {
     const cards = [
       "TTYPE1  = 'a&'                 / first",
