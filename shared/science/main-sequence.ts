@@ -64,6 +64,9 @@ const COLUMNS: Readonly<Record<MainSequenceQuantity, Float64Array>> = {
 /** BP − RP from which on it no longer tells the place: at M8.5V it turns. */
 export const REDDEST_TELLING_BP_RP = 4.7;
 
+/** Rows up to the first that is redder than what BP − RP tells. */
+const TELLING_ROWS = STARS.findIndex((star) => star.bpRp > REDDEST_TELLING_BP_RP) + 1;
+
 /** Number of the later one of the two rows that hold a value; `size` is the number of rows that may. */
 const laterRow = (places: Float64Array, size: number, value: number): number => {
   const sense = (places[size - 1] as number) > (places[0] as number) ? 1 : -1;
@@ -102,9 +105,6 @@ export const mainSequence = (
   const before = quantities[after - 1] as number;
   return before + share * ((quantities[after] as number) - before);
 };
-
-/** Rows up to the first that is redder than what BP − RP tells. */
-const TELLING_ROWS = STARS.findIndex((star) => star.bpRp > REDDEST_TELLING_BP_RP) + 1;
 
 const BY_TYPE = new Map(MAIN_SEQUENCE_ROWS.map((row, i) => [row[0], STARS[i] as MainSequenceStar]));
 

@@ -2,8 +2,6 @@
 
 /** Dwarf colours of the relation below: BP − RP. */
 export const SUNLIKE_BP_RP = { bluest: 0.2, reddest: 2.0 } as const;
-/** Brightest BP and RP with which the relation is used, mag: the photometry of brighter stars saturates. */
-export const SUNLIKE_BRIGHTEST_MAG = 5;
 /** Zero point of the scale, K (Casagrande et al. 2021), and scatter about the fit (30 to 80 K by colour, from memory). */
 export const SUNLIKE_TEFF_SCATTER_K = Math.hypot(20, 60);
 
