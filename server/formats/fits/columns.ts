@@ -33,7 +33,7 @@ const descriptionOf = (header: FitsHeader, place: number): string => {
 };
 
 export const columnName = (header: FitsHeader, place: number): string =>
-  header.text(`TTYPE${place}`) ?? `col${place}`;
+  header.text(`TTYPE${place}`) ?? `column ${place}`;
 
 /**
  * @param place - Number of the column in its table, from 1.

@@ -1,5 +1,6 @@
 import { unprocessable } from "../../errors.ts";
-import type { OpenTable, RowBatch, TableHeader } from "../table.ts";
+import { uniqueNames } from "../delimited/unique-names.ts";
+import type { OpenTable, RowBatch, TableColumn, TableHeader } from "../table.ts";
 import { asciiColumns } from "./ascii-table.ts";
 import { binaryColumns } from "./binary-table.ts";
 import { ByteSource } from "./byte-source.ts";
@@ -63,18 +64,32 @@ const noteUnreadable = ({ file, table }: Opened, findings: Findings): void => {
     );
 };
 
-const noteUnnamed = ({ table }: Opened, findings: Findings): void => {
+const noteRenamed = (name: string, findings: Findings): void =>
+  findings.add(
+    {
+      key: "headers-renamed",
+      level: "note",
+      message: "Columns share a name or have none, and are told apart by a number.",
+      hint: "Nothing needs to be done; the original keeps its names.",
+    },
+    name,
+  );
+
+/** The columns as a person sees them: each with a name of its own, and with all words that the file has for it. */
+const presentColumns = (
+  { table }: Opened,
+  readers: readonly ColumnReader[],
+  findings: Findings,
+): TableColumn[] => {
+  const columns = withSerializedWords(
+    readers.map((reader) => reader.column),
+    table.header.comments,
+  );
+  const { header: names, renamed } = uniqueNames(columns.map((column) => column.name));
   for (let place = 1; place <= table.header.count("TFIELDS"); place++)
-    if (table.header.text(`TTYPE${place}`) === null)
-      findings.add(
-        {
-          key: "fits-unnamed",
-          level: "note",
-          message: "Columns have no name in the file; they are named by their place.",
-          hint: "Give them their meaning by what they hold.",
-        },
-        `col${place}`,
-      );
+    if (table.header.text(`TTYPE${place}`) === null) noteRenamed(`column ${place}`, findings);
+  for (const { to } of renamed) noteRenamed(to, findings);
+  return columns.map((column, index) => ({ ...column, name: names[index] ?? column.name }));
 };
 
 async function* batchesOf(
@@ -98,15 +113,11 @@ const open = async (source: ByteSource) => {
   const { file, table } = opened;
   const readers = readersOf(table, findings);
   noteUnreadable(opened, findings);
-  noteUnnamed(opened, findings);
   const header: TableHeader = {
     format: "fits",
     variant: table.kind,
     encoding: null,
-    columns: withSerializedWords(
-      readers.map((reader) => reader.column),
-      table.header.comments,
-    ),
+    columns: presentColumns(opened, readers, findings),
     declaredRows: table.rows,
     meta: readMeta([table.header, file], findings),
   };

@@ -229,6 +229,12 @@ describe("a binary table", () => {
     expect(reader.header.declaredRows).toBe(40_000);
   });
 
+  test("counts the rows that it speaks of over all batches", async () => {
+    const cells = Array.from({ length: 30_000 }, (_, row) => text(row === 29_998 ? "?" : "T", 1));
+    const { findings } = await readFits(binaryFile([{ name: "l", form: "L", cells }]));
+    expect(findings[0]?.examples).toEqual(["row 29999, l: byte 63"]);
+  });
+
   test("may have no rows", async () => {
     const { names, rows, findings } = await readFits(
       fitsFile({ columns: [{ name: "a", form: "D" }], rows: [], counts: { NAXIS1: 8 } }),

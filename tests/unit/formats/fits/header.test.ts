@@ -140,13 +140,17 @@ describe("what a header says of its columns", () => {
     expect((await columnsOf(fitsFile({ ...oneRow, cards })))[0]).toMatchObject({ name: "a", unit: "m" });
   });
 
-  test("may leave out names", async () => {
-    const { names, findings } = await readFits(
-      fitsFile({ columns: [{ form: "J" }, { name: " ", form: "I" }], rows: [Buffer.alloc(6)] }),
-    );
-    expect(names).toEqual(["col1", "col2"]);
+  test("may leave out names or give one twice", async () => {
+    const columns = [
+      { form: "J" },
+      { name: " ", form: "I" },
+      { name: "ra", form: "I" },
+      { name: "RA", form: "I" },
+    ];
+    const { names, findings } = await readFits(fitsFile({ columns, rows: [Buffer.alloc(10)] }));
+    expect(names).toEqual(["column 1", "column 2", "ra", "RA (2)"]);
     expect(findings).toMatchObject([
-      { key: "fits-unnamed", level: "note", count: 2, examples: ["col1", "col2"] },
+      { key: "headers-renamed", level: "note", count: 3, examples: ["column 1", "column 2", "RA (2)"] },
     ]);
   });
 
@@ -239,7 +243,7 @@ describe("a header that cannot be trusted", () => {
     [{ NAXIS: 3 }, "fits-header", /has NAXIS = 3/],
     [{ GCOUNT: 2 }, "fits-header", /has GCOUNT = 2/],
     [{ TFIELDS: -1 }, "fits-header", /TFIELDS of a header is “-1”/],
-    [{ TFIELDS: 2 }, "fits-header", /Column 2 \(col2\) has no TFORM/],
+    [{ TFIELDS: 2 }, "fits-header", /Column 2 \(column 2\) has no TFORM/],
     [{ TFIELDS: 0, NAXIS1: 0 }, "fits-no-columns", /has no column that can be read/],
     [{ TFIELDS: 1000 }, "fits-limit", /has 1,000 columns; FITS allows 999/],
     [{ NAXIS1: 5_000_000 }, "fits-limit", /5,000,000 bytes; 4,194,304 are the most/],
@@ -259,7 +263,7 @@ describe("a header that cannot be trusted", () => {
     // What follows a code is free; the form is then read, and only its width can be wrong.
     expect(error).toMatchObject({
       code: "fits-header",
-      message: expect.stringMatching(/Column 1 \(col1\)|8 bytes/),
+      message: expect.stringMatching(/Column 1 \(column 1\)|8 bytes/),
     });
   });
 
