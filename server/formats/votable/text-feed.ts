@@ -107,12 +107,11 @@ export class TextFeed {
   async more(): Promise<boolean> {
     this.line += countLines(this.text, this.at);
     this.dropped += this.at;
-    const rest = this.text.slice(this.at);
-    let added = "";
-    while (!this.isEnded && added.length <= rest.length / 4) added += await this.nextText();
-    this.text = rest + added;
+    this.text = this.text.slice(this.at);
     this.at = 0;
-    return added !== "";
+    const waiting = this.text.length;
+    while (!this.isEnded && this.text.length <= waiting * 1.25) this.text += await this.nextText();
+    return this.text.length > waiting;
   }
 
   close(): Promise<void> {

@@ -292,6 +292,17 @@ describe("columns of several values", () => {
   });
 });
 
+describe("refused rows", () => {
+  test("leave nothing behind, also where one is the last", async () => {
+    const fields = '<FIELD name="a" datatype="char" arraysize="*"/><FIELD name="b" datatype="int"/>';
+    const row = (a: string, b: string): string => `<TR><TD>${a}</TD><TD>${b}</TD></TR>`;
+    const data = `<TABLEDATA>${row("x", "1")}${row("y", "?")}</TABLEDATA>`;
+    const { rows, refused } = await readWhole(votable(fields, data));
+    expect(rows).toEqual([["x", 1]]);
+    expect(refused).toMatchObject([{ row: 2, why: '"?" in b is not a value of the type int' }]);
+  });
+});
+
 describe("rows of the wrong length", () => {
   test("are refused and never shifted", async () => {
     const fields = '<FIELD name="a" datatype="int"/><FIELD name="b" datatype="int"/>';

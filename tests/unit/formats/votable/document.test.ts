@@ -101,12 +101,18 @@ describe("what a document says of itself", () => {
   });
 
   test("tells of bytes that mean nothing in the encoding", async () => {
-    const document = oneColumn('<FIELD name="x" datatype="char" arraysize="*"/>', ["one", "Besançon"]);
-    const { rows, findings } = await readWhole(Buffer.from(document, "latin1"));
-    expect(rows).toEqual([["one"], ["Besan\ufffdon"]]);
-    expect(findings).toMatchObject([
-      { key: "votable-stray-bytes", level: "ask", count: 1, examples: ["the first on line 3"] },
-    ]);
+    const cells = [...Array.from({ length: 100 }, () => "some text"), "one", "Besançon"];
+    const lines = cells.length + 1;
+    const document = oneColumn('<FIELD name="x" datatype="char" arraysize="*"/>', cells);
+    const bytes = Buffer.from(document, "latin1");
+    // The last piece looks like plain ASCII, but the decoder still holds the byte before it.
+    for (const sizes of [[bytes.length], [1_500, bytes.indexOf(0xe7) + 1 - 1_500, bytes.length]]) {
+      const { rows, findings } = await readWhole(bytes, sizes);
+      expect(rows.slice(-2)).toEqual([["one"], ["Besan\ufffdon"]]);
+      expect(findings).toMatchObject([
+        { key: "votable-stray-bytes", level: "ask", count: 1, examples: [`the first on line ${lines}`] },
+      ]);
+    }
   });
 
   test("reads a document without a declaration, behind blank lines, with a DOCTYPE that is never followed", async () => {
@@ -302,6 +308,7 @@ describe("reading in bounded memory", { timeout: 60_000 }, () => {
     ["a cell", `${start}<TABLEDATA><TR><TD>`, "x"],
     ["a cell with references", `${start}<TABLEDATA><TR><TD>`, "&amp;x"],
     ["a row of cells", `${start}<TABLEDATA><TR>`, "<TD>x</TD>"],
+    ["a row with an attribute", `${start}<TABLEDATA><TR ID="a">`, `<TD>${"x".repeat(1_000)}</TD>`],
     ["a comment", `${start}<TABLEDATA><!--`, "x"],
     ["a section", `${start}<TABLEDATA><TR><TD><![CDATA[`, "x"],
     ["an attribute", '<VOTABLE a="', "x"],
