@@ -1,18 +1,13 @@
 import { once } from "node:events";
 import type { Writable } from "node:stream";
-import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { unprocessable } from "../errors.ts";
 import { csvLine } from "../handover/csv.ts";
 import { ecsvHeader, ecsvLine, type MetaValue } from "../handover/ecsv.ts";
-import { glanceAt } from "./glance.ts";
-import { openTable } from "./open-table.ts";
 import { needed, oneOf, oneOperand, readOptions } from "./options.ts";
 import { OUTPUT_COLUMNS } from "./output-columns.ts";
-import { readPlanFile } from "./plan-file.ts";
 import { type Named, type NamedRecipe, readCampaign, readCard, readRecipe } from "./settings-files.ts";
-import { type RowCounts, StarRows } from "./stars.ts";
+import { type RowCounts, readStars, type StarRows } from "./stars.ts";
 import { type Surroundings, write } from "./surroundings.ts";
-import { understand } from "./understand.ts";
 import { beginFile } from "./unfinished-file.ts";
 import { type Settings, type WorkedOut, workOut } from "./worked-out.ts";
 
@@ -82,7 +77,7 @@ interface Choice {
 /** What the table was made with. No times: the same file and settings give the same bytes. */
 const metaOf = ({ card, campaign, recipe }: Choice, counts: RowCounts): Record<string, MetaValue> => ({
   recipe: recipe.name,
-  recipe_version: recipe.version,
+  recipe_version: recipe.number,
   recipe_hash: recipe.hash,
   card: card.name,
   card_settings: JSON.stringify(card.settings),
@@ -128,9 +123,7 @@ export const derive = async (args: readonly string[], at: Surroundings): Promise
     campaign: choice.campaign.settings,
     recipe: choice.recipe.settings,
   };
-  const planFile = await readPlanFile(at.folder, values.plan);
-  const plan = understand(await glanceAt(await openTable(at.folder, file, planFile)), planFile);
-  const stars = new StarRows(await openTable(at.folder, file, planFile), plan, KEPT);
+  const stars = await readStars(at.folder, file, values.plan);
   const draft = await beginFile(at.folder, values.out, at.out);
   try {
     for await (const rows of stars.blocks()) await send(draft.rows, linesOf(workOut(rows, settings), format));

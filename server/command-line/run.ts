@@ -1,4 +1,5 @@
 import { DERIVE_HELP, derive } from "./derive.ts";
+import { EXPLAIN_HELP, explain } from "./explain.ts";
 import { PRECISION_HELP, precision } from "./precision.ts";
 import { type Surroundings, write } from "./surroundings.ts";
 import { EXIT, exitCode, isClosedPipe, troubleText, usage } from "./trouble.ts";
@@ -10,6 +11,7 @@ interface Command {
 
 const COMMANDS: Readonly<Record<string, Command>> = {
   derive: { run: derive, help: DERIVE_HELP },
+  explain: { run: explain, help: EXPLAIN_HELP },
   precision: { run: precision, help: PRECISION_HELP },
 };
 
@@ -17,6 +19,8 @@ const HELP = `Works out what a transit survey can do with a star, without a serv
 
   shortlight derive FILE --card CARD --campaign CAMPAIGN
       every derived column of every star of an extract, with its error and the reason where it is blank
+  shortlight explain FILE --star ID --quantity KEY
+      how one of these numbers comes about, step by step
   shortlight precision --diameters LIST --exposures LIST --magnitude M
       how precisely a star can be measured, by diameter of the aperture and time
 

@@ -23,7 +23,8 @@ export interface Named<T> {
 }
 
 export interface NamedRecipe extends Named<RecipeSettings> {
-  readonly version: number;
+  /** Of its version, from 1. */
+  readonly number: number;
   /** Of the settings, the same on any machine. */
   readonly hash: string;
 }
@@ -75,9 +76,9 @@ const recipeFile = z.strictObject({
   settings: recipeSettings,
 });
 
-const named = (recipe: Pick<Recipe, "name" | "settings">, version: number): NamedRecipe => ({
+const named = (recipe: Pick<Recipe, "name" | "settings">, number: number): NamedRecipe => ({
   name: recipe.name,
-  version,
+  number,
   hash: contentHash(recipe.settings),
   settings: recipe.settings,
 });

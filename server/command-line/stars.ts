@@ -1,10 +1,13 @@
 import type { ReadingPlan } from "#shared/api/extracts.ts";
+import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { IdentifierSet } from "../catalogue/identifier-set.ts";
 import type { Value } from "../database/bulk.ts";
 import { rowMapper } from "../extracts/map-row.ts";
 import type { ColumnValues, RefusedRow, RowBatch } from "../formats/table.ts";
-import { cellText } from "./glance.ts";
-import type { OpenedTable } from "./open-table.ts";
+import { cellText, glanceAt } from "./glance.ts";
+import { type OpenedTable, openTable } from "./open-table.ts";
+import { readPlanFile } from "./plan-file.ts";
+import { understand } from "./understand.ts";
 
 /** read = accepted + refused + skipped, always. */
 export interface RowCounts {
@@ -29,10 +32,9 @@ export class StarRows {
   constructor(
     private readonly table: OpenedTable,
     plan: ReadingPlan,
-    kept: string,
   ) {
     this.map = rowMapper(plan);
-    this.used = plan.columns.filter((card) => card.means !== kept).map((card) => card.index);
+    this.used = plan.columns.filter((card) => card.means !== KEPT).map((card) => card.index);
   }
 
   /** Values of accepted rows, each in the order of `GIVEN`. */
@@ -85,3 +87,18 @@ export class StarRows {
     if (this.refusals.length < REFUSALS_KEPT) this.refusals.push(refusal);
   }
 }
+
+/**
+ * The stars of a file, read twice: once to understand it, and once for its rows.
+ *
+ * @param plan name of a plan file; undefined for none
+ */
+export const readStars = async (
+  folder: string,
+  file: string,
+  plan: string | undefined,
+): Promise<StarRows> => {
+  const answers = await readPlanFile(folder, plan);
+  const understood = understand(await glanceAt(await openTable(folder, file, answers)), answers);
+  return new StarRows(await openTable(folder, file, answers), understood);
+};

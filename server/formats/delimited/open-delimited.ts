@@ -157,7 +157,7 @@ export const openDelimited = async (
   const { head, whole } = await peek(source, HEAD_BYTES);
   if (head.length === 0) throw emptyFile();
   const { isGuess, ...dialect } = dialectOf(head, choice);
-  const records = readRecords(Readable.from(whole), dialect)[Symbol.asyncIterator]();
+  const records = readRecords(Readable.from(whole), dialect);
   const first = await records.next();
   const names = first.done ? undefined : first.value.records[0];
   if (first.done || !names || isBlank(names)) throw emptyFile();
@@ -166,11 +166,11 @@ export const openDelimited = async (
   const opened = first.value;
 
   async function* batches(): AsyncGenerator<RowBatch> {
-    yield rows.batch({ records: opened.records.slice(1), bytes: opened.bytes });
-    for (;;) {
-      const next = await records.next();
-      if (next.done) return;
-      yield rows.batch(next.value);
+    try {
+      yield rows.batch({ records: opened.records.slice(1), bytes: opened.bytes });
+      for await (const batch of records) yield rows.batch(batch);
+    } finally {
+      await records.return(undefined);
     }
   }
 

@@ -4,12 +4,15 @@ export type TextCell = (text: string) => string | null;
 
 const WHOLE = /^[+-]?\d+$/;
 const REAL = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
-const WORDS: ReadonlyMap<string, number> = new Map([
-  ["nan", Number.NaN],
-  ["inf", Number.POSITIVE_INFINITY],
-  ["+inf", Number.POSITIVE_INFINITY],
-  ["-inf", Number.NEGATIVE_INFINITY],
-]);
+const WORD = /^([+-]?)(nan|inf|infinity)$/i;
+
+/** `nan`, `inf` and `infinity` in any case, as C, Python and JavaScript write them; null for any other word. */
+const wordValue = (text: string): number | null => {
+  const parts = WORD.exec(text);
+  if (!parts) return null;
+  if (parts[2]?.toLowerCase() === "nan") return Number.NaN;
+  return parts[1] === "-" ? Number.NEGATIVE_INFINITY : Number.POSITIVE_INFINITY;
+};
 
 const whole =
   (least: number, most: number): NumberCell =>
@@ -21,7 +24,7 @@ const whole =
 
 const float64: NumberCell = (text) => {
   if (REAL.test(text)) return Number(text);
-  return text === "" ? Number.NaN : (WORDS.get(text.toLowerCase()) ?? null);
+  return text === "" ? Number.NaN : wordValue(text);
 };
 
 /** Half precision keeps 11 binary digits down to 2^−14 and steps of 2^−24 below, and ends at 65 504. */

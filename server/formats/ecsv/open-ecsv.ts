@@ -53,8 +53,12 @@ export const openEcsv: OpenTable = async (source) => {
   const begun: Batch = { records: opened, bytes: first.value.bytes };
 
   async function* batches(): AsyncGenerator<RowBatch> {
-    yield take(begun);
-    for await (const batch of records) yield take(batch);
+    try {
+      yield take(begun);
+      for await (const batch of records) yield take(batch);
+    } finally {
+      await records.return(undefined);
+    }
   }
 
   return {

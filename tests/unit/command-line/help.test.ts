@@ -8,6 +8,7 @@ test.each([
   [["help"], /Exit codes/],
   [["derive", "--help"], /--card[\s\S]*--plan[\s\S]*"columns"/],
   [["derive", "x.csv", "-h"], /--recipe/],
+  [["explain", "--help"], /--quantity[\s\S]*--json/],
   [["precision", "--help"], /--photons-only/],
 ])("%j explains itself on the standard output", async (args, words) => {
   const { code, out, err } = await run(folder, ...args);
