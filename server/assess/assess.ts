@@ -1,7 +1,7 @@
 import { blankCode, PRESENT } from "#shared/catalogue/blank-reasons.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
 import { detectableRadius, leastTransits, transitsInCampaign } from "#shared/science/detection.ts";
-import { brightestUsable, noiseInOneHour, noiseParts } from "#shared/science/noise.ts";
+import { brightestUsable, hourlyNoiseOfSignal, noiseInOneHour, noiseParts } from "#shared/science/noise.ts";
 import { scaledAxis } from "#shared/science/orbit.ts";
 import type { RecipeSettings } from "#shared/science/recipes.ts";
 
@@ -88,7 +88,7 @@ export const assessStar = (
     campaign,
     recipe,
     radius,
-    result.noise1h,
+    hourlyNoiseOfSignal(card, result.noise1h, duration),
     lightShare,
     result.transits,
     earthPeriod,

@@ -7,6 +7,7 @@ import {
   statisticOf,
   trapezoidDuration,
 } from "#shared/science/detection.ts";
+import { hourlyNoiseOfSignal, redNoiseOf } from "#shared/science/noise.ts";
 import { scaledAxis } from "#shared/science/orbit.ts";
 import type { AssessedStar } from "./assess.ts";
 import { noiseSteps } from "./noise-steps.ts";
@@ -34,17 +35,37 @@ const share = (star: AssessedStar): WorkingInput =>
 
 const PLANET = "k_E * R * sqrt(SNR * 1e-6 * sigma / (sqrt(N * T_sig) * share))";
 
-const planetInputs = ({ star, assessment, campaign }: Seen): WorkingInput[] => [
+/** The noise that counts; red noise is more in a long transit than in an hour. */
+const signalNoiseStep = ({ star, assessment, card }: Seen): SeenStep => ({
+  key: "noise_signal",
+  symbol: "sigma",
+  label: "noise of the whole signal, as of one hour",
+  unit: "ppm",
+  value: hourlyNoiseOfSignal(card, assessment.noise1h, star.duration),
+  formula: "sqrt((sigma_1h^2 - sigma_red^2) / T + sigma_red^2) * sqrt(T)",
+  inputs: [
+    input("derived", "sigma_1h", "noise in one hour", "ppm", assessment.noise1h, "noise_1h"),
+    ofCard("sigma_red", "red noise", "ppm", redNoiseOf(card)),
+    input("derived", "T", "duration of the transit", "h", star.duration, "transit_duration"),
+  ],
+  reference: "Pont, Zucker & Queloz 2006, MNRAS 373, 231.",
+});
+
+const noiseInput = (seen: Seen): WorkingInput =>
+  redNoiseOf(seen.card) === 0
+    ? input("derived", "sigma", "noise in one hour", "ppm", seen.assessment.noise1h, "noise_1h")
+    : derived(signalNoiseStep(seen));
+
+const planetInputs = (seen: Seen): WorkingInput[] => [
   ofCard("k_E", "solar radius in Earth radii", "", EARTH_RADII_PER_SOLAR),
-  input("derived", "R", "radius of the star", "solRad", star.radius, "radius"),
-  ofCard("SNR", "signal-to-noise ratio of a detection", "", campaign.snrLimit),
-  input("derived", "sigma", "noise in one hour", "ppm", assessment.noise1h, "noise_1h"),
-  input("derived", "N", "transits in the campaign", "", assessment.transits, "transits"),
-  share(star),
+  input("derived", "R", "radius of the star", "solRad", seen.star.radius, "radius"),
+  ofCard("SNR", "signal-to-noise ratio of a detection", "", seen.campaign.snrLimit),
+  noiseInput(seen),
+  input("derived", "N", "transits in the campaign", "", seen.assessment.transits, "transits"),
+  share(seen.star),
 ];
 
-const JENKINS =
-  "Jenkins 2002, ApJ 575, 493: the multiple-event statistic, solved for the radius; white noise.";
+const JENKINS = "Jenkins 2002, ApJ 575, 493: the multiple-event statistic, solved for the radius.";
 
 const boxStep = (
   seen: Seen,
@@ -76,12 +97,12 @@ const duration = (star: AssessedStar): WorkingInput =>
 
 /** Box first: the trapezoid of a planet of that radius gives the time that counts. */
 const trapezoidSteps = (seen: Seen): SeenStep[] => {
-  const { star, assessment, campaign, recipe } = seen;
+  const { star, assessment, card, campaign, recipe } = seen;
   const lightShare = Number.isNaN(star.lightShare) ? 1 : star.lightShare;
   const box = smallestPlanet(
     star.radius,
     campaign.snrLimit,
-    assessment.noise1h,
+    hourlyNoiseOfSignal(card, assessment.noise1h, star.duration),
     assessment.transits,
     star.duration,
     lightShare,
@@ -135,7 +156,7 @@ const blanked = (steps: readonly SeenStep[], blank: number): readonly SeenStep[]
 export const seenSteps = (seen: Seen): ReadonlyMap<string, SeenStep> => {
   const { rMinBlank, noiseBlank } = seen.assessment;
   const steps = [
-    ...blanked(planetSteps(seen), rMinBlank),
+    ...blanked([...planetSteps(seen), signalNoiseStep(seen)], rMinBlank),
     transitsStep(seen),
     ...blanked(noiseSteps(seen), noiseBlank),
   ];

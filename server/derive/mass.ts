@@ -1,12 +1,11 @@
+import { massScatter } from "#shared/science/cool-dwarf-mass-scatter.ts";
 import {
   logMassFehSlope,
   logMassSlope,
   MASS_COEFFICIENTS,
   MASS_FEH,
   MASS_FEH_COEFFICIENTS,
-  MASS_FEH_SCATTER,
   MASS_FEH_TERM,
-  MASS_SCATTER,
   MASS_ZERO_POINT,
   massFromAbsKs,
   massFromAbsKsFeh,
@@ -31,6 +30,8 @@ import type { Slots } from "./slots.ts";
 import { spectralFormula } from "./spectral.ts";
 
 const MANN_2019 = "Mann et al. 2019, ApJ 871, 63, Table 6";
+/** By magnitude, from the authors' own table. */
+const SCATTER_WORDS = "2.1 to 3.6 % by magnitude";
 const MAGNITUDE = shifted("M_Ks", MASS_ZERO_POINT);
 
 const COOL: Definition = {
@@ -38,7 +39,7 @@ const COOL: Definition = {
   formula: `10^(${polynomial(MAGNITUDE, MASS_COEFFICIENTS)})`,
   inputs: ["M_Ks"],
   ranges: ({ ranges }) => [{ symbol: "M_Ks", from: ranges.brightestAbsKs, to: ranges.faintestAbsKs }],
-  scatter: percent(MASS_SCATTER),
+  scatter: SCATTER_WORDS,
   reference: `${MANN_2019}, eq. 4.`,
   compute: ({ absKs }) => massFromAbsKs(absKs),
 };
@@ -51,7 +52,7 @@ const COOL_FEH: Definition = {
     { symbol: "M_Ks", from: ranges.brightestAbsKs, to: ranges.faintestAbsKs },
     { symbol: "FeH", from: MASS_FEH.least, to: MASS_FEH.most },
   ],
-  scatter: percent(MASS_FEH_SCATTER),
+  scatter: SCATTER_WORDS,
   reference: `${MANN_2019}, eq. 5.`,
   compute: ({ absKs, feh }) => massFromAbsKsFeh(absKs, feh),
 };
@@ -78,14 +79,8 @@ export const MASS_DEFINITIONS = {
   density: only(DENSITY),
 } satisfies Record<string, DefinitionOf>;
 
-const adoptCool = (
-  star: Scratch,
-  mass: number,
-  slope: number,
-  scatter: number,
-  out: Slots,
-  by: Definition,
-) => {
+const adoptCool = (star: Scratch, mass: number, slope: number, out: Slots, by: Definition): void => {
+  const scatter = massScatter(star.absKs);
   star.mass = mass * (1 + scatter * star.deviates.mass);
   const perExcess = EXTINCTION_COEFFICIENTS.ks[0];
   setMagnitudeErrors(star.massErrors, slope, star, SOURCE.ks, star.ksError, perExcess);
@@ -97,13 +92,13 @@ const coolMass = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean =>
   if (!isCool(star, recipe)) return false;
   const withFeh = recipe.usesFeh && star.hasFeh ? COOL_FEH.compute(star, recipe) : Number.NaN;
   if (!Number.isNaN(withFeh)) {
-    adoptCool(star, withFeh, logMassFehSlope(star.absKs), MASS_FEH_SCATTER, out, COOL_FEH);
+    adoptCool(star, withFeh, logMassFehSlope(star.absKs), out, COOL_FEH);
     star.massErrors[SOURCE.iron] = (MASS_FEH_TERM * star.fehError) / (1 + MASS_FEH_TERM * star.feh);
     return true;
   }
   const mass = COOL.compute(star, recipe);
   if (Number.isNaN(mass)) return false;
-  adoptCool(star, mass, logMassSlope(star.absKs), MASS_SCATTER, out, COOL);
+  adoptCool(star, mass, logMassSlope(star.absKs), out, COOL);
   return true;
 };
 

@@ -1,4 +1,5 @@
 import type { EntityManager } from "typeorm";
+import { GIVEN_KEYS } from "#server/derive/star-columns.ts";
 import { STORED_KEYS } from "#server/scan/index-columns.ts";
 import { blankKey, columnsOf } from "#shared/catalogue/columns.ts";
 import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.ts";
@@ -52,6 +53,26 @@ export const findStars = (
         `SELECT ${ROW_COLUMNS} FROM star WHERE ${IN_EDITION} AND star_id IN (${idList(ids)})`,
         scopeValues(scope),
       );
+
+const GIVEN_COLUMNS = ["designation", ...GIVEN_KEYS].map((name) => `\`${name}\``).join(", ");
+
+/** The adopted given values of one star as the edition knows it; null where there is no such star. */
+export const findGiven = async (
+  manager: EntityManager,
+  scope: Scope,
+  id: string,
+): Promise<{ designation: string; given: Record<string, number> } | null> => {
+  const [row] = await manager.query<Record<string, unknown>[]>(
+    `SELECT ${GIVEN_COLUMNS} FROM star WHERE ${IN_EDITION} AND star_id = ${BigInt(id)}`,
+    scopeValues(scope),
+  );
+  if (!row) return null;
+  const given = GIVEN_KEYS.flatMap((key): [string, number][] => {
+    const value = row[key];
+    return typeof value === "number" ? [[key, value]] : [];
+  });
+  return { designation: String(row.designation ?? ""), given: Object.fromEntries(given) };
+};
 
 export type StoredEntry = Record<string, number | string | null> & {
   extract_id: string;

@@ -10,9 +10,11 @@ import {
   viewSummary,
   windowQuery,
 } from "#shared/api/stars.ts";
+import { workings, workingsQuery } from "#shared/api/workings.ts";
 import { viewFromParams } from "#shared/catalogue/view.ts";
 import { can } from "#shared/policy/rights.ts";
 import type { Context, Routes } from "../http/route.ts";
+import { readWorkings } from "../workings/service.ts";
 import { findMatches, readSheet, readWindow, summarise } from "./service.ts";
 
 const STARS = "/programmes/:programmeId/stars";
@@ -82,6 +84,24 @@ export const addStarRoutes = (routes: Routes): void => {
         await viewOf(context),
         context.query.q,
         can(context.actor, "extract.read"),
+      ),
+    }),
+  );
+
+  routes.add(
+    {
+      method: "get",
+      path: `${STARS}/:starId/workings`,
+      access,
+      query: viewQuery.extend(workingsQuery.shape),
+      answer: z.object({ workings }),
+    },
+    async (context) => ({
+      workings: await readWorkings(
+        context.deps,
+        await viewOf(context),
+        context.params.starId ?? "",
+        context.query,
       ),
     }),
   );

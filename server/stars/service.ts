@@ -66,8 +66,12 @@ export const readWindow = async (
   return { offset, count: await view.count(), rows: await readRows(deps, view, ids, offset + 1) };
 };
 
+/** Star ids are signed 64-bit numbers above zero. */
+export const isStarId = (text: string): boolean =>
+  /^[1-9][0-9]{0,18}$/.test(text) && BigInt(text) <= 2n ** 63n - 1n;
+
 const findStar = async (deps: Deps, view: OpenView, starId: string): Promise<StoredStar> => {
-  if (!/^[1-9][0-9]{0,18}$/.test(starId) || BigInt(starId) > 2n ** 63n - 1n) throw notFound("This star");
+  if (!isStarId(starId)) throw notFound("This star");
   const [row] = await findStars(deps.db.manager, scopeOf(view), [starId]);
   if (!row) throw notFound("This star");
   return row;

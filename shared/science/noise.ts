@@ -124,14 +124,28 @@ export const noiseInOneHour = (card: CardSettings, magnitude: number): number =>
   return card.model === "formula" ? formulaNoise(card, magnitude) : detectorParts(card, magnitude).total;
 };
 
+/** Red noise of a card, ppm; a curve has none of its own. */
+export const redNoiseOf = (card: CardSettings): number =>
+  card.model === "detector" ? (card.redNoisePpm ?? 0) : 0;
+
 /**
  * Noise over a transit of that many hours, ppm: white noise averages down with their root, red noise does not.
  *
  * @returns NaN where {@link noiseInOneHour} is
  */
-export const noiseInTransit = (card: CardSettings, magnitude: number, hours: number): number => {
-  const red = card.model === "detector" ? (card.redNoisePpm ?? 0) : 0;
-  return noiseOverHours(noiseInOneHour(card, magnitude), red, hours);
+export const noiseInTransit = (card: CardSettings, magnitude: number, hours: number): number =>
+  noiseOverHours(noiseInOneHour(card, magnitude), redNoiseOf(card), hours);
+
+/**
+ * Noise of an hour, ppm, that would average down with the root of time to what the noise is over the whole signal: a long
+ * transit has more red noise than an hour shows.
+ *
+ * @param noise1h ppm, the red part included
+ * @param hours time that carries the signal
+ */
+export const hourlyNoiseOfSignal = (card: CardSettings, noise1h: number, hours: number): number => {
+  const red = redNoiseOf(card);
+  return red === 0 ? noise1h : noiseOverHours(noise1h, red, hours) * Math.sqrt(hours);
 };
 
 /**

@@ -1,6 +1,6 @@
 import type { CampaignSettings, CardSettings } from "./cards.ts";
 import { detectableRadius, leastTransits, transitsInCampaign } from "./detection.ts";
-import { noiseInOneHour } from "./noise.ts";
+import { hourlyNoiseOfSignal, noiseInOneHour } from "./noise.ts";
 import { scaledAxis } from "./orbit.ts";
 import type { RecipeSettings } from "./recipes.ts";
 import { centralDuration, MEAN_CHORD } from "./transit.ts";
@@ -51,7 +51,7 @@ export const reachByPeriod = (
       campaign,
       recipe,
       radius,
-      noise,
+      hourlyNoiseOfSignal(card, noise, hours),
       lightShare,
       transits,
       periodDays,

@@ -1,7 +1,8 @@
 import { describe, expect, test } from "vitest";
 import { deriveColumns } from "#server/derive/derive.ts";
 import type { StellarKey } from "#server/derive/star-columns.ts";
-import { MASS_SCATTER, RADIUS_SCATTER } from "#shared/science/cool-dwarfs.ts";
+import { massScatter } from "#shared/science/cool-dwarf-mass-scatter.ts";
+import { RADIUS_SCATTER } from "#shared/science/cool-dwarfs.ts";
 import { DEFAULT_RECIPE, PRACTICE_RECIPE, type RecipeSettings } from "#shared/science/recipes.ts";
 import { type Given, PRACTICE_STARS } from "./practice-stars.ts";
 import { derived } from "./support.ts";
@@ -86,7 +87,11 @@ describe("first-order errors against Monte Carlo", () => {
   ])("%s", (key, radiusPower, massPower) => {
     const scale = key === "abs_ks" ? 1 : one.value(key);
     const expected = (seen[key] ?? Number.NaN) / scale;
-    const found = fromInputs(one.error(key) / scale, radiusPower * RADIUS_SCATTER, massPower * MASS_SCATTER);
+    const found = fromInputs(
+      one.error(key) / scale,
+      radiusPower * RADIUS_SCATTER,
+      massPower * massScatter(one.value("abs_ks")),
+    );
     expect(Math.abs(found / expected - 1)).toBeLessThan(0.04);
   });
 
