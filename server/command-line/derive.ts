@@ -16,7 +16,8 @@ export const DERIVE_HELP = `Derives every star of an extract and says what one i
   shortlight derive FILE --card CARD --campaign CAMPAIGN [--recipe RECIPE] [--plan PLAN.json]
                     [--out FILE] [--format ecsv|csv]
 
-  FILE        the extract: text between commas, semicolons, tabs or bars, or ECSV. What it is is told by its content.
+  FILE        the extract: text between commas, semicolons, tabs or bars, ECSV, a VOTable or a FITS table. What it is
+              is told by its content.
   --card      the instrument card: a JSON file, or the name of one that comes along (practice-30, heron-04)
   --campaign  the campaign: a JSON file, or a name (practice-180d, sixty-nights)
   --recipe    default, practice (the simpler choices of the practice stars), or a JSON file {"name", "settings"}
@@ -34,7 +35,7 @@ and ends with code 2. A plan answers them; everything in it is optional:
 
   {
     "delimiter": ";", "decimalMark": ",", "encoding": "latin1",
-    "epoch": 2016.0, "release": "Survey DR1",
+    "epoch": 2016.0, "release": "Survey DR1", "accept": ["votable-overflow"],
     "columns": {
       "RAJ2000": { "key": "ra", "unit": "hourangle" },
       "plx": { "key": "parallax", "unit": "arcsec", "blankMarks": ["-999"] },
@@ -44,7 +45,7 @@ and ends with code 2. A plan answers them; everything in it is optional:
 
 Columns are named as the file spells them, keys as the catalogue does; "kept" leaves a column unused. delimiter: one of
 , ; | and \\t. decimalMark: . or a comma. encoding: utf-8, utf-16le or latin1. keptNumbers lists numbers that look like
-marks for "no value" and are none.
+marks for "no value" and are none; accept lists findings about the file that do not keep it from being read.
 `;
 
 const OPTIONS = {
@@ -98,7 +99,8 @@ const send = async (to: Writable, text: string): Promise<void> => {
   if (!to.write(text)) await once(to, "drain");
 };
 
-const summary = ({ counts, refusals }: StarRows): string => {
+const summary = (stars: StarRows): string => {
+  const { counts, refusals } = stars;
   const { read, accepted, refused, skipped } = counts;
   const first = refusals.map(({ row, line, why }) =>
     line === null ? `  row ${row}: ${why}\n` : `  line ${line}: ${why}\n`,
@@ -106,7 +108,10 @@ const summary = ({ counts, refusals }: StarRows): string => {
   const more = refused > refusals.length ? `  and ${refused - refusals.length} more\n` : "";
   const twice = skipped > 0 ? "; skipped rows name a star that an earlier row names" : "";
   const line = `${read} rows read: ${accepted} written, ${refused} refused, ${skipped} skipped${twice}.\n`;
-  return line + first.join("") + more;
+  const notes = stars
+    .findings()
+    .map(({ message, examples }) => `  ${[message, ...examples].join("\n    ")}\n`);
+  return [line, ...first, more, ...notes].join("");
 };
 
 export const derive = async (args: readonly string[], at: Surroundings): Promise<void> => {

@@ -1,12 +1,14 @@
 import type { Sample } from "../extracts/sample.ts";
 import type { CsvRecord } from "../formats/csv-splitter.ts";
-import type { ColumnValues, TableHeader } from "../formats/table.ts";
+import type { ColumnValues, TableFinding, TableHeader } from "../formats/table.ts";
 import type { OpenedTable } from "./open-table.ts";
 
 /** What a first reading of the whole file shows: its header, and rows spread over all of it. */
 export interface Glance {
   readonly header: TableHeader;
   readonly sample: Sample;
+  /** What the reader found. */
+  readonly findings: readonly TableFinding[];
 }
 
 const MOST_ROWS = 4096;
@@ -45,6 +47,7 @@ export const glanceAt = async ({ reader, decimalMark }: OpenedTable): Promise<Gl
   const { header } = reader;
   return {
     header,
+    findings: reader.findings(),
     sample: {
       encoding: "utf-8",
       isEncodingGuessed: false,

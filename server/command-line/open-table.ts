@@ -3,9 +3,8 @@ import { open } from "node:fs/promises";
 import { resolve } from "node:path";
 import { unprocessable } from "../errors.ts";
 import { openDelimited } from "../formats/delimited/open-delimited.ts";
-import { isEcsv } from "../formats/ecsv/header-lines.ts";
-import { openEcsv } from "../formats/ecsv/open-ecsv.ts";
 import type { TableReader } from "../formats/table.ts";
+import { formatOf } from "./format-of.ts";
 import type { Dialect } from "./plan-file.ts";
 import { systemWords } from "./trouble.ts";
 
@@ -41,7 +40,8 @@ const firstBytes = (path: string): Promise<Uint8Array> =>
 export const openTable = async (folder: string, name: string, choice: Dialect): Promise<OpenedTable> => {
   const path = resolve(folder, name);
   const source = (): AsyncIterable<Buffer> => createReadStream(path);
-  if (isEcsv(await firstBytes(path))) return { reader: await openEcsv(source()), decimalMark: "." };
+  const open = formatOf(await firstBytes(path));
+  if (open) return { reader: await open(source()), decimalMark: "." };
   const reader = await openDelimited(source(), choice);
   return { reader, decimalMark: reader.dialect.decimalMark };
 };

@@ -23,6 +23,8 @@ const planFile = z.strictObject({
   encoding: encoding.optional(),
   epoch: epoch.optional(),
   release: release.optional(),
+  /** Findings about the file that do not keep it from being read. */
+  accept: z.array(z.string()).optional(),
   columns: z.record(z.string(), planColumn).optional(),
 });
 

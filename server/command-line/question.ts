@@ -16,9 +16,10 @@ export const columnAnswer = (header: string, column: NonNullable<PlanFile["colum
 /** A plan that gives each question one of its answers. */
 export const planOf = (questions: readonly Question[]): PlanFile => {
   const columns: NonNullable<PlanFile["columns"]> = {};
+  const accept = questions.flatMap(({ answer }) => answer.accept ?? []);
   let plan: PlanFile = {};
   for (const { answer } of questions) {
-    plan = { ...plan, ...answer };
+    plan = { ...plan, ...answer, ...(accept.length > 0 ? { accept } : {}) };
     for (const [header, column] of Object.entries(answer.columns ?? {}))
       columns[header] = { ...columns[header], ...column };
   }

@@ -3,7 +3,7 @@ import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { IdentifierSet } from "../catalogue/identifier-set.ts";
 import type { Value } from "../database/bulk.ts";
 import { rowMapper } from "../extracts/map-row.ts";
-import type { ColumnValues, RefusedRow, RowBatch } from "../formats/table.ts";
+import type { ColumnValues, RefusedRow, RowBatch, TableFinding } from "../formats/table.ts";
 import { cellText, glanceAt } from "./glance.ts";
 import { type OpenedTable, openTable } from "./open-table.ts";
 import { readPlanFile } from "./plan-file.ts";
@@ -35,6 +35,11 @@ export class StarRows {
   ) {
     this.map = rowMapper(plan);
     this.used = plan.columns.filter((card) => card.means !== KEPT).map((card) => card.index);
+  }
+
+  /** What the reader found, complete once all blocks are read. */
+  findings(): readonly TableFinding[] {
+    return this.table.reader.findings();
   }
 
   /** Values of accepted rows, each in the order of `GIVEN`. */

@@ -14,6 +14,8 @@ import { columnAnswer, planOf, type Question } from "./question.ts";
 import { asks } from "./trouble.ts";
 import { contradicts } from "./ucd.ts";
 
+const SHOWN_EXAMPLES = 3;
+
 /** One column as it is understood so far. */
 interface Reading {
   readonly index: number;
@@ -198,6 +200,19 @@ const askWhatIsOpen = (findings: readonly Finding[], cards: readonly ColumnCard[
   return open.map((f) => ({ message: f.message, hint: f.hint, answer: answerTo(f, cards) }));
 };
 
+/** What the reader found: a stop is one, and an ask is open until the plan accepts it. */
+const askAboutFile = (findings: Glance["findings"], plan: PlanFile): Question[] => {
+  const stop = findings.find((f) => f.level === "stop");
+  if (stop) throw unprocessable(stop.key, stop.message, { hint: stop.hint });
+  return findings
+    .filter((f) => f.level === "ask" && !plan.accept?.includes(f.key))
+    .map(({ key, message, hint, examples }) => ({
+      message,
+      hint: examples.length > 0 ? `${hint} (${examples.slice(0, SHOWN_EXAMPLES).join("; ")})` : hint,
+      answer: { accept: [key] },
+    }));
+};
+
 const refuseStrangers = (plan: PlanFile, columns: readonly TableColumn[]): void => {
   const stranger = Object.keys(plan.columns ?? {}).find((name) => !columns.some((c) => c.name === name));
   if (stranger === undefined) return;
@@ -257,6 +272,7 @@ export const understand = (glance: Glance, plan: PlanFile): ReadingPlan => {
     (f) => f.code !== "meaning-twice" || rivals.length === 0,
   );
   refuseOpen([
+    ...askAboutFile(glance.findings, plan),
     ...rivals,
     ...askAboutUcds(readings),
     ...askAboutSystems(readings),
