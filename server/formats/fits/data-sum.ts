@@ -21,9 +21,9 @@ export class DataSum {
     for (at += words * 4; at < bytes.length; at++) this.addByte(bytes[at] ?? 0);
   }
 
-  /** The sum with what is missing of the last number taken as zeros. */
+  /** The sum of whole numbers, which data that fill their last block consist of. */
   value(): number {
-    return folded(this.sum + this.part * 2 ** (8 * (4 - this.partBytes)) * Math.min(this.partBytes, 1));
+    return this.sum;
   }
 
   private addByte(byte: number): void {

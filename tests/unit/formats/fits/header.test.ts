@@ -280,6 +280,12 @@ describe("a header that cannot be trusted", () => {
     });
   });
 
+  test("rows without end since they are without bytes", async () => {
+    const counts = { NAXIS1: 0, NAXIS2: 10 ** 15 };
+    const error = await broken(fitsFile({ columns: [{ name: "a", form: "0A" }], rows: [], counts }));
+    expect(error?.code).toBe("fits-no-columns");
+  });
+
   test("a table compressed inside its rows", async () => {
     const error = await broken(fitsFile({ ...oneRow, cards: [card("ZTABLE", true)] }));
     expect(error?.message).toMatch(/is compressed inside its rows/);
