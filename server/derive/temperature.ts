@@ -174,12 +174,21 @@ const readColour = (
   const [first, second] = bands;
   star.colourPerExcess = perExcess(star, first) - perExcess(star, second);
   star.colour = colour.compute(star, recipe);
-  const a = errorOf(star, first);
-  const b = errorOf(star, second);
+  const a = star[ERROR_KEYS[first]];
+  const b = star[ERROR_KEYS[second]];
   star.colourError = Math.sqrt(a * a + b * b);
 };
 
-const errorOf = (star: Scratch, band: Band): number => star[`${band}Error`];
+/** Made once: names put together in the loop would cost more than the rest of it. */
+const ERROR_KEYS = {
+  g: "gError",
+  bp: "bpError",
+  rp: "rpError",
+  v: "vError",
+  j: "jError",
+  h: "hError",
+  ks: "ksError",
+} as const satisfies Record<Band, keyof Scratch>;
 
 /** Bright stars saturate the survey; G needs a correction up to 8 that is not applied here. */
 const BRIGHTEST: Readonly<Record<Band, number>> = { ...BRIGHTEST_MAG, g: FAINTEST_SATURATED_G, v: -Infinity };
