@@ -20,12 +20,18 @@ export const columnCard = z.object({
   blankMarks: z.array(z.string()),
   /** Suspected marks of which the curator says that they are numbers. */
   keptNumbers: z.array(z.string()).optional(),
+  /** Zero point of a magnitude; null until answered where the file leaves doubt. Absent: Vega, or no magnitude. */
+  magnitudeSystem: z.enum(["vega", "ab"]).nullable().optional(),
+  /** Whether a motion in RA is multiplied by the cosine of the declination; null until answered. Absent: it is. */
+  hasCosDec: z.boolean().nullable().optional(),
 });
 export type ColumnCard = z.infer<typeof columnCard>;
 
 export const readingPlan = z.object({
-  delimiter: z.enum([",", ";", "\t", "|"]),
-  encoding: z.enum(["utf-8", "utf-16le", "latin1"]),
+  format: z.enum(["delimited", "fixed-width", "described", "votable", "fits", "ecsv"]).default("delimited"),
+  /** Of delimited text; any value elsewhere. */
+  delimiter: z.enum([",", ";", "\t", "|", " "]),
+  encoding: z.enum(["utf-8", "utf-16le", "utf-16be", "latin1"]),
   decimalMark: z.enum([".", ","]),
   columns: z.array(columnCard).max(LIMITS.fileColumns),
   /** Julian year of the positions where no column gives it; null until answered. */
@@ -34,6 +40,9 @@ export const readingPlan = z.object({
   release: z.string().trim().max(80),
   /** RA in degrees or hours; null until answered when the file leaves doubt. */
   raUnit: z.enum(["deg", "hour"]).nullable(),
+  /** Frame of the positions, and its equinox where it has one; positions are kept in ICRS. */
+  frame: z.enum(["ICRS", "FK5", "galactic"]).nullable().default("ICRS"),
+  equinox: z.number().min(1800).max(2200).nullable().default(null),
 });
 export type ReadingPlan = z.infer<typeof readingPlan>;
 
@@ -74,6 +83,35 @@ export const extractPreview = z.object({
   columns: z.array(columnSuggestion),
   findings: z.array(finding),
   sampledRows: z.int(),
+  format: readingPlan.shape.format,
+  /** The kind within the format, as the reader names it. */
+  variant: z.string().default(""),
+  title: z.string().nullable().default(null),
+  description: z.string().nullable().default(null),
+  sources: z.array(z.string()).default([]),
+  declaredRows: z.int().nullable().default(null),
+  /** Up to 50 rows: for each column of the file the text it has and the value that is read from it. */
+  rows: z
+    .array(
+      z.object({
+        line: z.int(),
+        cells: z.array(z.object({ text: z.string(), value: z.union([z.number(), z.string()]).nullable() })),
+      }),
+    )
+    .default([]),
+  /** Sampled positions, degrees, for a first map. */
+  sky: z.array(z.tuple([z.number(), z.number()])).default([]),
+  /** A named plan that was made for a file with the same columns, with what differs; null where there is none. */
+  knownPlan: z
+    .object({
+      versionId: id,
+      name: z.string(),
+      number: z.int(),
+      plan: readingPlan,
+      differences: z.array(z.string()),
+    })
+    .nullable()
+    .default(null),
 });
 export type ExtractPreview = z.infer<typeof extractPreview>;
 
@@ -128,3 +166,37 @@ export const planBody = z.strictObject({ plan: readingPlan, version });
 export const commitBody = z.strictObject({ version });
 /** GET …/extracts/:id/refused → text/csv: line, reason, the row as it was. */
 /** DELETE …/extracts/:id → 204 before it is committed. POST …/extracts/:id/withdraw → 202 { job } after. */
+
+/**
+ * Upload in pieces: PUT …/extracts/:id/original?offset=N (raw body, at most LIMITS.pieceBytes) → { extract, preview }; the
+ * preview is null until the last piece. A wrong offset: 409 `upload-offset` with details { receivedBytes }: go on from there.
+ */
+
+/** GET …/reading-plans → { plans }; POST → 201 { plan }; PUT …/reading-plans/:id → { plan } (a further version). */
+export const namedPlanBody = z.strictObject({ name, plan: readingPlan });
+export const namedPlan = z.object({
+  id,
+  versionId: id,
+  number: z.int(),
+  name: z.string(),
+  plan: readingPlan,
+  savedBy: personRef,
+  savedAt: timestamp,
+});
+export type NamedPlan = z.infer<typeof namedPlan>;
+
+/** GET …/extracts/:id/health → { columns }: what the committed rows hold, column by column. */
+export const columnHealth = z.object({
+  header: z.string(),
+  means: z.string(),
+  unit: z.string(),
+  rows: z.int(),
+  values: z.int(),
+  /** Blanks by what stood in the file: the empty cell is "". */
+  blanks: z.array(z.object({ mark: z.string(), count: z.int() })),
+  low: z.number().nullable(),
+  median: z.number().nullable(),
+  high: z.number().nullable(),
+  histogram: z.array(z.int()),
+});
+export type ColumnHealth = z.infer<typeof columnHealth>;
