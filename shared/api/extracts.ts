@@ -43,14 +43,12 @@ export const readingPlan = z.object({
   /** Frame of the positions, and its equinox where it has one; positions are kept in ICRS. */
   frame: z.enum(["ICRS", "FK5", "galactic"]).nullable().default("ICRS"),
   equinox: z.number().min(1800).max(2200).nullable().default(null),
+  /** Asks after which the file is taken as it is: the code, or `code:header` where the finding names a column. */
+  accepted: z.array(z.string().max(600)).max(LIMITS.fileColumns).optional(),
 });
 export type ReadingPlan = z.infer<typeof readingPlan>;
 
-/**
- * How a plan answers an Ask, by its code: `epoch-missing` → `epoch` (or a column that gives it); `ra-unit` → `raUnit`;
- * `blank-mark` (column and answers `blank:<text>` or `number:<text>`) → that text in the card's `blankMarks` or
- * `keptNumbers`; `unit-unknown` → the card's `unit`.
- */
+/** How a plan answers an Ask: `answered` of shared/catalogue/answers.ts, for every answer that a finding offers. */
 
 /** What the server suggests for a column, and why. */
 export const columnSuggestion = columnCard.extend({
