@@ -1,4 +1,4 @@
-import type { Sample } from "../extracts/sample.ts";
+import { type Sample, sampleOf } from "../extracts/sample.ts";
 import type { CsvRecord } from "../formats/csv-splitter.ts";
 import type { ColumnValues, TableFinding, TableHeader } from "../formats/table.ts";
 import type { OpenedTable } from "./open-table.ts";
@@ -48,19 +48,6 @@ export const glanceAt = async ({ reader, decimalMark }: OpenedTable): Promise<Gl
   return {
     header,
     findings: reader.findings(),
-    sample: {
-      encoding: "utf-8",
-      isEncodingGuessed: false,
-      delimiter: ",",
-      decimalMark,
-      header: header.columns.map((c) => c.name),
-      renamed: [],
-      rows: spread.rows,
-      uneven: [],
-      instead: null,
-      isBigEndian: false,
-      isEmpty: false,
-      cutLine: null,
-    },
+    sample: sampleOf(header.columns, spread.rows, { decimalMark }),
   };
 };

@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { type ReadingPlan, readingPlan } from "#shared/api/extracts.ts";
+import { readingPlan } from "#shared/api/extracts.ts";
 import { KEPT, MEANINGS } from "#shared/catalogue/header-spellings.ts";
 import { readJsonFile } from "./json-file.ts";
 
@@ -18,7 +18,7 @@ const { delimiter, encoding, decimalMark, release, epoch } = readingPlan.shape;
 
 /** Answers to what a file cannot say itself. All are optional. */
 const planFile = z.strictObject({
-  delimiter: delimiter.optional(),
+  delimiter: delimiter.exclude([" "]).optional(),
   decimalMark: decimalMark.optional(),
   encoding: encoding.optional(),
   epoch: epoch.optional(),
@@ -30,7 +30,7 @@ const planFile = z.strictObject({
 
 export type PlanColumn = z.infer<typeof planColumn>;
 export type PlanFile = z.infer<typeof planFile>;
-export type Dialect = Partial<Pick<ReadingPlan, "delimiter" | "decimalMark" | "encoding">>;
+export type Dialect = Pick<PlanFile, "delimiter" | "decimalMark" | "encoding">;
 
 export const readPlanFile = async (folder: string, name: string | undefined): Promise<PlanFile> =>
   name === undefined ? {} : readJsonFile(folder, name, "The plan", planFile);

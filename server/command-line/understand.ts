@@ -259,6 +259,7 @@ export const understand = (glance: Glance, plan: PlanFile): ReadingPlan => {
   const ra = readingOf(readings, "ra");
   const columns = readings.map(cardOf);
   const understood: ReadingPlan = {
+    format: header.format,
     delimiter: sample.delimiter,
     encoding: sample.encoding,
     decimalMark: sample.decimalMark,
@@ -266,6 +267,8 @@ export const understand = (glance: Glance, plan: PlanFile): ReadingPlan => {
     epoch: plan.epoch ?? frameEpoch(glance, ra),
     release: plan.release ?? "",
     raUnit: raUnitOf(ra),
+    frame: "ICRS",
+    equinox: null,
   };
   // What two columns mean is asked once, with more to say than that they mean the same.
   const findings = planFindings(sample, understood).filter(

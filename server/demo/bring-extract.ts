@@ -26,8 +26,9 @@ const answer = (preview: ExtractPreview, { release, epoch }: Answers): ReadingPl
           )
         : [],
     );
-  const { delimiter, encoding, decimalMark, columns } = preview;
+  const { format, delimiter, encoding, decimalMark, columns } = preview;
   return {
+    format,
     delimiter,
     encoding,
     decimalMark,
@@ -41,6 +42,8 @@ const answer = (preview: ExtractPreview, { release, epoch }: Answers): ReadingPl
     epoch,
     release,
     raUnit: "deg",
+    frame: "ICRS",
+    equinox: null,
   };
 };
 

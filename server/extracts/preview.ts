@@ -5,6 +5,7 @@ import { suggestColumns } from "./suggest.ts";
 
 /** The plan that follows from the suggestions alone, with every question open. */
 const suggestedPlan = (sample: Sample, columns: ExtractPreview["columns"]): ReadingPlan => ({
+  format: sample.format,
   delimiter: sample.delimiter,
   encoding: sample.encoding,
   decimalMark: sample.decimalMark,
@@ -18,6 +19,8 @@ const suggestedPlan = (sample: Sample, columns: ExtractPreview["columns"]): Read
   epoch: null,
   release: "",
   raUnit: null,
+  frame: "ICRS",
+  equinox: null,
 });
 
 /** What the mapping screen shows first. */
@@ -26,6 +29,15 @@ export const previewOf = async (sample: Sample): Promise<ExtractPreview> => {
   const findings = planFindings(sample, suggestedPlan(sample, columns));
   const asking = new Set(findings.filter((f) => f.level === "ask").map((f) => f.column));
   return {
+    format: sample.format,
+    variant: sample.variant,
+    title: sample.meta.title,
+    description: sample.meta.description,
+    sources: [...sample.meta.sources],
+    declaredRows: sample.declaredRows,
+    rows: [],
+    sky: [],
+    knownPlan: null,
     delimiter: sample.delimiter,
     encoding: sample.encoding,
     decimalMark: sample.decimalMark,

@@ -1,28 +1,39 @@
 import type { ReadingPlan } from "#shared/api/extracts.ts";
-import { type CsvRecord, CsvSplitter } from "../formats/csv-splitter.ts";
-import { uniqueNames } from "../formats/delimited/unique-names.ts";
-import { type DecimalMark, type Delimiter, detectDialect } from "../formats/dialect.ts";
-import { detectEncoding, type Encoding, notATable, textDecoder } from "../formats/encoding.ts";
-import type { FileStorage } from "../storage/storage.ts";
+import type { CsvRecord } from "../formats/csv-splitter.ts";
+import { parseNumber } from "../formats/numbers.ts";
+import type { TableColumn, TableFinding, TableFormat, TableMeta } from "../formats/table.ts";
 
-/** Bytes looked at: the beginning, some pieces spread over the rest, and the end. */
-const HEAD = 128 * 1024;
-const LONGEST_HEAD = 1024 * 1024;
-const PIECE = 24 * 1024;
-const PIECES = 6;
-const TAIL = 48 * 1024;
-/** Rows of the beginning that are looked at: enough to judge by, few enough to answer at once. */
-const HEAD_ROWS = 800;
+/** One column of the file and what the sampled rows hold in it. */
+export interface SampleColumn {
+  /** Name, unit, UCD, description, null mark and frame as the file has them. */
+  readonly column: TableColumn;
+  /** One text per sampled row, as the file has it; of binary formats the value in its shortest form, "" for a blank. */
+  readonly texts: readonly string[];
+  /** What the texts are as plain numbers of the file's own unit; NaN for a blank and for what is no number. */
+  readonly values: Float64Array;
+}
 
+/** What is known of a file without reading all of it, the same for every format. */
 export interface Sample {
-  encoding: Encoding;
+  format: TableFormat;
+  /** The kind within the format, as its reader names it. */
+  variant: string;
+  meta: TableMeta;
+  /** Rows that the file says it has; null where it does not say. */
+  declaredRows: number | null;
+  /** What the reader of the format found, a file that it refuses included (level "stop"). */
+  found: readonly TableFinding[];
+  /** In the order of the file, as long as `header`. */
+  columns: readonly SampleColumn[];
+  encoding: ReadingPlan["encoding"];
   isEncodingGuessed: boolean;
-  delimiter: Delimiter;
-  decimalMark: DecimalMark;
+  /** Delimiter and decimal mark of delimited text; any value elsewhere. */
+  delimiter: ReadingPlan["delimiter"];
+  decimalMark: ReadingPlan["decimalMark"];
   /** Made unique: `ra (2)`. */
   header: string[];
   renamed: { from: string; to: string }[];
-  /** Whole rows of the header's width; a line of 0 where it is not known. */
+  /** Whole rows of the header's width, spread over the file where it can be; a line of 0 where it is not known. */
   rows: CsvRecord[];
   /** Rows of the beginning that have more or fewer values than the header. */
   uneven: CsvRecord[];
@@ -34,118 +45,52 @@ export interface Sample {
   cutLine: CsvRecord | null;
 }
 
-type Choice = Pick<ReadingPlan, "encoding" | "delimiter" | "decimalMark">;
+export const NO_META: TableMeta = { title: null, description: null, sources: [], frame: null };
 
-const readRange = async (files: FileStorage, key: string, start: number, end: number): Promise<Buffer> => {
-  const pieces: Buffer[] = [];
-  for await (const piece of await files.read(key, { start, end })) pieces.push(piece as Buffer);
-  return Buffer.concat(pieces);
+/** A column of which the file says no more than its name. */
+export const namedColumn = (name: string): TableColumn => ({
+  name,
+  type: "text",
+  unit: "",
+  ucd: "",
+  description: "",
+  nullMark: null,
+  frame: null,
+});
+
+const sampleColumn = (
+  column: TableColumn,
+  index: number,
+  rows: readonly CsvRecord[],
+  decimalMark: ReadingPlan["decimalMark"],
+): SampleColumn => {
+  const texts = rows.map((row) => row.cells[index] ?? "");
+  return { column, texts, values: Float64Array.from(texts, (text) => parseNumber(text.trim(), decimalMark)) };
 };
 
-const readHead = async (files: FileStorage, key: string, bytes: number): Promise<Buffer> => {
-  const head = await readRange(files, key, 0, Math.min(bytes, HEAD) - 1);
-  if (head.includes(10) || bytes <= HEAD) return head;
-  return readRange(files, key, 0, Math.min(bytes, LONGEST_HEAD) - 1);
-};
-
-const isBlankRecord = (r: CsvRecord): boolean => r.cells.every((cell) => cell.trim() === "");
-
-/** Whole lines from the middle of the file; their line numbers are not known. */
-const middleRows = (text: string, delimiter: string): CsvRecord[] => {
-  const from = text.indexOf("\n") + 1;
-  const end = text.lastIndexOf("\n") + 1;
-  if (from === 0 || end <= from) return [];
-  return new CsvSplitter(delimiter).push(text.slice(from, end)).map((r) => ({ ...r, line: 0 }));
-};
-
-const spread = (from: number, to: number): { start: number; end: number }[] => {
-  if (to - from < PIECES * PIECE) return [];
-  const step = Math.floor((to - from) / PIECES / 2) * 2;
-  return Array.from({ length: PIECES }, (_, i) => ({
-    start: from + i * step,
-    end: from + i * step + PIECE - 1,
-  }));
-};
-
-const empty = (encoding: Encoding, more: Partial<Sample>): Sample => ({
-  encoding,
+/** A sample of those columns and rows, with nothing wrong unless it is said. */
+export const sampleOf = (
+  columns: readonly TableColumn[],
+  rows: CsvRecord[],
+  more: Partial<Omit<Sample, "columns" | "header" | "rows">> = {},
+): Sample => ({
+  format: "delimited",
+  variant: "",
+  meta: NO_META,
+  declaredRows: null,
+  found: [],
+  encoding: "utf-8",
   isEncodingGuessed: false,
   delimiter: ",",
   decimalMark: ".",
-  header: [],
   renamed: [],
-  rows: [],
   uneven: [],
   instead: null,
   isBigEndian: false,
   isEmpty: false,
   cutLine: null,
   ...more,
+  header: columns.map((c) => c.name),
+  rows,
+  columns: columns.map((column, index) => sampleColumn(column, index, rows, more.decimalMark ?? ".")),
 });
-
-/** Looks into a file without reading all of it, by the choice given or by what the bytes say. */
-export const readSample = async (
-  files: FileStorage,
-  key: string,
-  bytes: number,
-  choice?: Choice,
-): Promise<Sample> => {
-  if (bytes === 0) return empty("utf-8", { isEmpty: true });
-  const head = await readHead(files, key, bytes);
-  const found = detectEncoding(head);
-  const encoding = choice?.encoding ?? found.encoding;
-  const instead = notATable(head, found.encoding);
-  if (instead !== null || found.isUnreadable)
-    return empty(encoding, { instead, isBigEndian: found.isUnreadable });
-
-  const isWhole = head.length >= bytes;
-  const headText = textDecoder(encoding).decode(head);
-  if (headText.trim() === "") return empty(encoding, { isEmpty: true });
-  const wholeLines = isWhole ? headText : headText.slice(0, headText.lastIndexOf("\n") + 1);
-  const { delimiter, decimalMark } = choice ?? detectDialect(wholeLines.slice(0, 64 * 1024));
-  const splitter = new CsvSplitter(delimiter);
-  const records = splitter.push(wholeLines);
-  const last = isWhole ? splitter.end() : { record: null, isQuoteOpen: false };
-  const [first, ...body] = records.length > 0 ? records : last.record ? [last.record] : [];
-  const { header, renamed } = uniqueNames(first?.cells ?? []);
-
-  body.splice(HEAD_ROWS);
-  let cutLine: CsvRecord | null = null;
-  if (last.record && records.length > 0) {
-    if (last.isQuoteOpen || last.record.cells.length < header.length) cutLine = last.record;
-    else body.push(last.record);
-  }
-  if (!isWhole) {
-    const decode = (piece: Buffer): string => textDecoder(encoding).decode(piece);
-    for (const { start, end } of spread(HEAD, bytes - TAIL))
-      body.push(
-        ...middleRows(decode(await readRange(files, key, start, end)), delimiter).filter(
-          (r) => r.cells.length === header.length,
-        ),
-      );
-    const tailStart = Math.floor(Math.max(head.length, bytes - TAIL) / 2) * 2;
-    if (tailStart < bytes) {
-      const tail = decode(await readRange(files, key, tailStart, bytes - 1));
-      const lastText = tail.slice(tail.lastIndexOf("\n") + 1);
-      const cells = new CsvSplitter(delimiter).push(`${lastText}\n`)[0]?.cells ?? [];
-      if (tail.includes("\n") && lastText.trim() !== "" && cells.length < header.length)
-        cutLine = { cells, line: 0, text: lastText };
-    }
-  }
-  const isEven = (r: CsvRecord): boolean => r.cells.length === header.length;
-  const filled = body.filter((r) => !isBlankRecord(r));
-  return {
-    encoding,
-    isEncodingGuessed: found.isGuess,
-    delimiter,
-    decimalMark,
-    header,
-    renamed,
-    rows: filled.filter(isEven),
-    uneven: filled.filter((r) => !isEven(r)),
-    instead: null,
-    isBigEndian: false,
-    isEmpty: false,
-    cutLine,
-  };
-};

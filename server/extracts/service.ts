@@ -12,7 +12,8 @@ import { isOpen, planFindings } from "./findings.ts";
 import { presentExtract, presentPreview } from "./present.ts";
 import { previewOf } from "./preview.ts";
 import { extractsOf, findExtractRow, lockExtract, namesOf, nextNumber } from "./queries.ts";
-import { readSample, type Sample } from "./sample.ts";
+import { readSample } from "./read-sample.ts";
+import type { Sample } from "./sample.ts";
 
 interface Person {
   id: string;

@@ -10,7 +10,7 @@ import type { Written } from "../storage/storage.ts";
 import { FileTooLargeError } from "../storage/storage-errors.ts";
 import { previewOf } from "./preview.ts";
 import { findExtractRow, lockExtract } from "./queries.ts";
-import { readSample } from "./sample.ts";
+import { readSample } from "./read-sample.ts";
 
 interface Person {
   id: string;

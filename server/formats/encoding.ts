@@ -1,4 +1,4 @@
-export type Encoding = "utf-8" | "utf-16le" | "latin1";
+export type Encoding = "utf-8" | "utf-16le" | "utf-16be" | "latin1";
 
 export interface DetectedEncoding {
   encoding: Encoding;

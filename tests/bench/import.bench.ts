@@ -8,7 +8,7 @@ import { Extract } from "#server/database/entities/extract.entity.ts";
 import { astrometryExtract } from "#server/demo/extract-files.ts";
 import type { Deps } from "#server/deps.ts";
 import { previewOf } from "#server/extracts/preview.ts";
-import { readSample } from "#server/extracts/sample.ts";
+import { readSample } from "#server/extracts/read-sample.ts";
 import { runNextJob } from "#server/jobs/runner.ts";
 import { enqueueJob } from "#server/jobs/service.ts";
 import { readingPlan } from "#shared/api/extracts.ts";

@@ -34,6 +34,7 @@ export const receive = async (
 
 /** The plan that the suggestions make, with what the test answers. */
 export const planOf = (preview: ExtractPreview, answers: Partial<ReadingPlan> = {}): ReadingPlan => ({
+  format: preview.format,
   delimiter: preview.delimiter,
   encoding: preview.encoding,
   decimalMark: preview.decimalMark,
@@ -47,6 +48,8 @@ export const planOf = (preview: ExtractPreview, answers: Partial<ReadingPlan> = 
   epoch: null,
   release: "",
   raUnit: null,
+  frame: "ICRS",
+  equinox: null,
   ...answers,
 });
 

@@ -5,7 +5,7 @@ import { Readable } from "node:stream";
 import { fileURLToPath } from "node:url";
 import { afterAll, describe, expect, test } from "vitest";
 import { previewOf } from "#server/extracts/preview.ts";
-import { readSample } from "#server/extracts/sample.ts";
+import { readSample } from "#server/extracts/read-sample.ts";
 import { FolderStorage } from "#server/storage/folder-storage.ts";
 
 const folder = mkdtempSync(join(tmpdir(), "shortlight-preview-"));
