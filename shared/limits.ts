@@ -2,6 +2,14 @@
 export const LIMITS = {
   /** Bytes of one uploaded file. */
   fileBytes: 2 * 1024 ** 3,
+  /** Bytes of one piece of an upload: what is sent again at most after a broken connection. */
+  pieceBytes: 8 * 1024 ** 2,
+  /** Bytes of a file that describes another. */
+  companionBytes: 8 * 1024 ** 2,
+  /** Rows that are pasted instead of brought as a file. */
+  pastedRows: 500,
+  /** Days that an upload waits for the rest of its file. */
+  unfinishedUploadDays: 7,
   /** Columns of one file. */
   fileColumns: 3000,
   /** Characters in one cell. */

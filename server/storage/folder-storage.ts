@@ -1,6 +1,6 @@
 import { createHash, randomUUID } from "node:crypto";
 import { createReadStream, createWriteStream } from "node:fs";
-import { type FileHandle, mkdir, open, readdir, rename, rm, stat } from "node:fs/promises";
+import { type FileHandle, mkdir, open, readdir, rename, rm, stat, truncate } from "node:fs/promises";
 import { dirname, join } from "node:path";
 import { type Readable, Transform } from "node:stream";
 import { pipeline } from "node:stream/promises";
@@ -61,6 +61,29 @@ export class FolderStorage implements FileStorage {
       return written;
     } catch (error) {
       await rm(aside, { force: true });
+      throw storageError(error);
+    }
+  }
+
+  async append(key: StorageKey, offset: number, source: Readable): Promise<number> {
+    const target = this.path(key);
+    try {
+      await mkdir(dirname(target), { recursive: true });
+      if (offset > 0) {
+        if ((await stat(target)).size < offset) throw new Error(`${key} has fewer than ${offset} bytes.`);
+        await truncate(target, offset);
+      }
+      // `flush` forces the bytes to disk before the stream says it is closed.
+      const file = createWriteStream(target, {
+        flags: offset === 0 ? "w" : "r+",
+        start: offset,
+        mode: 0o600,
+        flush: true,
+      });
+      await pipeline(source, file);
+      if (offset === 0) await syncFolder(dirname(target));
+      return offset + file.bytesWritten;
+    } catch (error) {
       throw storageError(error);
     }
   }

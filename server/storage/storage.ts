@@ -22,12 +22,18 @@ export interface ByteRange {
 }
 
 /**
- * Where originals and exports are kept. Small on purpose, so that a folder and an object store can both do it:
- * whole files only, complete or absent, no folders, no partial rewrites.
+ * Where originals and exports are kept. Small on purpose, so that a folder and an object store can both do it: files
+ * complete or absent, no folders, no rewrites; what arrives in pieces grows at its end alone.
  */
 export interface FileStorage {
   /** Streams the source in; the file appears under its key once all of it is safely down, and not before. */
   write(key: StorageKey, source: Readable, options?: WriteOptions): Promise<Written>;
+  /**
+   * Puts bytes behind the first `offset` of a file that grows; what stood there is cut off, so that a piece of which the
+   * outcome is not known may be put again. Answers the new length once it is safely down. One writer at a time: whoever
+   * calls holds a lock.
+   */
+  append(key: StorageKey, offset: number, source: Readable): Promise<number>;
   /** Refuses with `not-found` before the first byte when there is no such file. */
   read(key: StorageKey, range?: ByteRange): Promise<Readable>;
   /** Null when there is no such file. */

@@ -57,6 +57,41 @@ describe("writing", () => {
   });
 });
 
+describe("a file that grows", () => {
+  test("takes piece after piece at its end", async () => {
+    expect(await files.append(KEY, 0, from("source_id\n"))).toBe(10);
+    expect(await files.append(KEY, 10, from("58534", "98713\n"))).toBe(21);
+    expect(await text(await files.read(KEY))).toBe("source_id\n5853498713\n");
+  });
+
+  test("takes a piece again whose outcome was not known", async () => {
+    await files.append(KEY, 0, from("first "));
+    await files.append(KEY, 6, from("second, longer"));
+    expect(await files.append(KEY, 6, from("second"))).toBe(12);
+    expect(await text(await files.read(KEY))).toBe("first second");
+  });
+
+  test("keeps what it had when a piece breaks off, once the next is put", async () => {
+    await files.append(KEY, 0, from("first "));
+    const broken = Readable.from(
+      (async function* () {
+        yield Buffer.from("sec");
+        throw new Error("connection lost");
+      })(),
+    );
+    await expect(files.append(KEY, 6, broken)).rejects.toThrow("connection lost");
+    await files.append(KEY, 6, from("second"));
+    expect(await text(await files.read(KEY))).toBe("first second");
+  });
+
+  test("has no holes", async () => {
+    await files.append(KEY, 0, from("first"));
+    await expect(files.append(KEY, 6, from("second"))).rejects.toThrow("fewer than 6 bytes");
+    await expect(files.append("programmes/1/none", 6, from("second"))).rejects.toThrow();
+    expect(await text(await files.read(KEY))).toBe("first");
+  });
+});
+
 describe("reading", () => {
   test("a range includes both its ends", async () => {
     await files.write(KEY, from("0123456789"));
