@@ -1,3 +1,5 @@
+import { readUnit } from "./read-unit.ts";
+
 /**
  * Spellings of units, and the way from each to the canonical unit of a column. A spelling that does not stand here
  * is not guessed at: whoever confirms the reading plan names the unit.
@@ -9,102 +11,120 @@ export interface Conversion {
   readonly offset: number;
 }
 
-interface Unit {
-  /** Units of one dimension convert into each other. */
-  readonly dimension: string;
-  /** Size in the dimension's base: degrees, mas/yr, K, mag, dex of cgs, Julian years. */
-  readonly factor: number;
-  readonly offset: number;
-  readonly spellings: readonly string[];
-}
-
-const unit = (dimension: string, factor: number, spellings: string, offset = 0): Unit => ({
-  dimension,
-  factor,
-  offset,
-  spellings: spellings.split(" "),
-});
-
-const MAS = 1 / 3_600_000;
 const DAYS_PER_YEAR = 365.25;
 /** Julian date of the epoch J2000.0. */
 const J2000 = 2_451_545;
 /** Julian date of the modified date 0. */
 const MJD_ZERO = 2_400_000.5;
 
-const UNITS: readonly Unit[] = [
-  unit("angle", 1, "deg degree degrees degs °"),
-  unit("angle", 15, "hourangle h hr hour hours hms"),
-  unit("angle", 180 / Math.PI, "rad radian radians"),
-  unit("angle", 1 / 60, "arcmin arcminute arcminutes amin ' arcm"),
-  unit("angle", 1 / 3600, 'arcsec arcsecond arcseconds asec " as arcs'),
-  unit("angle", MAS, "mas milliarcsec milliarcsecond milliarcseconds marcsec"),
-  unit("angle", MAS / 1000, "uas microarcsec microarcsecond microarcseconds uarcsec"),
-  unit("motion", 1, "mas.yr-1 mas.yr^-1 mas.a-1 mas/yr mas/year mas/a mas.year-1 milliarcsec/yr masyr-1"),
-  unit("motion", 1000, 'arcsec.yr-1 arcsec/yr arcsec/year arcsec.a-1 arcsec/a as/yr "/yr asec/yr'),
-  unit("motion", 0.001, "uas.yr-1 uas/yr microarcsec/yr uas.a-1 uas/year"),
-  unit("motion", 3_600_000, "deg.yr-1 deg/yr deg/year deg.a-1"),
-  unit("motion", 10, "arcsec/cy arcsec/century arcsec.cy-1 as/cy"),
-  unit("distance", 1, "pc parsec parsecs"),
-  unit("distance", 1000, "kpc kiloparsec kiloparsecs"),
-  unit("temperature", 1, "k kelvin kelvins degk"),
-  unit("temperature", 1000, "kk 1000k 10+3k"),
-  unit("magnitude", 1, "mag mags magnitude magnitudes mag(vega) vegamag"),
-  unit("magnitude", 0.001, "mmag millimag"),
-  unit(
-    "gravity",
-    1,
-    "dex(cm.s-2) dex(cm/s2) log(cm.s-2) log(cm/s2) log(cgs) log.cm.s-2 cgs dex dex(cgs) cm.s-2 cm/s2 log10(cm.s-2) log(cm.s**-2)",
-  ),
-  unit("gravity", 1, "dex(m.s-2) dex(m/s2) log(m.s-2) log(m/s2) log(si) dex(si)", 2),
-  unit("abundance", 1, "dex dex(solar) log log(sun) sun solar -"),
-  unit("date", 1, "yr year years a julianyear jyear jyr j.yr"),
-  unit("date", 1 / DAYS_PER_YEAR, "jd juliandate julianday d(jd)", 2000 - J2000 / DAYS_PER_YEAR),
-  unit("date", 1 / DAYS_PER_YEAR, "mjd", 2000 + (MJD_ZERO - J2000) / DAYS_PER_YEAR),
-  unit("number", 1, "- 1 none unitless dimensionless --- number"),
-  unit("number", 0.01, "% percent"),
-];
+type Reader = (spelling: string) => Conversion | undefined;
 
-/** Canonical units of the column registry, and the spelling that forms offer first. */
-const CANONICAL: Readonly<Record<string, { dimension: string; size: number }>> = {
-  deg: { dimension: "angle", size: 1 },
-  mas: { dimension: "angle", size: MAS },
-  "mas.yr-1": { dimension: "motion", size: 1 },
-  pc: { dimension: "distance", size: 1 },
-  K: { dimension: "temperature", size: 1 },
-  mag: { dimension: "magnitude", size: 1 },
-  "dex(cm.s-2)": { dimension: "gravity", size: 1 },
-  dex: { dimension: "abundance", size: 1 },
-  yr: { dimension: "date", size: 1 },
-  "": { dimension: "number", size: 1 },
-};
-
-/** Brackets, spaces and the several ways of writing µ, powers and products made one. */
 const plain = (spelling: string): string =>
   spelling
     .trim()
-    .replace(/^\[(.*)\]$/, "$1")
+    .replace(/^[[("](.+)[\])"]$/, "$1")
     .toLowerCase()
-    .replace(/[µμ]/g, "u")
-    .replace(/\s*\/\s*/g, "/")
-    .replace(/\*\*|\^/g, "")
-    .replace(/[\s·*]+/g, ".")
-    .replace(/\u2212/g, "-");
+    .replace(/[\s:_]+/g, "");
 
-const bySpelling = new Map<string, Unit>(
-  UNITS.flatMap((u) => u.spellings.map((s) => [`${u.dimension}|${plain(s)}`, u] as const)),
-);
+const factor = (value: number, offset = 0): Conversion => ({ factor: value, offset });
+
+/** Units of one dimension, in multiples of a size. */
+const multiples =
+  (dimension: string, size: number): Reader =>
+  (spelling) => {
+    const unit = readUnit(spelling);
+    return unit && !unit.isLog && unit.dimension === dimension ? factor(unit.size / size) : undefined;
+  };
+
+const MAS_PER_DEGREE = 3_600_000;
+const angle = multiples("angle", MAS_PER_DEGREE);
+const HOURS = new Set(["h", "hr", "hrs", "hour", "hours", "hourangle", "hms", "hhmmss", "hmsdms"]);
+const DEGREES = new Set(["dms", "ddmmss", "degarcminarcsec"]);
+
+/** Hours of right ascension are an angle; so are degrees, minutes and seconds. */
+const position: Reader = (spelling) => {
+  const word = plain(spelling);
+  if (HOURS.has(word)) return factor(15);
+  return DEGREES.has(word) ? factor(1) : angle(spelling);
+};
+
+const NO_LOG_SAID = new Set(["cgs", "dex", "cm/s2", "cm.s-2", "cms-2", "cm/s**2", "cm/s^2"]);
+
+/** Acceleration as a logarithm. Nobody tabulates it otherwise, so that the plain unit means its logarithm too. */
+const gravity: Reader = (spelling) => {
+  if (NO_LOG_SAID.has(plain(spelling))) return factor(1);
+  const unit = readUnit(spelling);
+  const cgs = readUnit("cm.s-2");
+  if (!unit?.isLog || !cgs || unit.dimension !== cgs.dimension) return undefined;
+  return factor(1, Number(Math.log10(unit.size / cgs.size).toFixed(9)));
+};
+
+const abundance: Reader = (spelling) => {
+  const word = plain(spelling);
+  if (["log", "log10", "solar", "sun", "dex"].includes(word)) return factor(1);
+  const unit = readUnit(spelling);
+  return unit && unit.size === 1 && (unit.dimension === "" || unit.dimension === "decade")
+    ? factor(1)
+    : undefined;
+};
+
+const DATES: Readonly<Record<string, Conversion>> = {
+  jd: factor(1 / DAYS_PER_YEAR, 2000 - J2000 / DAYS_PER_YEAR),
+  mjd: factor(1 / DAYS_PER_YEAR, 2000 + (MJD_ZERO - J2000) / DAYS_PER_YEAR),
+};
+const DATE_WORDS: Readonly<Record<string, keyof typeof DATES>> = {
+  juliandate: "jd",
+  julianday: "jd",
+  "d(jd)": "jd",
+  "d(mjd)": "mjd",
+  modifiedjulianday: "mjd",
+  modifiedjuliandate: "mjd",
+};
+
+/** Dates: Julian years, or days counted from where it says. Days alone name no beginning. */
+const date: Reader = (spelling) => {
+  const word = plain(spelling);
+  const found = DATES[DATE_WORDS[word] ?? word];
+  if (found) return found;
+  const unit = ["jyear", "j.yr"].includes(word) ? factor(1) : multiples("time", 1)(spelling);
+  return unit?.factor === 1 ? unit : undefined;
+};
+
+const isAb = (spelling: string): boolean => /^(?:mag\(ab\)|abmag|mag_?ab|ab)$/.test(plain(spelling));
+const isVega = (spelling: string): boolean =>
+  /^(?:mag\(vega\)|vegamag|mag_?vega|vega)$/.test(plain(spelling));
+
+/** Zero point that a unit of magnitudes names; null where it names none. */
+export const systemInUnit = (spelling: string): "vega" | "ab" | null => {
+  if (isAb(spelling)) return "ab";
+  return isVega(spelling) ? "vega" : null;
+};
+
+const magnitudes = multiples("magnitude", 1);
+const motions = multiples("angle time-1", 1);
+
+/** Canonical units of the column registry, and how spellings lead to them. */
+const CANONICAL: Readonly<Record<string, Reader>> = {
+  deg: position,
+  mas: multiples("angle", 1),
+  "mas.yr-1": motions,
+  pc: multiples("length", 1),
+  K: multiples("temperature", 1),
+  // What is said to be of the AB system is no magnitude of the catalogue's until it is converted.
+  mag: (spelling) => (isAb(spelling) ? undefined : isVega(spelling) ? factor(1) : magnitudes(spelling)),
+  "dex(cm.s-2)": gravity,
+  dex: abundance,
+  yr: date,
+  "": multiples("", 1),
+};
 
 /**
  * The way from a spelled unit to a canonical one of the column registry; undefined when the spelling is unknown or
  * measures something else. An empty spelling means the canonical unit only where that is a pure number.
  */
 export const conversionTo = (canonical: string, spelling: string): Conversion | undefined => {
-  const target = CANONICAL[canonical];
-  if (!target) return undefined;
-  if (spelling === canonical) return { factor: 1, offset: 0 };
-  const found = bySpelling.get(`${target.dimension}|${plain(spelling)}`);
-  return found && { factor: found.factor / target.size, offset: found.offset / target.size };
+  if (spelling === canonical) return Object.hasOwn(CANONICAL, canonical) ? factor(1) : undefined;
+  return Object.hasOwn(CANONICAL, canonical) ? CANONICAL[canonical]?.(spelling) : undefined;
 };
 
 const CHOICES: Readonly<Record<string, readonly string[]>> = {
