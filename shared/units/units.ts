@@ -12,7 +12,7 @@ export interface Conversion {
 interface Unit {
   /** Units of one dimension convert into each other. */
   readonly dimension: string;
-  /** Size in the dimension's base: degrees, mas/yr, K, mag, dex of cgs, Julian years. */
+  /** Size in the dimension's base: mas, mas/yr, K, mag, dex of cgs, Julian years. */
   readonly factor: number;
   readonly offset: number;
   readonly spellings: readonly string[];
@@ -25,7 +25,8 @@ const unit = (dimension: string, factor: number, spellings: string, offset = 0):
   spellings: spellings.split(" "),
 });
 
-const MAS = 1 / 3_600_000;
+/** Milliarcseconds in a degree: the base of angles, so that arcseconds and degrees come out without a rounding. */
+const DEGREE = 3_600_000;
 const DAYS_PER_YEAR = 365.25;
 /** Julian date of the epoch J2000.0. */
 const J2000 = 2_451_545;
@@ -33,13 +34,13 @@ const J2000 = 2_451_545;
 const MJD_ZERO = 2_400_000.5;
 
 const UNITS: readonly Unit[] = [
-  unit("angle", 1, "deg degree degrees degs °"),
-  unit("angle", 15, "hourangle h hr hour hours hms"),
-  unit("angle", 180 / Math.PI, "rad radian radians"),
-  unit("angle", 1 / 60, "arcmin arcminute arcminutes amin ' arcm"),
-  unit("angle", 1 / 3600, 'arcsec arcsecond arcseconds asec " as arcs'),
-  unit("angle", MAS, "mas milliarcsec milliarcsecond milliarcseconds marcsec"),
-  unit("angle", MAS / 1000, "uas microarcsec microarcsecond microarcseconds uarcsec"),
+  unit("angle", DEGREE, "deg degree degrees degs °"),
+  unit("angle", 15 * DEGREE, "hourangle h hr hour hours hms"),
+  unit("angle", (180 / Math.PI) * DEGREE, "rad radian radians"),
+  unit("angle", 60_000, "arcmin arcminute arcminutes amin ' arcm"),
+  unit("angle", 1000, 'arcsec arcsecond arcseconds asec " as arcs'),
+  unit("angle", 1, "mas milliarcsec milliarcsecond milliarcseconds marcsec"),
+  unit("angle", 0.001, "uas microarcsec microarcsecond microarcseconds uarcsec"),
   unit("motion", 1, "mas.yr-1 mas.yr^-1 mas.a-1 mas/yr mas/year mas/a mas.year-1 milliarcsec/yr masyr-1"),
   unit("motion", 1000, 'arcsec.yr-1 arcsec/yr arcsec/year arcsec.a-1 arcsec/a as/yr "/yr asec/yr'),
   unit("motion", 0.001, "uas.yr-1 uas/yr microarcsec/yr uas.a-1 uas/year"),
@@ -67,8 +68,8 @@ const UNITS: readonly Unit[] = [
 
 /** Canonical units of the column registry, and the spelling that forms offer first. */
 const CANONICAL: Readonly<Record<string, { dimension: string; size: number }>> = {
-  deg: { dimension: "angle", size: 1 },
-  mas: { dimension: "angle", size: MAS },
+  deg: { dimension: "angle", size: DEGREE },
+  mas: { dimension: "angle", size: 1 },
   "mas.yr-1": { dimension: "motion", size: 1 },
   pc: { dimension: "distance", size: 1 },
   K: { dimension: "temperature", size: 1 },
