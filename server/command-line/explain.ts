@@ -1,4 +1,4 @@
-import type { Workings } from "#shared/api/workings.ts";
+import { type Working, type Workings, workingsQuery } from "#shared/api/workings.ts";
 import { type Column, columnsOf } from "#shared/catalogue/columns.ts";
 import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { workingsText } from "#shared/format/workings-text.ts";
@@ -6,7 +6,8 @@ import { GIVEN } from "../catalogue/adopt.ts";
 import { normaliseDesignation } from "../catalogue/designation.ts";
 import type { Value } from "../database/bulk.ts";
 import { GIVEN_KEYS } from "../derive/star-columns.ts";
-import { explain as explainQuantity } from "../workings/explain.ts";
+import { drawStar } from "../workings/draws.ts";
+import { explain as explainQuantity, type Subject } from "../workings/explain.ts";
 import { Nearest } from "./nearest.ts";
 import { needed, oneOperand, readOptions } from "./options.ts";
 import { type Named, readCampaign, readCard, readRecipe } from "./settings-files.ts";
@@ -14,30 +15,36 @@ import { readStars, type StarRows } from "./stars.ts";
 import { type Surroundings, write } from "./surroundings.ts";
 import { asks, usage } from "./trouble.ts";
 
-export const EXPLAIN_HELP = `Shows how one number of one star comes about, so that it can be worked out again by hand.
+export const EXPLAIN_HELP = `Shows how numbers of one star come about, so that they can be worked out again by hand.
 
-  shortlight explain FILE --star ID --quantity KEY [--card CARD --campaign CAMPAIGN]
-                     [--recipe RECIPE] [--plan PLAN.json] [--json]
+  shortlight explain FILE --star ID --quantity KEY [--quantity KEY ...]
+                     [--card CARD --campaign CAMPAIGN] [--recipe RECIPE]
+                     [--plan PLAN.json] [--draws N --seed S] [--json]
 
   FILE        the extract, as for \`shortlight derive\`
   --star      designation or identifier of the star, as the file has it
-  --quantity  key of a derived column, such as radius, hz_inner, earth_period or r_min
+  --quantity  key of a derived column, such as radius, hz_inner, earth_period or r_min; several may be named
   --card      instrument card; needed, with the campaign, for noise_1h, transits and r_min
   --campaign  campaign
   --recipe    default, practice, or a JSON file {"name", "settings"}
   --plan      answers to what the file cannot say; \`shortlight derive --help\` describes it
-  --json      the same as JSON: every step with its formula, inputs, constants, ranges, parts of the error and source
+  --draws     draws everything that has an error, 100 to 20 000 times, and gives 16, 50 and 84 %
+  --seed      a whole number from 1; the same seed gives the same digits. Without it: 1
+  --json      the same as JSON, one object for each quantity in a list: every step with its formula,
+              inputs, constants, ranges, parts of the error and source
 
 The quantity comes first and after it every step that it rests on, each once, down to what the file gives.
 `;
 
 const OPTIONS = {
   star: { type: "string" },
-  quantity: { type: "string" },
+  quantity: { type: "string", multiple: true },
   card: { type: "string" },
   campaign: { type: "string" },
   recipe: { type: "string", default: "default" },
   plan: { type: "string" },
+  draws: { type: "string" },
+  seed: { type: "string" },
   json: { type: "boolean", default: false },
 } as const;
 
@@ -101,11 +108,35 @@ const both = async <A, B>(
   throw usage("Only one of card and campaign is named.", "Name both, or neither.");
 };
 
+/** How often to draw and from which seed; null where nobody asks for draws. */
+const drawsOf = (
+  draws: string | undefined,
+  seed: string | undefined,
+): { draws: number; seed: number } | null => {
+  if (draws === undefined) {
+    if (seed !== undefined) throw usage("A seed is named, but no draws.", "Add --draws 1000.");
+    return null;
+  }
+  const asked = workingsQuery.pick({ draws: true, seed: true }).safeParse({ draws, seed });
+  if (!asked.success || asked.data.draws === undefined)
+    throw usage(
+      "--draws takes a whole number from 100 to 20 000, and --seed one from 1.",
+      "Write for example --draws 1000 --seed 1.",
+    );
+  return { draws: asked.data.draws, seed: asked.data.seed };
+};
+
+const stepsOf = (subject: Subject, key: string): Working[] => {
+  const steps = explainQuantity(subject, key);
+  return steps.length > 0 ? steps : refuseQuantity(key, subject.card !== null);
+};
+
 export const explain = async (args: readonly string[], at: Surroundings): Promise<void> => {
   const { values, positionals } = readOptions(args, OPTIONS, "explain");
   const file = oneOperand(positionals, "The file to read", "explain");
   const id = needed(values.star, "star", "explain");
-  const key = needed(values.quantity, "quantity", "explain");
+  const keys = [needed(values.quantity?.[0], "quantity", "explain"), ...(values.quantity ?? []).slice(1)];
+  const asked = drawsOf(values.draws, values.seed);
   const seen = await both(
     values.card === undefined ? undefined : readCard(at.folder, values.card),
     values.campaign === undefined ? undefined : readCampaign(at.folder, values.campaign),
@@ -113,23 +144,25 @@ export const explain = async (args: readonly string[], at: Surroundings): Promis
   const recipe = await readRecipe(at.folder, values.recipe);
   const [card, campaign] = seen ?? [null, null];
   const row = await findStar(await readStars(at.folder, file, values.plan), id);
-  const steps = explainQuantity(
-    {
-      given: givenOf(row),
-      recipe: recipe.settings,
-      card: card?.settings ?? null,
-      campaign: campaign?.settings ?? null,
-    },
-    key,
-  );
-  if (steps.length === 0) refuseQuantity(key, seen !== null);
-  const workings: Workings = {
-    star: namesOf(row)[0] ?? id,
-    recipe: recipeLabel(recipe),
-    card: card?.name ?? null,
-    campaign: campaign?.name ?? null,
-    steps,
-    drawn: null,
+  const subject: Subject = {
+    given: givenOf(row),
+    recipe: recipe.settings,
+    card: card?.settings ?? null,
+    campaign: campaign?.settings ?? null,
   };
-  await write(at.out, values.json ? `${JSON.stringify(workings, null, 2)}\n` : workingsText(workings));
+  const drawn = asked && {
+    ...asked,
+    intervals: drawStar(subject.given, subject.recipe, { ...subject, ...asked }),
+  };
+  const all = keys.map(
+    (key): Workings => ({
+      star: namesOf(row)[0] ?? id,
+      recipe: recipeLabel(recipe),
+      card: card?.name ?? null,
+      campaign: campaign?.name ?? null,
+      steps: stepsOf(subject, key),
+      drawn,
+    }),
+  );
+  await write(at.out, values.json ? `${JSON.stringify(all, null, 2)}\n` : all.map(workingsText).join("\n"));
 };

@@ -13,6 +13,9 @@ const ucdOf = new Map((COLUMNS as readonly Column[]).map((c) => [c.key, c.ucd.to
 /** UCDs of the first kind (`POS_EQ_RA_MAIN`) say the same in other words, and are not compared. */
 const isFirstKind = (ucd: string): boolean => /^[A-Z0-9_/-]+$/.test(ucd) && !ucd.includes(".");
 
+/** Columns spelled [M/H] are taken for [Fe/H], so the word for the abundance of all metals is no other quantity. */
+const ALSO: ReadonlyMap<string, string> = new Map([["phys.abund.z", "phys.abund.fe"]]);
+
 /** One word is the other, or a kind of it: `phot.mag;em.opt` speaks of `phot.mag;em.opt.B` too. */
 const isAkin = (a: string, b: string): boolean => a === b || a.startsWith(`${b}.`) || b.startsWith(`${a}.`);
 
@@ -29,7 +32,8 @@ export const contradicts = (ucd: string, means: string): boolean => {
   const words = ucd
     .toLowerCase()
     .split(";")
-    .map((word) => word.trim());
+    .map((word) => word.trim())
+    .map((word) => ALSO.get(word) ?? word);
   const isError = words.some((word) => word.startsWith("stat.error"));
   if (isError !== means.endsWith("_err")) return true;
   const own = words.filter((word) => !word.startsWith("stat.") && !word.startsWith("meta."));

@@ -181,7 +181,8 @@ const SETTLED_BY_A_PLAN = new Set([
 ]);
 
 const answerTo = ({ code, column, examples, answers }: Finding, cards: readonly ColumnCard[]): PlanFile => {
-  if (code === "epoch-missing") return { epoch: 2016.0 };
+  // No year is likelier than another: whoever takes the plan over is asked again until it is filled in.
+  if (code === "epoch-missing") return { epoch: null };
   const card = cards.find((c) => c.header === column);
   const [first] = answers;
   const mark = first?.value.startsWith("blank:") ? first.value.slice("blank:".length) : undefined;
@@ -239,7 +240,7 @@ const refuseOpen = (questions: readonly Question[]): void => {
   throw asks("open-questions", `${count} open about the file that only a person can answer.`, {
     hint: [
       ...list,
-      "Write the answers to a file and name it with --plan. With one of the answers to each it would be:",
+      "Write the answers to a file and name it with --plan. It may look so; choose each answer yourself:",
       JSON.stringify(planOf(questions), null, 2),
     ].join("\n"),
   });

@@ -174,7 +174,8 @@ const writeDistance = (star: Scratch, recipe: RecipeSettings, out: Slots): void 
     star.distanceError = distanceError(star, method, recipe);
     star.work[SOURCE.parallax] = star.distanceError;
     out.distance.method(star.row, method);
-    out.distance.value(star.row, star.distance, star.work);
+    if (method === "given-distance") out.distance.given(star.row, star.distance, star.distanceGivenError);
+    else out.distance.value(star.row, star.distance, star.work);
     return;
   }
   star.distanceError = Number.NaN;

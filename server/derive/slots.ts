@@ -21,6 +21,11 @@ export class Slot {
     this.put(i, value, Math.abs(value) * relativeError(errors));
   }
 
+  /** A value as it was given, with its own error to the last digit. */
+  given(i: number, value: number, error: number): void {
+    this.put(i, value, error);
+  }
+
   /** A magnitude, whose vector holds magnitudes. */
   magnitude(i: number, value: number, errors: ErrorVector): void {
     this.put(i, value, relativeError(errors));

@@ -245,9 +245,11 @@ const tryGiven = (star: Scratch, given: Inputs, recipe: RecipeSettings, out: Slo
   star.teffGiven = at(given.teff, star.row);
   star.teff = GIVEN.compute(star, recipe);
   if (Number.isNaN(star.teff)) return false;
+  const error = errorAt(given.teffError, star.row);
   star.teffErrors.fill(0);
-  star.teffErrors[SOURCE.temperature] = errorAt(given.teffError, star.row) / star.teff;
-  write(star, out, "given");
+  star.teffErrors[SOURCE.temperature] = error / star.teff;
+  out.teff.given(star.row, star.teff, error);
+  out.teff.method(star.row, "given");
   return true;
 };
 

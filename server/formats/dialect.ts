@@ -7,6 +7,13 @@ export type DecimalMark = "." | ",";
 const recordsOf = (text: string, delimiter: Delimiter): string[][] =>
   new CsvSplitter(delimiter).push(text.endsWith("\n") ? text : `${text}\n`).map((r) => r.cells);
 
+/** A delimiter, what the text is between it, and how well it explains the text. */
+export interface Parting {
+  readonly delimiter: Delimiter;
+  readonly rows: string[][];
+  readonly score: number;
+}
+
 /** How well a delimiter explains the text: columns that the rows agree on with the header. */
 const score = (rows: string[][]): number => {
   const width = rows[0]?.length ?? 0;
@@ -17,7 +24,7 @@ const score = (rows: string[][]): number => {
 };
 
 /** A comma can only be the decimal mark where it does not part the columns. */
-const decimalMarkOf = (rows: string[][], delimiter: Delimiter): DecimalMark => {
+export const decimalMarkOf = (rows: string[][], delimiter: Delimiter): DecimalMark => {
   if (delimiter === ",") return ".";
   let commas = 0;
   let points = 0;
@@ -29,14 +36,17 @@ const decimalMarkOf = (rows: string[][], delimiter: Delimiter): DecimalMark => {
   return commas > points ? "," : ".";
 };
 
+/** What each delimiter makes of whole sampled lines. */
+export const partingsOf = (sample: string): Parting[] =>
+  DELIMITERS.map((delimiter) => {
+    const rows = recordsOf(sample, delimiter);
+    return { delimiter, rows, score: score(rows) };
+  });
+
 /** Delimiter and decimal mark together, on whole sampled lines. */
 export const detectDialect = (sample: string): { delimiter: Delimiter; decimalMark: DecimalMark } => {
-  let best: { delimiter: Delimiter; rows: string[][]; score: number } | undefined;
-  for (const delimiter of DELIMITERS) {
-    const rows = recordsOf(sample, delimiter);
-    const value = score(rows);
-    if (!best || value > best.score) best = { delimiter, rows, score: value };
-  }
-  const { delimiter, rows } = best ?? { delimiter: "," as const, rows: [] };
+  const [first, ...others] = partingsOf(sample);
+  if (!first) return { delimiter: ",", decimalMark: "." };
+  const { delimiter, rows } = others.reduce((best, next) => (next.score > best.score ? next : best), first);
   return { delimiter, decimalMark: decimalMarkOf(rows, delimiter) };
 };

@@ -197,11 +197,11 @@ const stellarWorking = (derived: Derived, key: string): Working => {
   };
 };
 
-const seen = (subject: Subject, { columns }: Derived): Seen | null => {
+const seen = (subject: Subject, derived: Derived): Seen | null => {
   const { card, campaign, recipe, given } = subject;
   if (!card || !campaign) return null;
-  const value = (key: string): number => columns.values[key]?.[0] ?? given[key] ?? Number.NaN;
-  const star: AssessedStar = assessedStar(value, card);
+  const value = (key: string): number => derived.columns.values[key]?.[0] ?? given[key] ?? Number.NaN;
+  const star: AssessedStar = { ...assessedStar(value, card), reachError: derived.star.reachError };
   return {
     star,
     card,
@@ -254,7 +254,7 @@ export const explain = (subject: Subject, key: string): Working[] => {
   const visit = (next: string): void => {
     if (found.has(next)) return;
     const step = steps.get(next);
-    const isStellar = next in STELLAR_DEFINITIONS;
+    const isStellar = Object.hasOwn(STELLAR_DEFINITIONS, next);
     if (!step && !isStellar) return;
     const working = step && view ? instrumentWorking(view, step) : stellarWorking(derived, next);
     found.set(next, working);

@@ -74,7 +74,7 @@ const SPELLINGS: Readonly<Record<string, string>> = {
   ruwe: "ruwe",
   light_share: "light_share lightshare contamination_share target_fraction flux_fraction",
   teff: "teff t_eff teff_gspphot teffective temperature effective_temperature teff_k",
-  distance: "distance dist distance_pc dist_pc r_est rgeo r_med_geo",
+  distance: "distance dist distance_pc dist_pc r_est rgeo",
   distance_err: "distance_err e_distance distance_error dist_err e_dist dist_error",
   ebv: "ebv e(b-v) e_b_v color_excess colour_excess reddening",
   ebv_err: "ebv_err e_ebv ebv_error e_e(b-v)",
@@ -99,5 +99,9 @@ export const HEADER_SPELLINGS: readonly Spelling[] = Object.entries(SPELLINGS).f
 const exact = new Map<string, Spelling>();
 for (const s of HEADER_SPELLINGS) if (!exact.has(s.spelling)) exact.set(s.spelling, s);
 
+/** The error of the colour B − V, which without its signs reads like the colour excess E(B − V). */
+const COLOUR_ERROR = /^e_b[^a-z0-9]?v/i;
+
 /** What a header spelled like that means, where the spelling is one in use. */
-export const meaningOfHeader = (header: string): Spelling | undefined => exact.get(plainHeader(header));
+export const meaningOfHeader = (header: string): Spelling | undefined =>
+  COLOUR_ERROR.test(header.trim()) ? undefined : exact.get(plainHeader(header));

@@ -11,9 +11,6 @@ export const MASS_FEH = { least: -0.6, most: 0.4 } as const;
 /** Scatter of eq. 4 and eq. 5 of Mann et al. 2015, relative. */
 export const RADIUS_SCATTER = 0.0289;
 export const RADIUS_FEH_SCATTER = 0.027;
-/** Scatter of eq. 4 and eq. 5 of Mann et al. 2019, relative. */
-export const MASS_SCATTER = 0.02;
-export const MASS_FEH_SCATTER = 0.021;
 
 /** Powers of M_Ks, 0 to 2, in eq. 4 of Mann et al. 2015. */
 export const RADIUS_COEFFICIENTS = [1.9515, -0.352, 0.0168] as const;

@@ -2,7 +2,8 @@
  * First-order errors of quantities made of others, for independent errors. `relative` errors are fractions; all others are
  * in the unit of the quantity.
  */
-import { logMassSlope, MASS_SCATTER, RADIUS_SCATTER, radiusFromAbsKs, radiusSlope } from "./cool-dwarfs.ts";
+import { massScatter } from "./cool-dwarf-mass-scatter.ts";
+import { logMassSlope, RADIUS_SCATTER, radiusFromAbsKs, radiusSlope } from "./cool-dwarfs.ts";
 
 /** Relative error of `L = R² T⁴`: `√(4 s_R² + 16 s_T²)`. */
 export const luminosityError = (relativeRadius: number, relativeTeff: number): number =>
@@ -42,7 +43,7 @@ export const leastPlanetError = (relativeRadius: number, relativeNoise: number):
 /** `p d ln M / dM_Ks + q d ln R / dM_Ks` times the error of M_Ks, and the scatters of both relations beside it. */
 const errorThroughAbsKs = (absKs: number, absKsError: number, p: number, q: number): number => {
   const slope = p * logMassSlope(absKs) + (q * radiusSlope(absKs)) / radiusFromAbsKs(absKs);
-  return Math.sqrt((slope * absKsError) ** 2 + (p * MASS_SCATTER) ** 2 + (q * RADIUS_SCATTER) ** 2);
+  return Math.sqrt((slope * absKsError) ** 2 + (p * massScatter(absKs)) ** 2 + (q * RADIUS_SCATTER) ** 2);
 };
 
 /**

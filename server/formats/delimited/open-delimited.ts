@@ -1,16 +1,19 @@
-import { Readable } from "node:stream";
-import { AppError } from "../../errors.ts";
-import type { CsvRecord } from "../csv-splitter.ts";
-import { type DecimalMark, type Delimiter, detectDialect } from "../dialect.ts";
-import { detectEncoding, type Encoding, notATable, textDecoder } from "../encoding.ts";
-import { type Batch, readRecords } from "../read-records.ts";
-import type { RefusedRow, RowBatch, TableColumn, TableFinding, TableReader } from "../table.ts";
-import { peek } from "./peek.ts";
-import { uniqueNames } from "./unique-names.ts";
+import { unprocessable } from "../../errors.ts";
+import { CsvSplitter } from "../csv-splitter.ts";
+import type { DecimalMark, Delimiter } from "../dialect.ts";
+import { notATable } from "../encoding.ts";
+import { cutOff } from "../read-records.ts";
+import type { RowBatch, TableReader } from "../table.ts";
+import { textColumns, textMeta } from "../text/columns.ts";
+import type { TextEncoding } from "../text/encoding.ts";
+import { textFindings } from "../text/findings.ts";
+import { TextSource } from "../text/text-source.ts";
+import { judgeLayout, type Layout } from "./layout.ts";
+import { DelimitedRows } from "./rows.ts";
 
 /** How the text of a file becomes cells and numbers. */
 export interface DelimitedDialect {
-  readonly encoding: Encoding;
+  readonly encoding: TextEncoding;
   readonly delimiter: Delimiter;
   readonly decimalMark: DecimalMark;
 }
@@ -20,9 +23,11 @@ export interface DelimitedTable extends TableReader {
   readonly dialect: DelimitedDialect;
 }
 
-/** Bytes by which the encoding and the dialect are judged. */
-const HEAD_BYTES = 128 * 1024;
-const DIALECT_CHARACTERS = 64 * 1024;
+/** What is known of the dialect; the rest is judged by the beginning of the file. */
+export type DelimitedChoice = Partial<DelimitedDialect> & {
+  /** Name of the file, which decides between readings that are equally likely. */
+  readonly name?: string;
+};
 
 const VARIANTS: Readonly<Record<Delimiter, string>> = {
   ",": "commas",
@@ -31,160 +36,72 @@ const VARIANTS: Readonly<Record<Delimiter, string>> = {
   "|": "bars",
 };
 
-const stop = (code: string, message: string, hint: string): AppError =>
-  new AppError(422, code, message, { hint });
-
-const emptyFile = (): AppError =>
-  stop("empty-file", "The file is empty, so it has no line of names.", "Get the file again.");
-
-/** The dialect by the choice given or, for what it leaves open, by what the bytes say. */
-const dialectOf = (
-  head: Uint8Array,
-  choice: Partial<DelimitedDialect>,
-): DelimitedDialect & { isGuess: boolean } => {
-  const found = detectEncoding(head);
-  const instead = notATable(head, found.encoding);
+/** Refuses what is no text, or holds nothing. */
+export const checkText = (source: TextSource): void => {
+  if (source.head.length === 0 || (source.isWhole && source.headText().trim() === ""))
+    throw unprocessable("empty-file", "The file is empty, so it has no line of names.", {
+      hint: "Get the file again.",
+    });
+  const instead = notATable(source.head, source.encoding === "utf-16be" ? "utf-16le" : source.encoding);
   if (instead !== null)
-    throw stop(
-      "not-a-table",
-      `This is ${instead}, not a table as text.`,
-      "Export the table as CSV or ECSV and read that.",
-    );
-  if (found.isUnreadable)
-    throw stop(
-      "unread-encoding",
-      "The file is text in big-endian UTF-16, which is not read here.",
-      "Save it as UTF-8.",
-    );
-  const encoding = choice.encoding ?? found.encoding;
-  const text = textDecoder(encoding).decode(head, { stream: true });
-  const isWhole = head.length < HEAD_BYTES;
-  const lines = isWhole ? text : text.slice(0, text.lastIndexOf("\n") + 1);
-  const detected = detectDialect(lines.slice(0, DIALECT_CHARACTERS));
-  return {
-    encoding,
-    delimiter: choice.delimiter ?? detected.delimiter,
-    decimalMark: choice.decimalMark ?? detected.decimalMark,
-    isGuess: choice.encoding === undefined && found.isGuess,
-  };
+    throw unprocessable("not-a-table", `This is ${instead}, not a table as text.`, {
+      hint: "Export the table as CSV or ECSV and read that.",
+    });
+  if (source.headText() === "")
+    throw unprocessable("line-too-long", "The first line does not end where the names of a table would.", {
+      hint: "Export the table again with one row on a line, and bring the file as a new extract.",
+    });
 };
 
-const textColumn = (name: string): TableColumn => ({
-  name,
-  type: "text",
-  unit: "",
-  ucd: "",
-  description: "",
-  nullMark: null,
-  frame: null,
-});
-
-const isBlank = (record: CsvRecord): boolean => record.cells.every((cell) => cell.trim() === "");
-
-/** Sorts the records of a file into rows and refused ones; blank lines are neither. */
-class Rows {
-  private row = 0;
-
-  constructor(private readonly width: number) {}
-
-  batch({ records, bytes }: Batch): RowBatch {
-    const columns: string[][] = Array.from({ length: this.width }, () => []);
-    const refused: RefusedRow[] = [];
-    let rows = 0;
-    for (const record of records) {
-      if (isBlank(record)) continue;
-      this.row++;
-      if (record.cells.length !== this.width) {
-        refused.push(this.uneven(record));
-        continue;
-      }
-      rows++;
-      for (let i = 0; i < this.width; i++) columns[i]?.push(record.cells[i] ?? "");
+async function* batchesOf(source: TextSource, layout: Layout, rows: DelimitedRows): AsyncGenerator<RowBatch> {
+  const splitter = new CsvSplitter(layout.delimiter);
+  let [skip, bytes] = [layout.preamble.lines, 0];
+  for await (const piece of source.pieces()) {
+    bytes = piece.bytes;
+    let text = piece.text;
+    for (; skip > 0 && text !== ""; ) {
+      const end = text.indexOf("\n") + 1;
+      text = text.slice(end === 0 ? text.length : end);
+      if (end > 0) skip--;
     }
-    return { rows, columns, refused, bytes };
+    const records = splitter.push(text);
+    if (records.length > 0) yield rows.batch(records, bytes);
   }
-
-  private uneven({ cells, line, text }: CsvRecord): RefusedRow {
-    const has = `This row has ${cells.length} values; the first line has ${this.width}.`;
-    return {
-      row: this.row,
-      line,
-      text,
-      why: `${has} Nothing was guessed about where the others belong.`,
-    };
+  const { record, isQuoteOpen } = splitter.end();
+  if (record) {
+    if (isQuoteOpen || rows.isShort(record))
+      throw cutOff(rows.lineOf(record), record.cells.length, layout.found.names.length);
+    const batch = rows.batch([record], bytes);
+    rows.endsOpen = batch.rows + batch.refused.length > 0;
+    yield batch;
   }
+  rows.isDone = true;
 }
 
-const findingsOf = (
-  renamed: readonly { from: string; to: string }[],
-  isGuess: boolean,
-): readonly TableFinding[] => [
-  ...(renamed.length === 0
-    ? []
-    : [
-        {
-          key: "headers-renamed",
-          level: "note" as const,
-          message: `${renamed.length} columns share a name or have none, and are told apart by a number.`,
-          hint: "Nothing needs to be done; the original keeps its names.",
-          count: renamed.length,
-          examples: renamed.slice(0, 5).map(({ to }) => to),
-        },
-      ]),
-  ...(isGuess
-    ? [
-        {
-          key: "encoding-guessed",
-          level: "note" as const,
-          message: "Some bytes are not UTF-8, so the text is read as Latin-1 (Windows-1252).",
-          hint: "Look at names with accents; choose another encoding if they are wrong.",
-          count: 1,
-          examples: [],
-        },
-      ]
-    : []),
-];
-
 /**
- * Opens a table as text: values between commas, semicolons, tabs or bars, with a line of names first.
- *
- * @param choice what is known of the dialect; the rest is judged by the beginning of the file
+ * Opens a table as text: values between commas, semicolons, tabs or bars, framed by bars or not, under a line of names.
+ * Comments may stand before the names, and units and a ruled line below them.
  */
 export const openDelimited = async (
-  source: AsyncIterable<Uint8Array>,
-  choice: Partial<DelimitedDialect> = {},
+  bytes: AsyncIterable<Uint8Array>,
+  { name, ...choice }: DelimitedChoice = {},
 ): Promise<DelimitedTable> => {
-  const { head, whole } = await peek(source, HEAD_BYTES);
-  if (head.length === 0) throw emptyFile();
-  const { isGuess, ...dialect } = dialectOf(head, choice);
-  const records = readRecords(Readable.from(whole), dialect);
-  const first = await records.next();
-  const names = first.done ? undefined : first.value.records[0];
-  if (first.done || !names || isBlank(names)) throw emptyFile();
-  const { header, renamed } = uniqueNames(names.cells);
-  const rows = new Rows(header.length);
-  const opened = first.value;
-
-  async function* batches(): AsyncGenerator<RowBatch> {
-    try {
-      yield rows.batch({ records: opened.records.slice(1), bytes: opened.bytes });
-      for await (const batch of records) yield rows.batch(batch);
-    } finally {
-      await records.return(undefined);
-    }
-  }
-
+  const source = await TextSource.open(bytes, choice.encoding);
+  checkText(source);
+  const layout = judgeLayout(source.headText(), { ...choice, name });
+  const { columns, renamed } = textColumns(layout.found, layout.preamble.comments);
+  const rows = new DelimitedRows(layout, layout.preamble.lines);
   return {
     header: {
       format: "delimited",
-      variant: VARIANTS[dialect.delimiter],
-      encoding: dialect.encoding,
-      columns: header.map(textColumn),
-      declaredRows: null,
-      meta: { title: null, description: null, sources: [], frame: null },
+      variant: layout.isFramed ? "framed by bars" : VARIANTS[layout.delimiter],
+      encoding: source.encoding,
+      columns,
+      declaredRows: layout.preamble.declaredRows,
+      meta: textMeta(layout.preamble),
     },
-    dialect,
-    batches: batches(),
-    findings: () => findingsOf(renamed, isGuess),
+    dialect: { encoding: source.encoding, delimiter: layout.delimiter, decimalMark: layout.decimalMark },
+    batches: batchesOf(source, layout, rows),
+    findings: () => textFindings({ source, found: layout.found, renamed, rival: layout.rival, rows }),
   };
 };

@@ -34,6 +34,7 @@ describe("derive", () => {
     expect(read.rows).toHaveLength(2);
     expect(Number(cell(0, "radius")).toFixed(4)).toBe("0.3344");
     expect(cell(0, "radius_blank")).toBeNull();
+    expect(Number(cell(0, "r_min")).toFixed(3)).toBe("0.496");
     // Without an error of Ks the radius has none of its own.
     expect(cell(0, "ks_mag_err")).toBeNull();
     expect(cell(1, "distance")).toBeNull();

@@ -1,5 +1,6 @@
 import { join } from "node:path";
 import { describe, expect, test } from "vitest";
+import { z } from "zod";
 import { ROOT } from "#scripts/lib/root.ts";
 import { editDistance, Nearest } from "#server/command-line/nearest.ts";
 import { workings } from "#shared/api/workings.ts";
@@ -34,13 +35,37 @@ describe("explain", () => {
     for (const { key } of columnsOf("stellar", "instrument").filter((c) => c.key !== "flags")) {
       const { code, out } = await explain("--star", "LH-0031", "--quantity", key, ...SEEN, "--json");
       expect([key, code]).toEqual([key, 0]);
-      const { steps, card, campaign } = workings.parse(JSON.parse(out));
-      expect(steps[0]?.key).toBe(key);
-      expect([card, campaign]).toEqual(["Practice 30", "180 days"]);
+      const [only] = z.array(workings).parse(JSON.parse(out));
+      expect(only?.steps[0]?.key).toBe(key);
+      expect([only?.card, only?.campaign]).toEqual(["Practice 30", "180 days"]);
     }
   });
 
+  test("several quantities come one after the other, with draws of the same seed", async () => {
+    const args = [
+      "--star",
+      "LH-0031",
+      "--quantity",
+      "radius",
+      "--quantity",
+      "mass",
+      "--draws",
+      "500",
+      "--seed",
+      "3",
+    ];
+    const { code, out } = await explain(...args);
+    expect(code).toBe(0);
+    expect(out).toMatch(/^LH-0031: Radius[\s\S]*500 draws, seed 3: 16 % 0\.32[\s\S]*LH-0031: Mass/);
+    expect((await explain(...args)).out).toBe(out);
+    const all = z.array(workings).parse(JSON.parse((await explain(...args, "--json")).out));
+    expect(all.map(({ steps }) => steps[0]?.key)).toEqual(["radius", "mass"]);
+    expect(all[0]?.drawn?.intervals.radius?.p50).toBeCloseTo(0.334, 2);
+  });
+
   test.each([
+    [["--star", "LH-0031", "--quantity", "radius", "--draws", "7"], /100 to 20 000/],
+    [["--star", "LH-0031", "--quantity", "radius", "--seed", "7"], /no draws/],
     [["--star", "LH-0032", "--quantity", "radius"], /“LH-0032”[\s\S]*nearest spellings are LH-0031, /],
     [["--star", "3141592653589793249", "--quantity", "radius"], /nearest spellings are 31415926535897932/],
     [["--star", "LH-0031", "--quantity", "radios"], /nearest keys are radius/],

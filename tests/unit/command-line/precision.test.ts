@@ -82,7 +82,9 @@ describe("precision", () => {
     const steady = Math.hypot(100, 180);
     const long = detectorPrecision(red, 12, false)(0.4, 3599.999).ppm;
     expect(long).toBeCloseTo(noiseInOneHour(red, 12), 3);
-    expect(long).toBeGreaterThan(steady);
+    const white = long ** 2 - steady ** 2;
+    const short = detectorPrecision(red, 12, false)(0.4, 60).ppm;
+    expect(short).toBeCloseTo(Math.sqrt(60 * white + steady ** 2), 2);
     expect(detectorPrecision(red, 12, false)(0.4, 1e9).ppm).toBeCloseTo(100, 0);
     const one = detectorPrecision(
       { ...red, readNoise: 0, darkRate: 0, siteAltitudeM: null, skyBrightness: 40 },

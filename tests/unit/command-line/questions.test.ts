@@ -12,8 +12,9 @@ const table = (header: string, ...rows: string[]): string =>
     .join("\n")
     .concat("\n");
 
-/** The plan that the message offers. */
-const offered = (err: string): string => err.slice(err.indexOf("  {"));
+/** The plan that the message offers, with the one number filled in that it leaves open. */
+const offered = (err: string): string =>
+  err.slice(err.indexOf("  {")).replace('"epoch": null', '"epoch": 2016');
 
 interface Case {
   readonly what: string;
@@ -87,6 +88,13 @@ describe("a question that the file cannot answer", () => {
       expect(answered.code).toBe(0);
     },
   );
+
+  test("an epoch is not offered: it is asked for until a year is filled in", async () => {
+    put("t.csv", "name,ra,dec,Kmag\nS,200.5,-10.5,8\n");
+    const { err } = await derive();
+    put("plan.json", err.slice(err.indexOf("  {")));
+    expect((await derive("--plan", "plan.json")).code).toBe(2);
+  });
 
   test("all questions are asked at once", async () => {
     put("t.csv", "name,ra,dec,plx,Kmag,k_m\nS,200.5,-10.5,0.06,8,8\n");

@@ -29,6 +29,7 @@ describe("whether a UCD contradicts a name", () => {
     ["phys.temperature", "teff"],
     ["stat.error", "teff_err"],
     ["pos.parallax", "parallax"],
+    ["phys.abund.Z", "feh"],
     ["meta.code", "ruwe"],
   ])("%s says nothing against %s", (ucd, means) => {
     expect(contradicts(ucd, means)).toBe(false);
