@@ -3,6 +3,7 @@ import { CountAttempts1796121600000 } from "./1796121600000-count-attempts.ts";
 import { ProtectLogbook1796121700000 } from "./1796121700000-protect-logbook.ts";
 import { KeepRecipes1796121800000 } from "./1796121800000-keep-recipes.ts";
 import { TakeInDustAndDistance1796121900000 } from "./1796121900000-take-in-dust-and-distance.ts";
+import { KeepCompanions1796122100000 } from "./1796122100000-keep-companions.ts";
 
 /** In order; a test holds this list to the folder. */
 export const MIGRATIONS = [
@@ -11,4 +12,5 @@ export const MIGRATIONS = [
   ProtectLogbook1796121700000,
   KeepRecipes1796121800000,
   TakeInDustAndDistance1796121900000,
+  KeepCompanions1796122100000,
 ];

@@ -2,6 +2,7 @@ import { createServer } from "node:http";
 import { createApp } from "./app.ts";
 import { ConfigError, loadConfig } from "./config.ts";
 import { closeDeps, createDeps, type Deps } from "./deps.ts";
+import { removeUnfinishedUploads } from "./extracts/upload-unfinished.ts";
 import { removeExpired } from "./http/expired.ts";
 import { createLog } from "./log.ts";
 
@@ -13,6 +14,9 @@ const SWEEP_EVERY_MS = 15 * 60_000;
 const sweep = (deps: Deps): void => {
   removeExpired(deps).catch((error: unknown) =>
     deps.log.warn("database", "Expired rows stay for now", { error }),
+  );
+  removeUnfinishedUploads(deps).catch((error: unknown) =>
+    deps.log.warn("extract", "Unfinished uploads stay for now", { error }),
   );
 };
 

@@ -30,6 +30,11 @@ export const presentExtract = (row: Extract, uploaderName: string, job: JobRow |
   bytes: Number(row.bytes),
   receivedBytes: Number(row.receivedBytes),
   sha256: row.sha256,
+  companion: row.companion && {
+    fileName: row.companion.fileName,
+    bytes: row.companion.bytes,
+    sha256: row.companion.sha256,
+  },
   uploadedBy: { id: row.uploadedBy, name: uploaderName },
   createdAt: row.createdAt.toISOString(),
   committedAt: row.committedAt?.toISOString() ?? null,

@@ -1,7 +1,13 @@
 import type { Readable } from "node:stream";
 import { pipeline } from "node:stream/promises";
 import type { Response } from "express";
-import { commitBody, extractCreateBody, planBody } from "#shared/api/extracts.ts";
+import {
+  commitBody,
+  companionQuery,
+  extractCreateBody,
+  planBody,
+  uploadQuery,
+} from "#shared/api/extracts.ts";
 import type { Routes } from "../http/route.ts";
 import { presentJob } from "../jobs/present.ts";
 import { findJob } from "../jobs/service.ts";
@@ -18,6 +24,8 @@ import {
   withdrawExtract,
 } from "./service.ts";
 import { receiveOriginal } from "./upload.ts";
+import { openCompanion, receiveCompanion } from "./upload-companion.ts";
+import { receivePiece } from "./upload-pieces.ts";
 
 const ALL = "/programmes/:programmeId/extracts";
 const ONE = `${ALL}/:extractId`;
@@ -49,11 +57,28 @@ export const addExtractRoutes = (routes: Routes): void => {
       deleteExtract(deps, programmeId, caller, params.extractId ?? ""),
   );
   routes.add(
-    { method: "put", path: `${ONE}/original`, access: "extract.edit" },
-    async ({ deps, programmeId, caller, params, req }) => {
+    { method: "put", path: `${ONE}/original`, access: "extract.edit", query: uploadQuery },
+    async ({ deps, programmeId, caller, params, query, req }) => {
       const id = params.extractId ?? "";
-      await receiveOriginal(deps, programmeId, caller, id, req);
+      if (query.offset === undefined) await receiveOriginal(deps, programmeId, caller, id, req);
+      else await receivePiece(deps, programmeId, caller, id, query.offset, req);
       return showExtract(deps, programmeId, id);
+    },
+  );
+  routes.add(
+    { method: "put", path: `${ONE}/companion`, access: "extract.edit", query: companionQuery },
+    async ({ deps, programmeId, caller, params, query, req }) => {
+      const id = params.extractId ?? "";
+      await receiveCompanion(deps, programmeId, caller, id, query.name, req);
+      return showExtract(deps, programmeId, id);
+    },
+  );
+  routes.add(
+    { method: "get", path: `${ONE}/companion`, access: "extract.read" },
+    async ({ deps, programmeId, params, res }) => {
+      const { companion, stream } = await openCompanion(deps, programmeId, params.extractId ?? "");
+      res.set("Content-Length", String(companion.bytes));
+      await send(res, companion.fileName, "application/octet-stream", stream);
     },
   );
   routes.add(

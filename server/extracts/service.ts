@@ -12,8 +12,8 @@ import { isOpen, planFindings } from "./findings.ts";
 import { presentExtract, presentPreview } from "./present.ts";
 import { previewOf } from "./preview.ts";
 import { extractsOf, findExtractRow, lockExtract, namesOf, nextNumber } from "./queries.ts";
-import { readSample } from "./read-sample.ts";
-import type { Sample } from "./sample.ts";
+import { lookInto } from "./upload-keep.ts";
+import { growingKey } from "./upload-pieces.ts";
 
 interface Person {
   id: string;
@@ -120,11 +120,6 @@ const refuseUnlessPlanning = (row: Extract): void => {
   });
 };
 
-const sampleFor = (deps: Deps, row: Extract, plan?: ReadingPlan): Promise<Sample> => {
-  if (row.originalKey === null) throw notFound("This file");
-  return readSample(deps.files, row.originalKey, Number(row.bytes), plan);
-};
-
 const writePlan = async (
   deps: Deps,
   person: Person,
@@ -171,7 +166,7 @@ export const savePlan = async (
   const row = await requireExtract(deps, programmeId, id);
   refuseUnlessPlanning(row);
   refuseStale(row, input.version);
-  const sample = await sampleFor(deps, row, input.plan);
+  const sample = await lookInto(deps.files, row, input.plan);
   const findings = planFindings(sample, input.plan);
   await writePlan(deps, person, row, input.version, {
     plan: input.plan,
@@ -208,7 +203,7 @@ export const commitExtract = async (
     throw unprocessable("plan-not-ready", "The reading plan has not been confirmed.", {
       hint: "Look through the columns and confirm the plan first.",
     });
-  refuseOpen(planFindings(await sampleFor(deps, row, plan), plan));
+  refuseOpen(planFindings(await lookInto(deps.files, row, plan), plan));
   const jobId = await inTransaction(deps.db, async (tx) => {
     const locked = await lockExtract(tx, programmeId, id);
     if (!locked) throw notFound("This extract");
@@ -245,7 +240,7 @@ export const deleteExtract = async (
   person: Person,
   id: string,
 ): Promise<void> => {
-  const key = await inTransaction(deps.db, async (tx) => {
+  const keys = await inTransaction(deps.db, async (tx) => {
     const row = await lockExtract(tx, programmeId, id);
     if (!row) throw notFound("This extract");
     if (row.state !== "receiving" && row.state !== "planning")
@@ -262,9 +257,9 @@ export const deleteExtract = async (
       before: { fileName: row.fileName, sha256: row.sha256 },
       at: deps.now(),
     });
-    return row.originalKey;
+    return [row.originalKey ?? growingKey(row), row.companion?.key];
   });
-  if (key !== null) await deps.files.remove(key);
+  for (const key of keys) if (key !== undefined) await deps.files.remove(key);
 };
 
 /** Queues the making of an edition without that extract. */

@@ -128,6 +128,8 @@ export const extract = z.object({
   bytes: z.number(),
   receivedBytes: z.number(),
   sha256: z.string().nullable(),
+  /** The file that describes the table, brought beside it. */
+  companion: z.object({ fileName: z.string(), bytes: z.int(), sha256: z.string() }).nullable(),
   uploadedBy: personRef,
   createdAt: timestamp,
   committedAt: timestamp.nullable(),
@@ -167,8 +169,14 @@ export const commitBody = z.strictObject({ version });
 
 /**
  * Upload in pieces: PUT …/extracts/:id/original?offset=N (raw body, at most LIMITS.pieceBytes) → { extract, preview }; the
- * preview is null until the last piece. A wrong offset: 409 `upload-offset` with details { receivedBytes }: go on from there.
+ * preview is null until the last piece. A piece counts once it is whole. A wrong offset: 409 `upload-offset` with details
+ * { receivedBytes }: go on from there. A piece that came before is compared: the same bytes answer as at first, others 409
+ * `other-file`.
  */
+export const uploadQuery = z.object({ offset: z.coerce.number().int().min(0).optional() });
+
+/** PUT …/extracts/:id/companion?name=ReadMe (raw body) → { extract, preview }. GET → the untouched file. */
+export const companionQuery = z.object({ name: z.string().trim().min(1).max(255) });
 
 /** GET …/reading-plans → { plans }; POST → 201 { plan }; PUT …/reading-plans/:id → { plan } (a further version). */
 export const namedPlanBody = z.strictObject({ name, plan: readingPlan });

@@ -1,6 +1,15 @@
 import { Column, Entity, Index, PrimaryGeneratedColumn, VersionColumn } from "typeorm";
 import { idColumn, momentColumn, nameColumn } from "../columns.ts";
 
+/** A file that describes the table of an extract, kept as it was brought. */
+export interface Companion {
+  fileName: string;
+  bytes: number;
+  sha256: string;
+  /** In the file storage. */
+  key: string;
+}
+
 /** A file brought in: its untouched original, how it is read, and what came of it. */
 @Entity("extract")
 @Index("extract_number", ["programmeId", "number"], { unique: true })
@@ -43,6 +52,9 @@ export class Extract {
   @Index("extract_sha256")
   @Column({ type: "char", length: 64, charset: "ascii", collation: "ascii_bin", nullable: true })
   sha256!: string | null;
+
+  @Column({ type: "json", nullable: true })
+  companion!: Companion | null;
 
   @Column({ ...idColumn, name: "uploaded_by" })
   uploadedBy!: string;
