@@ -2,17 +2,18 @@ import type { ColumnCard, Finding, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning, KEPT, plainHeader } from "#shared/catalogue/header-spellings.ts";
 import { conversionTo } from "#shared/units/units.ts";
 import { unprocessable } from "../errors.ts";
+import { doubtfulUnit, unitInName } from "../extracts/doubtful-units.ts";
 import { isOpen, planFindings } from "../extracts/findings.ts";
+import { readHeader } from "../extracts/read-header.ts";
 import type { Sample } from "../extracts/sample.ts";
-import { readHeader, suggestUnit, textsOf } from "../extracts/suggest.ts";
+import { suggestUnit, textsOf } from "../extracts/suggest.ts";
+import { contradicts } from "../extracts/ucd.ts";
 import { parseNumber } from "../formats/numbers.ts";
 import type { TableColumn } from "../formats/table.ts";
-import { doubtfulUnit, unitInName } from "./doubtful-units.ts";
 import type { Glance } from "./glance.ts";
 import type { PlanColumn, PlanFile } from "./plan-file.ts";
 import { columnAnswer, planOf, type Question } from "./question.ts";
 import { asks } from "./trouble.ts";
-import { contradicts } from "./ucd.ts";
 
 const SHOWN_EXAMPLES = 3;
 

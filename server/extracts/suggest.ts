@@ -5,36 +5,22 @@ import {
   findMeaning,
   HEADER_SPELLINGS,
   KEPT,
-  meaningOfHeader,
+  type Meaning,
   plainHeader,
 } from "#shared/catalogue/header-spellings.ts";
-import { conversionTo } from "#shared/units/units.ts";
+import { conversionTo, systemInUnit } from "#shared/units/units.ts";
 import { isBlankWord, isSexagesimal, parseNumber } from "../formats/numbers.ts";
+import { unitInName } from "./doubtful-units.ts";
+import { type ColumnMeaning, chooseColumns, meaningOfColumn } from "./meaning-of-column.ts";
 import type { Sample } from "./sample.ts";
+import { isMagnitude, magnitudeSystemOf } from "./suggest-magnitudes.ts";
+import { hasCosDecOf } from "./suggest-motion.ts";
 
 const SAMPLES = 5;
 const SAMPLE_CHARACTERS = 60;
 /** A search by likeness is for a person's eye: of wide files only the first columns get one. */
 const MOST_LIKENESSES = 150;
 const LEAST_LIKENESS_CHARACTERS = 5;
-
-export interface HeaderReading {
-  key: string | undefined;
-  rank: number;
-  /** As the header spells it, if it does. */
-  unit: string;
-}
-
-/** `plx [mas]` and `parallax (mas)`: a name and its unit. `[Fe/H]` and `log(g)` are names. */
-export const readHeader = (header: string): HeaderReading => {
-  const whole = meaningOfHeader(header);
-  if (whole) return { key: whole.key, rank: whole.rank, unit: "" };
-  const parts = /^(.+?)\s*[[(]([^[\]]*)[\])]$/.exec(header.trim());
-  const found = parts && meaningOfHeader(parts[1] ?? "");
-  return found
-    ? { key: found.key, rank: found.rank, unit: parts[2] ?? "" }
-    : { key: undefined, rank: Number.MAX_SAFE_INTEGER, unit: "" };
-};
 
 const likeness = new Fuse(HEADER_SPELLINGS, { keys: ["spelling"], threshold: 0.25, includeScore: true });
 
@@ -45,17 +31,7 @@ const looksLike = (header: string, taken: ReadonlySet<string>): string | undefin
   return best && !taken.has(best.item.key) ? best.item.key : undefined;
 };
 
-/** The surest column of each meaning. */
-const choose = (readings: HeaderReading[]): Map<string, number> => {
-  const chosen = new Map<string, number>();
-  readings.forEach((reading, index) => {
-    if (!reading.key) return;
-    const before = chosen.get(reading.key);
-    if (before === undefined || reading.rank < (readings[before]?.rank ?? 0)) chosen.set(reading.key, index);
-  });
-  return chosen;
-};
-
+/** Texts of a column without its blanks. */
 export const textsOf = (sample: Sample, index: number): string[] =>
   sample.rows.map((r) => (r.cells[index] ?? "").trim()).filter((text) => !isBlankWord(text));
 
@@ -88,52 +64,86 @@ const LONG_NUMBER = /^\d{15,19}$/;
 const isLongNumbers = (texts: string[]): boolean =>
   texts.length > 0 && texts.every((t) => LONG_NUMBER.test(t));
 
+const keptCard = (sample: Sample, index: number, because: string): ColumnSuggestion => ({
+  index,
+  header: sample.header[index] ?? "",
+  means: KEPT,
+  unit: "",
+  blankMarks: [],
+  samples: samplesOf(sample, index, false),
+  because,
+  asks: false,
+});
+
+/** Where the unit comes from, as the end of a sentence. */
+const unitWords = (spelled: string, isInHeader: boolean, unit: string): string => {
+  if (spelled !== "") return isInHeader ? ", which also names the unit" : `; the file says ${spelled}`;
+  return unit === "" ? "" : `; ${unit} is the usual unit`;
+};
+
+const doubts = (
+  { column }: Sample["columns"][number],
+  means: string,
+  spelled: string,
+): Pick<ColumnSuggestion, "magnitudeSystem" | "hasCosDec"> => ({
+  ...(isMagnitude(means) ? { magnitudeSystem: magnitudeSystemOf(column, spelled) } : {}),
+  ...(means === "pmra" ? { hasCosDec: hasCosDecOf(column) } : {}),
+});
+
+const usedCard = (
+  sample: Sample,
+  index: number,
+  meaning: Meaning,
+  found: ColumnMeaning,
+): ColumnSuggestion => {
+  const shown = sample.columns[index] as Sample["columns"][number];
+  const inHeader = found.unit || unitInName(shown.column.name);
+  const spelled = shown.column.unit.trim() || inHeader;
+  const isText = meaning.kind === "text";
+  const unit = isText
+    ? ""
+    : suggestUnit(
+        sample,
+        index,
+        meaning.key,
+        // Which zero point it is stands beside the unit.
+        meaning.unit === "mag" && systemInUnit(spelled) ? "mag" : spelled,
+      );
+  const isKnown = isText || conversionTo(meaning.unit, unit) !== undefined;
+  return {
+    ...keptCard(sample, index, ""),
+    means: meaning.key,
+    unit,
+    samples: samplesOf(sample, index, isText),
+    because: isKnown
+      ? `${found.because}${isText ? "" : unitWords(spelled, shown.column.unit.trim() === "", unit)}.`
+      : `${found.because}; its unit is not certain.`,
+    asks: !isKnown,
+    ...doubts(shown, meaning.key, spelled),
+  };
+};
+
 /** What each column seems to mean, and why. Nothing is taken for what it merely resembles. */
 export const suggestColumns = async (sample: Sample): Promise<ColumnSuggestion[]> => {
-  const readings = sample.header.map(readHeader);
-  const chosen = choose(readings);
+  const meanings = sample.columns.map((column) => meaningOfColumn(column, sample.decimalMark));
+  const chosen = chooseColumns(meanings);
   const taken = new Set(chosen.keys());
   let likenesses = 0;
 
-  const kept = (index: number, because: string): ColumnSuggestion => ({
-    index,
-    header: sample.header[index] ?? "",
-    means: KEPT,
-    unit: "",
-    blankMarks: [],
-    samples: samplesOf(sample, index, false),
-    because,
-    asks: false,
-  });
-
-  const suggest = (header: string, index: number): ColumnSuggestion => {
-    const { key, unit: spelled } = readings[index] ?? { key: undefined, unit: "" };
-    const meaning = key === undefined ? undefined : findMeaning(key);
-    if (key !== undefined && meaning) {
-      const other = chosen.get(key) ?? index;
-      if (other !== index) return kept(index, `“${sample.header[other]}” gives ${meaning.label} already.`);
-      const unit = suggestUnit(sample, index, key, spelled);
-      const isKnown = meaning.kind === "text" || conversionTo(meaning.unit, unit) !== undefined;
-      const source =
-        spelled !== "" ? ", which also names the unit" : unit !== "" ? `; ${unit} is the usual unit` : "";
-      return {
-        index,
-        header,
-        means: key,
-        unit: meaning.kind === "text" ? "" : unit,
-        blankMarks: [],
-        samples: samplesOf(sample, index, meaning.kind === "text"),
-        because: isKnown
-          ? `The header is a usual spelling of ${meaning.label}${source}.`
-          : `The header is a usual spelling of ${meaning.label}; its unit is not certain.`,
-        asks: !isKnown,
-      };
+  const suggest = (index: number): ColumnSuggestion => {
+    const found = meanings[index];
+    const meaning = found?.key === undefined ? undefined : findMeaning(found.key);
+    if (found && meaning) {
+      const other = chosen.get(meaning.key) ?? index;
+      if (other === index) return usedCard(sample, index, meaning, found);
+      return keptCard(sample, index, `“${sample.header[other]}” gives ${meaning.label} already.`);
     }
+    if (found?.because) return keptCard(sample, index, found.because);
     if (!taken.has("source_id") && isLongNumbers(textsOf(sample, index)))
-      return kept(index, "Whole numbers of 15 to 19 digits: they may be identifiers.");
-    const like = likenesses < MOST_LIKENESSES ? looksLike(header, taken) : undefined;
-    likenesses++;
-    return kept(
+      return keptCard(sample, index, "Whole numbers of 15 to 19 digits: they may be identifiers.");
+    const like = likenesses++ < MOST_LIKENESSES ? looksLike(sample.header[index] ?? "", taken) : undefined;
+    return keptCard(
+      sample,
       index,
       like
         ? `The header resembles a spelling of ${findMeaning(like)?.label ?? like}; say so if it is one.`
@@ -142,10 +152,10 @@ export const suggestColumns = async (sample: Sample): Promise<ColumnSuggestion[]
   };
 
   const suggestions: ColumnSuggestion[] = [];
-  for (const [index, header] of sample.header.entries()) {
+  for (const index of sample.header.keys()) {
     // A search by likeness takes its time: other people's requests get their turn in between.
     await nextTurn();
-    suggestions.push(suggest(header, index));
+    suggestions.push(suggest(index));
   }
   return suggestions;
 };

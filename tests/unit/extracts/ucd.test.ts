@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { contradicts } from "#server/command-line/ucd.ts";
+import { contradicts } from "#server/extracts/ucd.ts";
 import { COLUMNS, type Column } from "#shared/catalogue/columns.ts";
 
 describe("whether a UCD contradicts a name", () => {

@@ -1,4 +1,4 @@
-import { COLUMNS, type Column } from "#shared/catalogue/columns.ts";
+import { COLUMNS, type Column, errorKey } from "#shared/catalogue/columns.ts";
 
 /** Quantities for which catalogues agree on one UCD. */
 const SURE = new Set(
@@ -44,4 +44,62 @@ export const contradicts = (ucd: string, means: string): boolean => {
   const bands = bandsOf(own);
   const band = bandsOf(more)[0];
   return band !== undefined && bands.length > 0 && !bands.some((word) => isAkin(word, band));
+};
+
+/** UCDs of the first kind for what the catalogue keeps. */
+const FIRST_KIND: Readonly<Record<string, string>> = {
+  POS_EQ_RA_MAIN: "ra",
+  POS_EQ_RA: "ra",
+  POS_EQ_DEC_MAIN: "dec",
+  POS_EQ_DEC: "dec",
+  POS_EQ_PMRA: "pmra",
+  POS_EQ_PMDEC: "pmdec",
+  POS_PARLX_TRIG: "parallax",
+  TIME_EPOCH: "epoch",
+  PHYS_TEMP_EFFEC: "teff",
+  PHYS_GRAVITY_SURFACE: "logg",
+  PHOT_JHN_V: "v_mag",
+};
+
+/** Quantities that their UCD alone tells from every other of a catalogue. Optical bands are wider than their words. */
+const TOLD_APART = [
+  "ra",
+  "dec",
+  "epoch",
+  "pmra",
+  "pmdec",
+  "parallax",
+  "j_mag",
+  "h_mag",
+  "ks_mag",
+  "logg",
+  "feh",
+  "ebv",
+  "teff",
+];
+
+const wordsOf = (ucd: string): string[] =>
+  ucd
+    .toLowerCase()
+    .split(";")
+    .map((word) => word.trim())
+    .filter((word) => word !== "" && word !== "meta.main" && word !== "stat.mean");
+
+const sameWords = (a: readonly string[], b: readonly string[]): boolean =>
+  a.length === b.length && a.every((word) => b.includes(word));
+
+/** Key of the quantity, or of the error, that a UCD names and no other column of a catalogue would have; else undefined. */
+export const meaningOfUcd = (ucd: string): string | undefined => {
+  const text = ucd.trim();
+  if (isFirstKind(text)) return Object.hasOwn(FIRST_KIND, text) ? FIRST_KIND[text] : undefined;
+  const words = wordsOf(text);
+  const isError = words.includes("stat.error");
+  const own = words.filter((word) => word !== "stat.error");
+  const key = TOLD_APART.find((each) =>
+    sameWords(
+      own,
+      (ucdOf.get(each) ?? []).filter((word) => word !== "meta.main"),
+    ),
+  );
+  return key === undefined || !isError ? key : errorKey(key);
 };
