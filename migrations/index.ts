@@ -4,6 +4,7 @@ import { ProtectLogbook1796121700000 } from "./1796121700000-protect-logbook.ts"
 import { KeepRecipes1796121800000 } from "./1796121800000-keep-recipes.ts";
 import { TakeInDustAndDistance1796121900000 } from "./1796121900000-take-in-dust-and-distance.ts";
 import { KeepCompanions1796122100000 } from "./1796122100000-keep-companions.ts";
+import { KeepColumnHealth1796122200000 } from "./1796122200000-keep-column-health.ts";
 
 /** In order; a test holds this list to the folder. */
 export const MIGRATIONS = [
@@ -13,4 +14,5 @@ export const MIGRATIONS = [
   KeepRecipes1796121800000,
   TakeInDustAndDistance1796121900000,
   KeepCompanions1796122100000,
+  KeepColumnHealth1796122200000,
 ];

@@ -4,9 +4,31 @@ import { normalisedSql } from "./designation.ts";
 /** Rows that one statement changes: small enough for a cluster to certify. */
 const RANGE = 20_000;
 
-/** Star ids need no sequence: the entry that founds a star gives it its number. */
-export const foundedId = (extractId: string, row: number): string =>
-  String((BigInt(extractId) << 32n) + BigInt(row));
+const LOW_DIGITS = 15;
+const LOW_SIZE = 10 ** LOW_DIGITS;
+
+/**
+ * Star ids need no sequence: the entry that founds a star gives it its number, which is that of its extract times 2³² plus
+ * that of its row. The digits are added up in two parts, as whole numbers of 64 bits would be slow for every row of a file.
+ */
+export class FoundedIds {
+  private readonly high: number;
+  private readonly low: number;
+
+  constructor(extractId: string) {
+    const base = BigInt(extractId) << 32n;
+    this.high = Number(base / BigInt(LOW_SIZE));
+    this.low = Number(base % BigInt(LOW_SIZE));
+  }
+
+  of(row: number): string {
+    const sum = this.low + row;
+    const isOver = sum >= LOW_SIZE;
+    const high = isOver ? this.high + 1 : this.high;
+    const low = String(isOver ? sum - LOW_SIZE : sum);
+    return high === 0 ? low : `${high}${low.padStart(LOW_DIGITS, "0")}`;
+  }
+}
 
 const OTHERS = `JOIN extract x ON x.extract_id = o.extract_id AND x.state = 'committed'`;
 
@@ -42,7 +64,7 @@ const FILL_NAME_KEYS = `
   SELECT ${normalisedSql("o.designation")} AS name, MIN(o.star_id) FROM entry o ${OTHERS}
   WHERE o.programme_id = ? AND o.designation IS NOT NULL GROUP BY name`;
 
-/** Two rows of one extract are never taken for one star: the later ones found their own, as `foundedId` says. */
+/** Two rows of one extract are never taken for one star: the later ones found their own, as `FoundedIds` says. */
 const PART_TWINS = `
   UPDATE entry e
   JOIN (SELECT star_id, MIN(\`row_number\`) AS first FROM entry

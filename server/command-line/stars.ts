@@ -1,10 +1,9 @@
 import type { ReadingPlan } from "#shared/api/extracts.ts";
-import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { IdentifierSet } from "../catalogue/identifier-set.ts";
 import type { Value } from "../database/bulk.ts";
-import { rowMapper } from "../extracts/map-row.ts";
-import type { ColumnValues, RefusedRow, RowBatch, TableFinding } from "../formats/table.ts";
-import { cellText, glanceAt } from "./glance.ts";
+import { EntryMapper } from "../extracts/entry-mapper.ts";
+import type { RefusedRow, TableFinding } from "../formats/table.ts";
+import { glanceAt } from "./glance.ts";
 import { type OpenedTable, openTable } from "./open-table.ts";
 import { readPlanFile } from "./plan-file.ts";
 import { understand } from "./understand.ts";
@@ -26,15 +25,13 @@ export class StarRows {
   /** The first refused rows, to be named. */
   readonly refusals: { row: number; line: number | null; why: string }[] = [];
   private readonly seen = new IdentifierSet();
-  private readonly map: ReturnType<typeof rowMapper>;
-  private readonly used: readonly number[];
+  private readonly mapper: EntryMapper;
 
   constructor(
     private readonly table: OpenedTable,
     plan: ReadingPlan,
   ) {
-    this.map = rowMapper(plan);
-    this.used = plan.columns.filter((card) => card.means !== KEPT).map((card) => card.index);
+    this.mapper = new EntryMapper(plan);
   }
 
   /** What the reader found, complete once all blocks are read. */
@@ -47,8 +44,9 @@ export class StarRows {
     let block: Value[][] = [];
     for await (const batch of this.table.reader.batches) {
       this.refuse(batch.refused);
+      this.mapper.read(batch.columns, batch.rows);
       for (let row = 0; row < batch.rows; row++) {
-        const values = this.take(batch, row);
+        const values = this.take(row);
         if (values) block.push(values);
         if (block.length < BLOCK_ROWS) continue;
         yield block;
@@ -58,28 +56,22 @@ export class StarRows {
     if (block.length > 0) yield block;
   }
 
-  private take(batch: RowBatch, row: number): Value[] | null {
-    const { counts, seen } = this;
+  private take(row: number): Value[] | null {
+    const { counts, mapper, seen } = this;
     counts.read++;
-    const { values, reason, identity } = this.map(this.cellsOf(batch.columns, row));
-    if (values === null) {
+    const trouble = mapper.troubleOf(row);
+    if (trouble !== null) {
       counts.refused++;
-      this.keep({ row: counts.read, line: null, why: reason });
+      this.keep({ row: counts.read, line: null, why: trouble });
       return null;
     }
+    const identity = mapper.identityOf(row);
     if (identity !== "" && !seen.add(identity)) {
       counts.skipped++;
       return null;
     }
     counts.accepted++;
-    return values;
-  }
-
-  /** Only the cells that the plan speaks of are made into text. */
-  private cellsOf(columns: readonly ColumnValues[], row: number): string[] {
-    const cells: string[] = new Array(columns.length).fill("");
-    for (const index of this.used) cells[index] = cellText(columns[index], row);
-    return cells;
+    return mapper.valuesOf(row);
   }
 
   private refuse(refused: readonly RefusedRow[]): void {

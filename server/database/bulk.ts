@@ -2,6 +2,7 @@ import { Readable } from "node:stream";
 import { setTimeout as wait } from "node:timers/promises";
 import type { PoolConnection, ResultSetHeader } from "mysql2";
 import type { DataSource } from "typeorm";
+import type { LineBuffer } from "./line-buffer.ts";
 
 /**
  * Many rows at once, for the wide tables. `LOAD DATA LOCAL INFILE` fed from memory is nearly twice as quick as
@@ -10,6 +11,8 @@ import type { DataSource } from "typeorm";
 export type Value = number | string | null;
 
 const PIECE_BYTES = 64 * 1024;
+/** Of bytes that are there already; a packet of the protocol holds up to 16 MiB. */
+const SLICE_BYTES = 1024 * 1024;
 const INSERT_ROWS = 1_000;
 const ATTEMPTS = 4;
 const NOT_ALLOWED = new Set([1148, 3948, 4166]);
@@ -52,7 +55,14 @@ const decodeRow = (line: string): (string | null)[] =>
         : cell.replace(/\\(.)/g, (_match, escaped: string) => ESCAPES[escaped] ?? escaped),
     );
 
-function* pieces(lines: readonly string[]): Generator<Buffer> {
+/** Rows on their way: encoded lines, each without its end, or the bytes of all of them. */
+interface Encoded {
+  readonly rows: number;
+  pieces(): Iterable<Buffer>;
+  lines(): readonly string[];
+}
+
+function* piecesOf(lines: readonly string[]): Generator<Buffer> {
   let text = "";
   for (const line of lines) {
     text += `${line}\n`;
@@ -63,6 +73,22 @@ function* pieces(lines: readonly string[]): Generator<Buffer> {
   if (text !== "") yield Buffer.from(text);
 }
 
+function* slicesOf(bytes: Buffer): Generator<Buffer> {
+  for (let at = 0; at < bytes.length; at += SLICE_BYTES) yield bytes.subarray(at, at + SLICE_BYTES);
+}
+
+const ofLines = (lines: readonly string[]): Encoded => ({
+  rows: lines.length,
+  pieces: () => piecesOf(lines),
+  lines: () => lines,
+});
+
+const ofBuffer = (buffer: LineBuffer): Encoded => ({
+  rows: buffer.rows,
+  pieces: () => slicesOf(buffer.view()),
+  lines: () => buffer.view().toString("utf8").split("\n").slice(0, -1),
+});
+
 const list = (columns: readonly string[]): string => columns.map((c) => `\`${c}\``).join(", ");
 
 /** Warnings are what LOCAL makes of errors: a row that was skipped or bent must not pass. */
@@ -70,19 +96,19 @@ const load = (
   connection: PoolConnection,
   table: string,
   columns: readonly string[],
-  lines: readonly string[],
+  encoded: Encoded,
 ): Promise<void> =>
   new Promise((resolve, reject) => {
     const sql = `LOAD DATA LOCAL INFILE 'rows' INTO TABLE \`${table}\` CHARACTER SET utf8mb4
       FIELDS TERMINATED BY '\\t' ESCAPED BY '\\\\' LINES TERMINATED BY '\\n' (${list(columns)})`;
-    const infileStreamFactory = () => Readable.from(pieces(lines), { objectMode: false });
+    const infileStreamFactory = () => Readable.from(encoded.pieces(), { objectMode: false });
     connection.query<ResultSetHeader>({ sql, infileStreamFactory }, (error, result) => {
       if (error) return reject(error);
-      if (result.affectedRows === lines.length && result.warningStatus === 0) return resolve();
+      if (result.affectedRows === encoded.rows && result.warningStatus === 0) return resolve();
       connection.query("SHOW WARNINGS LIMIT 3", (_error, warnings) =>
         reject(
           new Error(
-            `${lines.length} rows were sent to ${table} and ${result.affectedRows} arrived: ${JSON.stringify(warnings)}`,
+            `${encoded.rows} rows were sent to ${table} and ${result.affectedRows} arrived: ${JSON.stringify(warnings)}`,
           ),
         ),
       );
@@ -104,19 +130,19 @@ const insert = async (
 const errnoOf = (error: unknown): number => Number((error as { errno?: unknown }).errno);
 
 /** Writes encoded rows in one statement of its own, or all of them again where the database asks to. */
-export const bulkInsertLines = async (
+const write = async (
   db: DataSource,
   table: string,
   columns: readonly string[],
-  lines: readonly string[],
+  encoded: Encoded,
 ): Promise<void> => {
-  if (lines.length === 0) return;
+  if (encoded.rows === 0) return;
   const runner = db.createQueryRunner();
   try {
     const connection = (await runner.connect()) as PoolConnection;
     for (let attempt = 1; ; attempt++) {
       try {
-        return await load(connection, table, columns, lines);
+        return await load(connection, table, columns, encoded);
       } catch (error) {
         if (NOT_ALLOWED.has(errnoOf(error))) break;
         if (!TRY_AGAIN.has(errnoOf(error)) || attempt >= ATTEMPTS) throw error;
@@ -126,8 +152,24 @@ export const bulkInsertLines = async (
   } finally {
     await runner.release();
   }
-  await insert(db, table, columns, lines);
+  await insert(db, table, columns, encoded.lines());
 };
+
+/** Writes rows that are encoded as lines. */
+export const bulkInsertLines = (
+  db: DataSource,
+  table: string,
+  columns: readonly string[],
+  lines: readonly string[],
+): Promise<void> => write(db, table, columns, ofLines(lines));
+
+/** Writes rows that are bytes already. The buffer may be filled again once this is done. */
+export const bulkInsertBuffer = (
+  db: DataSource,
+  table: string,
+  columns: readonly string[],
+  buffer: LineBuffer,
+): Promise<void> => write(db, table, columns, ofBuffer(buffer));
 
 /** The same for rows that are values still. */
 export const bulkInsert = (

@@ -1,12 +1,29 @@
 import type { ColumnCard, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning } from "#shared/catalogue/header-spellings.ts";
-import { conversionTo } from "#shared/units/units.ts";
+import { type Conversion, conversionTo } from "#shared/units/units.ts";
 import { isBlankWord, isSexagesimal, parseNumber, parseSexagesimal } from "../formats/numbers.ts";
 
 /** A number in the canonical unit; NaN for a blank; null for a text that is no number. */
 export type NumberReader = (text: string) => number | null;
 
 const HOURS_TO_DEGREES = 15;
+
+/** Numbers with a limit, a footnote or an error behind them: `<0.5`, `~7`, `12.3a`, `1.2±0.1`. */
+const MARKED =
+  /^[<>~≤≥≈≲≳]?\s*[+-]?(?:\d+[.,]?\d*|[.,]\d+)(?:e[+-]?\d+)?\s*(?:(?:±|\+\/?-)\s*[\d.,]+|[a-z*†‡:?]{0,3})$/i;
+
+/** Whether the text holds a number together with something that a number cannot keep. */
+export const isMarkedNumber = (text: string): boolean => MARKED.test(text.trim());
+
+/** The plan's decimal mark; formats that write numbers by their own rules have a point. */
+export const decimalMarkOf = (plan: ReadingPlan): "." | "," =>
+  plan.format === "delimited" || plan.format === "fixed-width" ? plan.decimalMark : ".";
+
+/** Marks that are numbers stand for that number however it is written: -999 is -999.0 too. */
+export const markValues = (card: ColumnCard, plan: ReadingPlan): readonly number[] =>
+  card.blankMarks
+    .map((mark) => parseNumber(mark.trim(), decimalMarkOf(plan)))
+    .filter((value) => !Number.isNaN(value));
 
 const isBlank = (card: ColumnCard): ((text: string) => boolean) => {
   const marks = new Set(card.blankMarks);
@@ -19,21 +36,24 @@ export const unitOf = (card: ColumnCard, plan: ReadingPlan): string => {
   return plan.raUnit === "hour" ? "hourangle" : "deg";
 };
 
+/** From the column's unit to the canonical one. */
+export const conversionOf = (card: ColumnCard, plan: ReadingPlan): Conversion =>
+  conversionTo(findMeaning(card.means)?.unit ?? "", unitOf(card, plan)) ?? { factor: 1, offset: 0 };
+
 /** How the cells of that column become numbers: marks for "no value" go before any conversion. */
 export const numberReader = (card: ColumnCard, plan: ReadingPlan): NumberReader => {
-  const meaning = findMeaning(card.means);
   const blank = isBlank(card);
-  const { factor, offset } = conversionTo(meaning?.unit ?? "", unitOf(card, plan)) ?? {
-    factor: 1,
-    offset: 0,
-  };
+  const marks = markValues(card, plan);
+  const decimalMark = decimalMarkOf(plan);
+  const { factor, offset } = conversionOf(card, plan);
   const isAngle = card.means === "ra" || card.means === "dec";
   // Hours, minutes and seconds are hours of right ascension, whatever the head of the column says of its decimals.
-  const sexagesimalFactor = card.means === "ra" ? HOURS_TO_DEGREES : 1;
+  const sexagesimalFactor = card.means === "ra" && plan.frame !== "galactic" ? HOURS_TO_DEGREES : 1;
   return (raw) => {
     const text = raw.trim();
     if (blank(text)) return Number.NaN;
-    const value = parseNumber(text, plan.decimalMark);
+    const value = parseNumber(text, decimalMark);
+    if (marks.includes(value)) return Number.NaN;
     if (!Number.isNaN(value)) return Number.isFinite(value) ? value * factor + offset : null;
     if (!isAngle || !isSexagesimal(text)) return null;
     const angle = parseSexagesimal(text);

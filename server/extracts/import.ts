@@ -8,7 +8,7 @@ import { starsOfExtract } from "../catalogue/star-blocks.ts";
 import { Extract } from "../database/entities/extract.entity.ts";
 import type { JobRow } from "../database/entities/job.entity.ts";
 import type { Cleaner, Failure, JobRun } from "../jobs/job-run.ts";
-import { loadEntries, type RowCounts } from "./load-entries.ts";
+import { type Loaded, loadEntries } from "./load-entries.ts";
 
 const payload = z.object({ extractId: z.string() });
 
@@ -19,7 +19,7 @@ const extractOf = (run: Pick<JobRun, "deps" | "job">): Promise<Extract> =>
   });
 
 const commit =
-  (run: JobRun, extract: Extract, counts: RowCounts) =>
+  (run: JobRun, extract: Extract, { counts, health }: Loaded) =>
   async (tx: EntityManager, edition: number, { added }: { added: number }): Promise<void> => {
     await tx.update(
       Extract,
@@ -33,6 +33,7 @@ const commit =
         rowsRefused: counts.refused,
         rowsSkipped: counts.skipped,
         newStars: added,
+        health,
         failureMessage: null,
         failureHint: null,
       },
@@ -59,14 +60,14 @@ export const importExtract = async (run: JobRun): Promise<void> => {
     async () => {
       run.signal.throwIfAborted();
       await removeEntries(db, extract.id);
-      const counts = await loadEntries(run, extract, readingPlan.parse(extract.plan));
+      const loaded = await loadEntries(run, extract, readingPlan.parse(extract.plan));
       await matchEntries(run, extract.id);
       await makeEdition(run, {
         reason: `extract ${extract.number}, ${extract.name}`,
         withExtract: extract.id,
         stars: () => starsOfExtract(db, extract.id),
-        total: counts.accepted,
-        commit: commit(run, extract, counts),
+        total: loaded.counts.accepted,
+        commit: commit(run, extract, loaded),
       });
     },
     () => cleanImport(run),

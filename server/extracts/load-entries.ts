@@ -1,15 +1,15 @@
-import type { ReadingPlan } from "#shared/api/extracts.ts";
+import type { ColumnHealth, ReadingPlan } from "#shared/api/extracts.ts";
 import { LIMITS } from "#shared/limits.ts";
-import { GIVEN } from "../catalogue/adopt.ts";
 import { IdentifierSet } from "../catalogue/identifier-set.ts";
-import { foundedId } from "../catalogue/match.ts";
-import { bulkInsert, bulkInsertLines, encodeRow, type Value } from "../database/bulk.ts";
+import { FoundedIds } from "../catalogue/match.ts";
+import { bulkInsert, bulkInsertBuffer, type Value } from "../database/bulk.ts";
 import type { Extract } from "../database/entities/extract.entity.ts";
+import { LineBuffer } from "../database/line-buffer.ts";
 import { notFound, unprocessable } from "../errors.ts";
-import type { CsvRecord } from "../formats/csv-splitter.ts";
-import { readRecords } from "../formats/read-records.ts";
+import type { RowBatch, TableReader } from "../formats/table.ts";
 import type { JobRun } from "../jobs/job-run.ts";
-import { type Mapped, rowMapper } from "./map-row.ts";
+import { EntryMapper } from "./entry-mapper.ts";
+import { openExtract } from "./open-extract.ts";
 
 export interface RowCounts {
   read: number;
@@ -18,74 +18,89 @@ export interface RowCounts {
   skipped: number;
 }
 
-/** Rows of one write, by number and by size. */
-const BLOCK_ROWS = 10_000;
-const BLOCK_CHARACTERS = 8_000_000;
+export interface Loaded {
+  counts: RowCounts;
+  health: ColumnHealth[];
+}
+
+/** Rows and bytes of one write. */
+const BLOCK_ROWS = 40_000;
+const BLOCK_BYTES = 8_000_000;
 const REASON_CHARACTERS = 500;
 
-const ENTRY_COLUMNS = ["extract_id", "row_number", "programme_id", "star_id", ...GIVEN];
 const REFUSED_COLUMNS = ["extract_id", "line_number", "reason", "text"];
+
+interface Line {
+  readonly line: number;
+  readonly text: string;
+}
+
+/** A row of a format without lines: its number, and its values between tabs. */
+const rowAsLine = ({ columns }: RowBatch, row: number, number: number): Line => ({
+  line: number,
+  text: columns
+    .map((values) => String(values[row] ?? ""))
+    .map((text) => (text === "NaN" ? "" : text))
+    .join("\t"),
+});
 
 /** Sorts the rows of a file into accepted, refused and skipped, and writes them block by block. */
 class Loader {
   readonly counts: RowCounts = { read: 0, accepted: 0, refused: 0, skipped: 0 };
-  private entries: string[] = [];
-  private aside: Value[][] = [];
-  private characters = 0;
-  private kept = 0;
-  private writing = Promise.resolve();
+  private readonly mapper: EntryMapper;
+  private readonly columns: readonly string[];
+  private readonly ids: FoundedIds;
   private readonly seen = new IdentifierSet();
-  private readonly map: (cells: readonly string[]) => Mapped;
+  /** One is filled while the other is on its way. */
+  private lines = new LineBuffer();
+  private spare = new LineBuffer();
+  private aside: Value[][] = [];
+  private asideCharacters = 0;
+  private kept = 0;
+  /** Rows of the table so far, refused ones among them. */
+  numbered = 0;
+  private writing = Promise.resolve();
 
   constructor(
     private readonly run: JobRun,
     private readonly extract: Extract,
     plan: ReadingPlan,
-    private readonly width: number,
   ) {
-    this.map = rowMapper(plan);
+    this.mapper = new EntryMapper(plan);
+    this.columns = ["extract_id", "row_number", "programme_id", "star_id", ...this.mapper.written];
+    this.ids = new FoundedIds(extract.id);
   }
 
-  take(record: CsvRecord): void {
-    this.counts.read++;
-    if (record.text.trim() === "" || record.cells.every((cell) => cell.trim() === "")) {
-      this.counts.skipped++;
-      return;
+  take(batch: RowBatch): void {
+    this.mapper.read(batch.columns, batch.rows);
+    const blankLines = batch.blankLines ?? 0;
+    this.counts.read += batch.rows + batch.refused.length + blankLines;
+    this.counts.skipped += blankLines;
+    const refusedRows = new Set(batch.refused.map(({ row }) => row));
+    let number = this.numbered;
+    for (let row = 0; row < batch.rows; row++) {
+      number++;
+      while (refusedRows.size > 0 && refusedRows.has(number)) number++;
+      this.takeRow(batch, row, number);
     }
-    if (record.cells.length !== this.width) {
-      const has = `This row has ${record.cells.length} values; the first line has ${this.width}.`;
-      this.refuse(record, `${has} Nothing was guessed about where the others belong.`);
-      return;
-    }
-    const { values, reason, identity } = this.map(record.cells);
-    if (values === null) {
-      this.refuse(record, reason);
-      return;
-    }
-    if (identity !== "" && !this.seen.add(identity)) {
-      this.counts.skipped++;
-      this.keepAside(record, "Skipped: an earlier row of this file has the same identifier.");
-      return;
-    }
-    this.counts.accepted++;
-    this.characters += record.text.length;
-    const { id, programmeId } = this.extract;
-    const row = this.counts.read;
-    this.entries.push(`${id}\t${row}\t${programmeId}\t${foundedId(id, row)}\t${encodeRow(values)}`);
+    this.numbered += batch.rows + batch.refused.length;
+    for (const { line, row, text, why } of batch.refused) this.refuse({ line: line ?? row, text }, why);
   }
 
   get isFull(): boolean {
-    return this.entries.length >= BLOCK_ROWS || this.characters >= BLOCK_CHARACTERS;
+    return this.lines.rows >= BLOCK_ROWS || this.lines.length + this.asideCharacters >= BLOCK_BYTES;
   }
 
   /** Hands the block on to be written while the next one is read; waits for the one before. */
   async flush(): Promise<void> {
-    const { entries, aside } = this;
-    this.entries = [];
-    this.aside = [];
-    this.characters = 0;
     await this.writing;
-    this.writing = this.write(entries, aside);
+    const { lines, aside } = this;
+    this.lines = this.spare;
+    this.lines.clear();
+    this.spare = lines;
+    this.aside = [];
+    this.asideCharacters = 0;
+    this.writing = this.write(lines, aside);
     this.writing.catch(() => undefined);
   }
 
@@ -94,23 +109,53 @@ class Loader {
     return this.writing;
   }
 
-  private async write(entries: string[], aside: Value[][]): Promise<void> {
+  health(): ColumnHealth[] {
+    return this.mapper.health();
+  }
+
+  private takeRow(batch: RowBatch, row: number, number: number): void {
+    const trouble = this.mapper.troubleOf(row);
+    if (trouble !== null) {
+      this.refuse(this.lineOf(batch, row, number), trouble);
+      return;
+    }
+    const identity = this.mapper.identityOf(row);
+    if (identity !== "" && !this.seen.add(identity)) {
+      this.counts.skipped++;
+      const why = "Skipped: an earlier row of this file has the same identifier.";
+      this.keepAside(this.lineOf(batch, row, number), why);
+      return;
+    }
+    this.counts.accepted++;
+    this.lines.plain(this.extract.id);
+    this.lines.plain(String(number));
+    this.lines.plain(this.extract.programmeId);
+    this.lines.plain(this.ids.of(number));
+    this.mapper.write(row, this.lines);
+    this.lines.endRow();
+  }
+
+  private lineOf(batch: RowBatch, row: number, number: number): Line {
+    return batch.lineOf?.(row) ?? rowAsLine(batch, row, number);
+  }
+
+  private async write(lines: LineBuffer, aside: Value[][]): Promise<void> {
     const { db } = this.run.deps;
-    await bulkInsertLines(db, "entry", ENTRY_COLUMNS, entries);
+    await bulkInsertBuffer(db, "entry", this.columns, lines);
     await bulkInsert(db, "refused_row", REFUSED_COLUMNS, aside);
   }
 
-  private refuse(record: CsvRecord, reason: string): void {
+  private refuse(line: Line, reason: string): void {
     this.counts.refused++;
-    this.keepAside(record, reason);
+    this.keepAside(line, reason);
   }
 
-  private keepAside(record: CsvRecord, reason: string): void {
+  private keepAside({ line, text }: Line, reason: string): void {
     if (this.kept >= LIMITS.refusedRowsKept) return;
     this.kept++;
-    this.characters += record.text.length;
-    const text = record.text.slice(0, LIMITS.cellCharacters);
-    this.aside.push([this.extract.id, record.line, reason.slice(0, REASON_CHARACTERS), text]);
+    const kept = text.slice(0, LIMITS.cellCharacters);
+    this.asideCharacters += kept.length;
+    this.aside.push([this.extract.id, line, reason.slice(0, REASON_CHARACTERS), kept]);
   }
 }
 
@@ -121,38 +166,51 @@ const refuseOtherHeader = (plan: ReadingPlan, width: number): void => {
   });
 };
 
-/** Reads the original under its plan into entries that each found a star of their own until they are matched. */
-export const loadEntries = async (run: JobRun, extract: Extract, plan: ReadingPlan): Promise<RowCounts> => {
-  if (extract.originalKey === null) throw notFound("This file");
+/** What the end of a table shows: that its reader stops, or that fewer rows came than were declared. */
+const refuseWhatIsMissing = (reader: TableReader, rows: number): void => {
+  const stop = reader.findings().find((finding) => finding.level === "stop");
+  if (stop) throw unprocessable(stop.key, stop.message, { hint: stop.hint });
+  const { declaredRows } = reader.header;
+  if (declaredRows === null || rows >= declaredRows) return;
+  throw unprocessable(
+    "rows-missing",
+    `The file says that it has ${declaredRows.toLocaleString("en")} rows, and ${rows.toLocaleString("en")} of them came. Nothing was kept but the original.`,
+    { hint: "Get the table again, whole, and bring it as a new extract." },
+  );
+};
+
+const readAll = async (run: JobRun, extract: Extract, loader: Loader, reader: TableReader): Promise<void> => {
   const total = Number(extract.bytes);
+  const { counts } = loader;
+  for await (const batch of reader.batches) {
+    loader.take(batch);
+    if (loader.isFull) await loader.flush();
+    const most = reader.header.declaredRows ?? Math.round((counts.read * total) / Math.max(1, batch.bytes));
+    await run.progress(counts.read, Math.max(counts.read, most), "Reading rows", "rows");
+  }
+  refuseWhatIsMissing(reader, loader.numbered);
+  await loader.flush();
+};
+
+/** Reads the original under its plan into entries that each found a star of their own until they are matched. */
+export const loadEntries = async (run: JobRun, extract: Extract, plan: ReadingPlan): Promise<Loaded> => {
+  if (extract.originalKey === null) throw notFound("This file");
   const source = await run.deps.files.read(extract.originalKey);
-  let loader: Loader | undefined;
+  const loader = new Loader(run, extract, plan);
   try {
-    for await (const { records, bytes } of readRecords(source, plan)) {
-      for (const record of records) {
-        if (loader) {
-          loader.take(record);
-          continue;
-        }
-        refuseOtherHeader(plan, record.cells.length);
-        loader = new Loader(run, extract, plan, record.cells.length);
-      }
-      if (!loader) continue;
-      if (loader.isFull) await loader.flush();
-      const { read } = loader.counts;
-      await run.progress(read, Math.max(read, Math.round((read * total) / bytes)), "Reading rows", "rows");
-    }
-    await loader?.flush();
+    const reader = await openExtract(source, plan);
+    refuseOtherHeader(plan, reader.header.columns.length);
+    await readAll(run, extract, loader, reader);
   } finally {
     source.destroy();
-    await loader?.settled();
+    await loader.settled();
   }
-  const counts = loader?.counts ?? { read: 0, accepted: 0, refused: 0, skipped: 0 };
+  const { counts } = loader;
   if (counts.accepted === 0)
     throw unprocessable(
       "no-row-accepted",
       `${counts.read.toLocaleString("en")} rows were read and none of them could be accepted.`,
       { hint: "Look at the columns and units of the reading plan, or at the file itself." },
     );
-  return counts;
+  return { counts, health: loader.health() };
 };

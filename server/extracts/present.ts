@@ -1,5 +1,6 @@
 import type { z } from "zod";
 import type {
+  ColumnHealth,
   ExtractPreview,
   Extract as ExtractShape,
   ReadingPlan,
@@ -53,3 +54,6 @@ export const presentExtract = (row: Extract, uploaderName: string, job: JobRow |
 /** Only an extract whose plan is open shows its preview. */
 export const presentPreview = (row: Extract): ExtractPreview | null =>
   row.state === "planning" ? (row.preview as ExtractPreview | null) : null;
+
+/** What the columns of a committed extract hold; empty for extracts that were read before this was kept. */
+export const columnHealthOf = (row: Extract): ColumnHealth[] => (row.health as ColumnHealth[] | null) ?? [];

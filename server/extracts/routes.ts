@@ -11,6 +11,7 @@ import {
 import type { Routes } from "../http/route.ts";
 import { presentJob } from "../jobs/present.ts";
 import { findJob } from "../jobs/service.ts";
+import { columnHealthOf } from "./present.ts";
 import { refusedRowsCsv } from "./refused-rows.ts";
 import {
   commitExtract,
@@ -111,6 +112,12 @@ export const addExtractRoutes = (routes: Routes): void => {
     { method: "post", path: `${ONE}/withdraw`, access: "extract.edit", status: 202 },
     async ({ deps, programmeId, caller, params }) => ({
       job: presentJob(await withdrawExtract(deps, programmeId, caller, params.extractId ?? "")),
+    }),
+  );
+  routes.add(
+    { method: "get", path: `${ONE}/health`, access: "extract.read" },
+    async ({ deps, programmeId, params }) => ({
+      columns: columnHealthOf(await requireExtract(deps, programmeId, params.extractId ?? "")),
     }),
   );
   routes.add(

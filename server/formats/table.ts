@@ -83,6 +83,10 @@ export interface RowBatch {
   readonly refused: readonly RefusedRow[];
   /** Bytes of the source consumed up to here, for progress. */
   readonly bytes: number;
+  /** Blank lines among the rows, which are none of them; absent where the format has no lines. */
+  readonly blankLines?: number;
+  /** A row as the file has it; absent where the format has no lines. To be asked before the next batch. */
+  readonly lineOf?: (row: number) => { readonly line: number; readonly text: string };
 }
 
 /** Stop: the table cannot be trusted. Ask: a person must decide. Note: worth knowing. */

@@ -90,7 +90,7 @@ describe("from a file to stars", () => {
       ["Star one", 20.5, 50],
     ]);
     const csv = await agent.get(`${extractsUrl(programme)}/${extract.id}/refused`).expect(200);
-    expect(csv.text).toContain('5,"This row has 3 values; the first line has 7.');
+    expect(csv.text).toContain('5,"This row has 3 values; the table has 7 columns.');
     expect(csv.text).toContain("“fifty” in plx is not a number.");
     expect(csv.text).toContain("Skipped: an earlier row");
     expect(csv.text.trim().split("\r\n")).toHaveLength(6);

@@ -66,6 +66,10 @@ export class Extract {
   @Column({ type: "json", nullable: true })
   plan!: unknown;
 
+  /** shared/api/extracts: ColumnHealth of each used column; null until it is committed. */
+  @Column({ type: "json", nullable: true })
+  health!: unknown;
+
   @Column({ name: "rows_read", type: "int", unsigned: true, nullable: true })
   rowsRead!: number | null;
 

@@ -19,6 +19,8 @@ export class DelimitedRows {
   readonly commentExamples: string[] = [];
   declaredRows: number | null;
   private left: number;
+  /** In the batch that is being made. */
+  private blankLines = 0;
   private readonly width: number;
 
   constructor(
@@ -33,7 +35,8 @@ export class DelimitedRows {
   batch(records: readonly CsvRecord[], bytes: number): RowBatch {
     const columns: string[][] = Array.from({ length: this.width }, () => []);
     const refused: RefusedRow[] = [];
-    let rows = 0;
+    const kept: CsvRecord[] = [];
+    this.blankLines = 0;
     for (const record of records) {
       const cells = this.cellsOf(record);
       if (cells === null) continue;
@@ -43,10 +46,14 @@ export class DelimitedRows {
         refused.push({ row: this.seen, line: this.linesBefore + record.line, text: record.text, why });
         continue;
       }
-      rows++;
+      kept.push(record);
       for (let i = 0; i < this.width; i++) columns[i]?.push(cells[i] ?? "");
     }
-    return { rows, columns, refused, bytes };
+    const lineOf = (row: number): { line: number; text: string } => {
+      const record = kept[row];
+      return record ? { line: this.lineOf(record), text: record.text } : { line: 0, text: "" };
+    };
+    return { rows: kept.length, columns, refused, bytes, blankLines: this.blankLines, lineOf };
   }
 
   /** Whether the record would be a row, and has too few values for one. */
@@ -66,7 +73,10 @@ export class DelimitedRows {
     if (cells.length !== this.width || this.layout.preamble.mark !== null) {
       if (this.isOutside(text)) return null;
     }
-    if (isBlank(cells)) return null;
+    if (isBlank(cells)) {
+      this.blankLines++;
+      return null;
+    }
     if (this.left > 0) {
       this.left--;
       return null;
