@@ -7,6 +7,7 @@ const VERBS: Readonly<Record<string, string>> = {
   commit: "committed",
   create: "began",
   delete: "deleted",
+  describe: "described",
   edit: "changed",
   export: "exported",
   import: "imported",

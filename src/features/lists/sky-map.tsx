@@ -3,64 +3,11 @@ import { useMemo } from "react";
 import type { ListSky } from "#shared/api/lists.ts";
 import { count } from "#shared/format/numbers.ts";
 import { listSkyOptions } from "#src/api/lists.ts";
+import { SKY_HEIGHT, SKY_WIDTH, SkyLabels, SkyNet, skyDot } from "#src/lib/sky-net.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
 import { Loading } from "#src/ui/loading.tsx";
-import { hammer, meridian, parallel } from "./projection.ts";
 
-const WIDTH = 420;
-const HEIGHT = 222;
-const HALF = 98;
-const CENTRE = [WIDTH / 2, HEIGHT / 2] as const;
-
-const onPaper = ([x, y]: readonly [number, number]): readonly [number, number] => [
-  CENTRE[0] + HALF * x,
-  CENTRE[1] - HALF * y,
-];
-const text = (point: readonly [number, number]): string =>
-  onPaper(point)
-    .map((n) => n.toFixed(1))
-    .join(",");
-
-const PARALLELS = [-60, -30, 0, 30, 60];
-const MERIDIANS = [60, 120, 180, 240, 300];
-
-const Net = () => (
-  <g fill="none" stroke="var(--hair)">
-    <ellipse cx={CENTRE[0]} cy={CENTRE[1]} rx={2 * HALF} ry={HALF} stroke="var(--rule)" />
-    {PARALLELS.map((dec) => (
-      <polyline key={`d${dec}`} points={parallel(dec).map(text).join(" ")} />
-    ))}
-    {MERIDIANS.map((ra) => (
-      <polyline key={`r${ra}`} points={meridian(ra).map(text).join(" ")} />
-    ))}
-  </g>
-);
-
-const Labels = () => (
-  <g className="fill-soft font-mono text-[8.5px]" textAnchor="middle">
-    {MERIDIANS.map((ra) => {
-      const [x, y] = onPaper(hammer(ra, 0));
-      return (
-        <text key={ra} x={x} y={y + 9} stroke="var(--sheet)" strokeWidth={2.5} paintOrder="stroke">
-          {ra}°
-        </text>
-      );
-    })}
-    {[-60, -30, 30, 60].map((dec) => {
-      const [x, y] = onPaper(hammer(359.999, dec));
-      return (
-        <text key={dec} x={x - 4} y={y + (dec > 0 ? -2 : 8)} textAnchor="end">
-          {dec > 0 ? "+" : "−"}
-          {Math.abs(dec)}°
-        </text>
-      );
-    })}
-  </g>
-);
-
-/** Many dots as one line of no length each: one element however many stars. */
-const dots = (points: ListSky["points"]): string =>
-  points.map(([ra, dec]) => `M${text(hammer(ra, dec))}h0`).join("");
+const dots = (points: ListSky["points"]): string => points.map(([ra, dec]) => skyDot(ra, dec)).join("");
 
 const Points = ({ points }: { points: ListSky["points"] }) => {
   const path = useMemo(() => dots(points), [points]);
@@ -86,7 +33,7 @@ const Cells = ({ cells }: { cells: ListSky["cells"] }) => {
     return Array.from({ length: SHADES }, (_, step) =>
       cells
         .filter(([, , stars]) => shade(stars) === step)
-        .map(([ra, dec]) => `M${text(hammer(ra, dec))}h0`)
+        .map(([ra, dec]) => skyDot(ra, dec))
         .join(""),
     );
   }, [cells]);
@@ -117,10 +64,15 @@ export const SkyMap = ({ programmeId, listId }: { programmeId: string; listId: s
   if (!sky) return <Loading what="Reading the positions" />;
   return (
     <figure>
-      <svg viewBox={`0 0 ${WIDTH} ${HEIGHT}`} className="mt-2 w-full" role="img" aria-label={summaryOf(sky)}>
-        <Net />
+      <svg
+        viewBox={`0 0 ${SKY_WIDTH} ${SKY_HEIGHT}`}
+        className="mt-2 w-full"
+        role="img"
+        aria-label={summaryOf(sky)}
+      >
+        <SkyNet />
         {sky.cells.length > 0 ? <Cells cells={sky.cells} /> : <Points points={sky.points} />}
-        <Labels />
+        <SkyLabels />
       </svg>
       <figcaption className="text-xs text-soft">
         {summaryOf(sky)} Right ascension and declination in degrees (ICRS).

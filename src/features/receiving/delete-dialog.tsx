@@ -7,6 +7,7 @@ import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { Button } from "#src/ui/button.tsx";
 import { Dialog } from "#src/ui/dialog.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
+import { dropUpload } from "./uploads.ts";
 
 interface Props {
   extract: Extract;
@@ -19,6 +20,7 @@ export const DeleteDialog = ({ extract, isOpen, onClose }: Props) => {
   const programmeId = useProgrammeId();
   const navigate = useNavigate();
   const remove = useProgrammeChange(programmeId, async (id: string) => {
+    dropUpload(id);
     await removeExtract(programmeId, id);
     await navigate(paths.programme.to(programmeId, "extracts"));
   });

@@ -1,25 +1,31 @@
 import { type ReactNode, useState } from "react";
 import type { Extract } from "#shared/api/extracts.ts";
-import { originalAddress } from "#src/api/extracts.ts";
+import { originalAddress, useKeepExtract } from "#src/api/extracts.ts";
 import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
 import { Moment } from "#src/ui/moment.tsx";
+import { CompanionField } from "./companion-field.tsx";
 import { DeleteDialog } from "./delete-dialog.tsx";
 import { Steps } from "./steps.tsx";
 
 interface Props {
   extract: Extract;
   planNote: string;
+  /** Below the steps: where the stars fall, for example. */
+  below?: ReactNode;
+  /** After another description of the columns has come. */
+  onDescribed?: () => void;
   /** Panel at the right. */
   aside?: ReactNode;
   children: ReactNode;
 }
 
 /** The frame of an extract: how far it is at the left, its matter in the middle, what is asked at the right. */
-export const ExtractFrame = ({ extract, planNote, aside, children }: Props) => {
+export const ExtractFrame = ({ extract, planNote, below, aside, onDescribed, children }: Props) => {
   const programmeId = useProgrammeId();
   const can = useCan();
+  const keep = useKeepExtract(programmeId);
   const [isDeleting, setDeleting] = useState(false);
   const isDeletable = extract.state === "receiving" || extract.state === "planning";
   const columns = aside
@@ -44,6 +50,13 @@ export const ExtractFrame = ({ extract, planNote, aside, children }: Props) => {
               Download the original
             </a>
           )}
+          <CompanionField
+            extract={extract}
+            onShown={(shown) => {
+              keep(shown);
+              onDescribed?.();
+            }}
+          />
           <p>
             Brought by {extract.uploadedBy.name}, <Moment at={extract.createdAt} isShort />
           </p>
@@ -54,6 +67,7 @@ export const ExtractFrame = ({ extract, planNote, aside, children }: Props) => {
             </Button>
           ) : null}
         </div>
+        {below}
       </section>
       <main className="min-w-0 px-[18px] py-5 max-xl:order-3 xl:overflow-auto xl:px-[26px]">{children}</main>
       {aside ? (

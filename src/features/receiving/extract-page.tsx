@@ -11,6 +11,9 @@ import { AwaitingFile } from "./awaiting-file.tsx";
 import { ExtractFrame } from "./extract-frame.tsx";
 import { Outcome } from "./outcome.tsx";
 import { PlanScreen } from "./plan-screen.tsx";
+import { useUploadOf } from "./uploads.ts";
+
+const ASK_EVERY_MS = 5_000;
 
 const Importing = ({ extract }: Pick<ExtractShown, "extract">) => {
   const programmeId = useProgrammeId();
@@ -49,7 +52,13 @@ export const ExtractPage = () => {
   const programmeId = useProgrammeId();
   const { extractId = "" } = useParams();
   const [opening, setOpening] = useState(0);
-  const { data, error, refetch } = useQuery(extractOptions(programmeId, extractId));
+  const isSending = useUploadOf(extractId) !== undefined;
+  const { data, error, refetch } = useQuery({
+    ...extractOptions(programmeId, extractId),
+    // Someone may be sending it from another window.
+    refetchInterval: ({ state }) =>
+      state.data?.extract.state === "receiving" && !isSending ? ASK_EVERY_MS : false,
+  });
   if (error && !data) return <ErrorNotice error={error} onRetry={() => void refetch()} isPage />;
   if (!data) return <Loading what="Opening the extract" />;
   const reload = async () => {

@@ -13,7 +13,7 @@ import { LedgerTable } from "#src/ui/ledger-table.tsx";
 import { Moment } from "#src/ui/moment.tsx";
 import { Page } from "#src/ui/page.tsx";
 import { Pill } from "#src/ui/pill.tsx";
-import { STATE_WORDS } from "./extract-words.ts";
+import { STATE_WORDS, shareOf } from "./extract-words.ts";
 import { ReadFileDialog } from "./read-file-dialog.tsx";
 
 const HEADS = [
@@ -34,6 +34,11 @@ const stateTone = ({ state, failure }: Extract): "calm" | "warning" | "plain" =>
   return state === "committed" ? "calm" : "plain";
 };
 
+const stateWords = (extract: Extract): string =>
+  extract.state === "receiving" && extract.receivedBytes > 0
+    ? `${shareOf(extract)} of the file is here`
+    : STATE_WORDS[extract.state];
+
 const Row = ({ programmeId, extract }: { programmeId: string; extract: Extract }) => (
   <tr>
     <td className="text-right font-mono text-[13px]">{extract.number}</td>
@@ -52,7 +57,7 @@ const Row = ({ programmeId, extract }: { programmeId: string; extract: Extract }
       ) : null}
     </td>
     <td>
-      <Pill tone={stateTone(extract)}>{STATE_WORDS[extract.state]}</Pill>
+      <Pill tone={stateTone(extract)}>{stateWords(extract)}</Pill>
       {extract.failure ? (
         <span className="mt-1 block max-w-56 text-xs text-mark">◆ {extract.failure.message}</span>
       ) : null}
@@ -83,7 +88,7 @@ const Empty = ({ canEdit, onRead }: { canEdit: boolean; onRead: () => void }) =>
     }
   >
     {canEdit
-      ? "Bring a catalogue file. You confirm how its columns are read before anything is stored."
+      ? "Bring a catalogue file, or paste a few rows. You confirm how its columns are read before anything is stored."
       : "Nobody has brought a catalogue file. A curator of this programme can."}
   </EmptyState>
 );

@@ -6,7 +6,13 @@ interface Props {
   file: File | null;
   error: string | undefined;
   onFile: (file: File) => void;
+  label?: string;
+  /** What may be dropped here. */
+  says?: string;
 }
+
+const TABLES =
+  "or drop it here: delimited, fixed-width or byte-by-byte text, VOTable, FITS or ECSV, each also as .gz; up to 2 GiB";
 
 /** What is wrong with a file before a byte of it is sent. */
 export const refusalOf = (file: File | null): string | undefined => {
@@ -17,7 +23,7 @@ export const refusalOf = (file: File | null): string | undefined => {
 };
 
 /** A place to drop a file on, or to choose one. */
-export const FileDrop = ({ file, error, onFile }: Props) => {
+export const FileDrop = ({ file, error, onFile, label = "Choose file", says = TABLES }: Props) => {
   const id = useId();
   const [isOver, setOver] = useState(false);
   const onDrop = (event: DragEvent) => {
@@ -41,7 +47,7 @@ export const FileDrop = ({ file, error, onFile }: Props) => {
         htmlFor={id}
         className="inline-flex min-h-8 cursor-pointer items-center rounded border border-edge bg-sheet px-3 py-1 text-[13px] has-focus-visible:outline-2 has-focus-visible:outline-mark hover:bg-sel"
       >
-        {file ? "Choose another file" : "Choose file"}
+        {file ? "Choose another file" : label}
         <input
           id={id}
           name="file"
@@ -61,9 +67,7 @@ export const FileDrop = ({ file, error, onFile }: Props) => {
             {file.name} <span className="font-mono text-xs text-soft">{sizeOf(file.size)}</span>
           </>
         ) : (
-          <span className="text-soft">
-            or drop it here: a table as text, separated by commas, semicolons, tabs or bars; up to 2 GiB
-          </span>
+          <span className="text-soft">{says}</span>
         )}
         {error ? (
           <span className="mt-1 block text-xs text-mark">

@@ -10,9 +10,12 @@ import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
 import { Moment } from "#src/ui/moment.tsx";
-import { epochText } from "./extract-words.ts";
-import { meaningLabel } from "./plan-row.tsx";
+import { ColumnHealth } from "./column-health.tsx";
+import { epochText, readingOf } from "./extract-words.ts";
+import { LookTabs } from "./look-tabs.tsx";
+import { meaningLabel } from "./plan-words.ts";
 import { RowSum } from "./row-sum.tsx";
+import { SavePlanButton } from "./save-plan-dialog.tsx";
 import { WithdrawDialog } from "./withdraw-dialog.tsx";
 
 const titleOf = ({ state, edition }: Extract): string =>
@@ -36,6 +39,21 @@ const Facts = ({ extract }: { extract: Extract }) => (
     </dd>
     <dt>sha256</dt>
     <dd className="font-mono text-[13px]">{extract.sha256 ?? "–"}</dd>
+    {extract.companion ? (
+      <>
+        <dt>Description</dt>
+        <dd>
+          {extract.companion.fileName}{" "}
+          <span className="font-mono text-[13px] text-soft">{count(extract.companion.bytes)} bytes</span>
+        </dd>
+      </>
+    ) : null}
+    {extract.plan ? (
+      <>
+        <dt>Read as</dt>
+        <dd>{readingOf(extract.plan)}</dd>
+      </>
+    ) : null}
     <dt>Release of the identifiers</dt>
     <dd>{extract.plan?.release || "not named"}</dd>
     {extract.plan?.epoch == null ? null : (
@@ -68,26 +86,36 @@ const ReadAs = ({ extract }: { extract: Extract }) => {
   );
 };
 
-/** What became of a committed extract, row by row in sum, and what can be done with it. */
-export const Outcome = ({ extract }: { extract: Extract }) => {
+const Refused = ({ extract }: { extract: Extract }) => {
+  const programmeId = useProgrammeId();
+  const { rows } = extract;
+  if (!rows || rows.refused + rows.skipped === 0) return null;
+  return (
+    <p className="mt-2">
+      <a
+        href={refusedAddress(programmeId, extract.id)}
+        className="inline-block min-h-6 underline underline-offset-4"
+      >
+        Download the refused rows
+      </a>{" "}
+      <span className="text-soft">
+        and those skipped, with their line, the reason, and the text as it was
+      </span>
+    </p>
+  );
+};
+
+/** Where the rows went, what the extract is, and what can be done with it. */
+const Report = ({ extract }: { extract: Extract }) => {
   const programmeId = useProgrammeId();
   const can = useCan();
   const [isWithdrawing, setWithdrawing] = useState(false);
-  const { rows, job } = extract;
+  const { job } = extract;
   const hasWithdrawal = job?.kind === "withdraw-extract" && job.state !== "done";
   const isBusy = hasWithdrawal && job.finishedAt === null;
   return (
     <>
-      <h1 className="mb-2 text-[30px]">{titleOf(extract)}</h1>
-      {rows ? <RowSum rows={rows} /> : null}
-      {rows && rows.refused > 0 ? (
-        <p className="mt-2">
-          <a href={refusedAddress(programmeId, extract.id)} className="underline underline-offset-4">
-            Download the refused rows
-          </a>{" "}
-          <span className="text-soft">with their line, the reason, and the text as it was</span>
-        </p>
-      ) : null}
+      <Refused extract={extract} />
       {hasWithdrawal ? (
         <div className="mt-4 max-w-2xl">
           <JobProgress programmeId={programmeId} jobId={job.id} done="The extract is withdrawn." />
@@ -107,8 +135,28 @@ export const Outcome = ({ extract }: { extract: Extract }) => {
         {extract.state === "committed" && can("extract.edit") && !isBusy ? (
           <Button onClick={() => setWithdrawing(true)}>Withdraw extract</Button>
         ) : null}
+        {extract.plan && can("extract.edit") ? (
+          <SavePlanButton extract={extract} plan={extract.plan} />
+        ) : null}
       </div>
       <WithdrawDialog extract={extract} isOpen={isWithdrawing} onClose={() => setWithdrawing(false)} />
     </>
   );
 };
+
+/** What became of a committed extract, row by row in sum and column by column. */
+export const Outcome = ({ extract }: { extract: Extract }) => (
+  <>
+    <h1 className="mb-2 text-[30px]">{titleOf(extract)}</h1>
+    {extract.rows ? <RowSum rows={extract.rows} /> : null}
+    <div className="mt-4">
+      <LookTabs
+        label="The extract"
+        looks={[
+          { key: "report", label: "Report", show: () => <Report extract={extract} /> },
+          { key: "columns", label: "Columns", show: () => <ColumnHealth extractId={extract.id} /> },
+        ]}
+      />
+    </div>
+  </>
+);

@@ -1,20 +1,13 @@
-import type { ColumnCard, ExtractPreview, Finding, ReadingPlan } from "#shared/api/extracts.ts";
-import { findMeaning } from "#shared/catalogue/header-spellings.ts";
-import { conversionTo } from "#shared/units/units.ts";
+import type { ColumnCard, ExtractPreview, ReadingPlan } from "#shared/api/extracts.ts";
 import { epochText } from "./extract-words.ts";
 
 /** Cards as the file itself suggests them. */
 export const suggestedColumns = (preview: ExtractPreview): ColumnCard[] =>
-  preview.columns.map(({ index, header, means, unit, blankMarks }) => ({
-    index,
-    header,
-    means,
-    unit,
-    blankMarks,
-  }));
+  preview.columns.map(({ samples: _samples, because: _because, asks: _asks, ...card }) => card);
 
 /** The plan a person starts from: what was recognised, with every question open. */
 export const suggestedPlan = (preview: ExtractPreview): ReadingPlan => ({
+  format: preview.format,
   delimiter: preview.delimiter,
   encoding: preview.encoding,
   decimalMark: preview.decimalMark,
@@ -22,6 +15,8 @@ export const suggestedPlan = (preview: ExtractPreview): ReadingPlan => ({
   epoch: null,
   release: "",
   raUnit: null,
+  frame: "ICRS",
+  equinox: null,
 });
 
 export const withCard = (plan: ReadingPlan, index: number, change: Partial<ColumnCard>): ReadingPlan => ({
@@ -29,49 +24,34 @@ export const withCard = (plan: ReadingPlan, index: number, change: Partial<Colum
   columns: plan.columns.map((card) => (card.index === index ? { ...card, ...change } : card)),
 });
 
-const cardOf = (plan: ReadingPlan, finding: Finding): ColumnCard | undefined =>
-  plan.columns.find((card) => card.header === finding.column);
-
-const withMark = (plan: ReadingPlan, card: ColumnCard, value: string): ReadingPlan => {
-  const text = value.slice(value.indexOf(":") + 1);
-  return value.startsWith("blank:")
-    ? withCard(plan, card.index, { blankMarks: [...card.blankMarks, text] })
-    : withCard(plan, card.index, { keptNumbers: [...(card.keptNumbers ?? []), text] });
+/**
+ * A plan made for another file, for this one: columns are known again by their headers, and what the other file had not is
+ * read as this one suggests.
+ */
+export const planFor = (preview: ExtractPreview, named: ReadingPlan): ReadingPlan => {
+  const cards = new Map(named.columns.map((card) => [card.header, card]));
+  return {
+    ...named,
+    format: preview.format,
+    delimiter: preview.delimiter,
+    encoding: preview.encoding,
+    decimalMark: preview.decimalMark,
+    columns: suggestedColumns(preview).map((card) => {
+      const known = cards.get(card.header);
+      return known ? { ...known, index: card.index } : card;
+    }),
+  };
 };
 
-/** The plan with that answer to the question; unchanged where the answer is none of it. */
-export const answered = (plan: ReadingPlan, finding: Finding, value: string): ReadingPlan => {
-  const card = cardOf(plan, finding);
-  if (finding.code === "ra-unit") return { ...plan, raUnit: value === "hour" ? "hour" : "deg" };
-  if (finding.code === "epoch-missing") return { ...plan, epoch: Number(value) };
-  if (finding.code === "blank-mark" && card) return withMark(plan, card, value);
-  if (finding.code === "unit-unknown" && card) return withCard(plan, card.index, { unit: value });
-  return plan;
+/** What a named plan and this file do not have in common. */
+export const differencesFrom = (preview: ExtractPreview, named: ReadingPlan): string[] => {
+  const here = new Set(preview.columns.map((c) => c.header));
+  const there = new Set(named.columns.map((c) => c.header));
+  return [
+    ...[...here].filter((header) => !there.has(header)).map((header) => `“${header}” is new in this file.`),
+    ...[...there].filter((header) => !here.has(header)).map((header) => `“${header}” is not in this file.`),
+  ];
 };
-
-const isMarked = (card: ColumnCard | undefined, finding: Finding): boolean => {
-  const text = finding.answers[0]?.value.slice("blank:".length);
-  if (!card || text === undefined) return false;
-  return card.blankMarks.includes(text) || (card.keptNumbers ?? []).includes(text);
-};
-
-/** Whether the plan answers the question. Only for what was asked of a plan that has changed since. */
-const isAnswered = (plan: ReadingPlan, finding: Finding): boolean => {
-  const card = cardOf(plan, finding);
-  if (finding.code === "ra-unit") return plan.raUnit !== null;
-  if (finding.code === "epoch-missing")
-    return plan.epoch !== null || plan.columns.some((c) => c.means === "epoch");
-  if (finding.code === "blank-mark") return isMarked(card, finding);
-  if (finding.code === "unit-unknown" && card) {
-    const meaning = findMeaning(card.means);
-    return !meaning || conversionTo(meaning.unit, card.unit) !== undefined;
-  }
-  return false;
-};
-
-/** What of the questions to the bare file is still open under a plan kept earlier. */
-export const stillOpen = (findings: readonly Finding[], plan: ReadingPlan): Finding[] =>
-  findings.filter((finding) => !isAnswered(plan, finding));
 
 /** An answer given earlier, and the plan that asks again. */
 export interface Given {
@@ -80,7 +60,7 @@ export interface Given {
   again: ReadingPlan;
 }
 
-export const givenAnswers = (plan: ReadingPlan): Given[] => {
+const ofPositions = (plan: ReadingPlan): Given[] => {
   const given: Given[] = [];
   if (plan.raUnit !== null)
     given.push({
@@ -94,14 +74,32 @@ export const givenAnswers = (plan: ReadingPlan): Given[] => {
       text: `Positions are of ${epochText(plan.epoch)}.`,
       again: { ...plan, epoch: null },
     });
-  for (const card of plan.columns)
-    for (const text of card.keptNumbers ?? [])
-      given.push({
-        key: `${card.index}-${text}`,
-        text: `${text} in “${card.header}” is a number.`,
-        again: withCard(plan, card.index, {
-          keptNumbers: (card.keptNumbers ?? []).filter((t) => t !== text),
-        }),
-      });
   return given;
 };
+
+const ofCard = (plan: ReadingPlan, card: ColumnCard): Given[] =>
+  (card.keptNumbers ?? []).map((text) => ({
+    key: `${card.index}-${text}`,
+    text: `${text} in “${card.header}” is a number.`,
+    again: withCard(plan, card.index, { keptNumbers: (card.keptNumbers ?? []).filter((t) => t !== text) }),
+  }));
+
+/** The name of a code as words: `round-number` is “round number”. */
+const codeWords = (key: string): string => {
+  const [code = "", ...column] = key.split(":");
+  const words = code.replaceAll("-", " ");
+  return column.length === 0 ? `“${words}”` : `“${words}” of “${column.join(":")}”`;
+};
+
+const ofAccepted = (plan: ReadingPlan): Given[] =>
+  (plan.accepted ?? []).map((key) => ({
+    key: `accepted-${key}`,
+    text: `The file is taken as it is: ${codeWords(key)}.`,
+    again: { ...plan, accepted: (plan.accepted ?? []).filter((k) => k !== key) },
+  }));
+
+export const givenAnswers = (plan: ReadingPlan): Given[] => [
+  ...ofPositions(plan),
+  ...plan.columns.flatMap((card) => ofCard(plan, card)),
+  ...ofAccepted(plan),
+];

@@ -2,23 +2,22 @@ import { useState } from "react";
 import type { ColumnCard, ColumnSuggestion, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning, KEPT, MEANINGS } from "#shared/catalogue/header-spellings.ts";
 import { unitChoices } from "#shared/units/units.ts";
+import { valueText } from "./extract-words.ts";
+import { meaningLabel } from "./plan-words.ts";
 
 const BOX =
   "min-h-7 w-full rounded border border-edge bg-sheet px-1.5 text-[13px] text-ink disabled:border-transparent disabled:bg-transparent disabled:opacity-100";
 /** Stands between blank marks: a comma may be part of one. */
 const BETWEEN = ";";
 
-export const meaningLabel = (key: string): string =>
-  key === KEPT ? "Kept as text" : (findMeaning(key)?.label ?? key);
-
 /** The first text of the column, and the value that is read from it. */
 const Sample = ({ suggestion }: { suggestion: ColumnSuggestion | undefined }) => {
   const samples = suggestion?.samples ?? [];
   const [first] = samples;
   if (!first) return <>–</>;
-  const isSame = first.value === null || String(first.value) === first.text;
-  const all = samples.map((s) => (s.value === null ? s.text : `${s.text} → ${s.value}`)).join("\n");
-  return <span title={all}>{isSame ? first.text : `${first.text} → ${first.value}`}</span>;
+  const pair = ({ text, value }: typeof first): string =>
+    value === null || String(value) === text ? text : `${text} → ${valueText(value)}`;
+  return <span title={samples.map(pair).join("\n")}>{pair(first)}</span>;
 };
 
 /** A text that is taken over when the person leaves it or presses Enter. */
@@ -87,6 +86,66 @@ const unitHint = (card: ColumnCard, canonical: string, raUnit: ReadingPlan["raUn
   return canonical === "" ? "none" : "unit?";
 };
 
+const isMagnitude = (card: ColumnCard): boolean =>
+  card.means.endsWith("_mag") && findMeaning(card.means)?.unit === "mag";
+
+/** A small choice of which no answer is a third one, to be asked. */
+const Small = <V extends string>(props: {
+  label: string;
+  value: V | null;
+  words: Readonly<Record<V, string>>;
+  isOff: boolean;
+  onValue: (value: V) => void;
+}) => (
+  <select
+    aria-label={props.label}
+    value={props.value ?? ""}
+    disabled={props.isOff}
+    className={`${BOX} mt-1 ${props.value === null ? "border-mark!" : ""}`}
+    onChange={(event) => props.onValue(event.target.value as V)}
+  >
+    {props.value === null ? <option value="">not answered</option> : null}
+    {(Object.entries(props.words) as [V, string][]).map(([value, word]) => (
+      <option key={value} value={value}>
+        {word}
+      </option>
+    ))}
+  </select>
+);
+
+/** What a unit alone does not say: the zero point of a magnitude, the cosine in a motion. */
+const Convention = ({
+  card,
+  isOff,
+  change,
+}: {
+  card: ColumnCard;
+  isOff: boolean;
+  change: (part: Partial<ColumnCard>) => void;
+}) => {
+  if (isMagnitude(card))
+    return (
+      <Small
+        label={`Magnitude system of ${card.header}`}
+        value={card.magnitudeSystem === undefined ? "vega" : card.magnitudeSystem}
+        words={{ vega: "Vega", ab: "AB" }}
+        isOff={isOff}
+        onValue={(magnitudeSystem) => change({ magnitudeSystem })}
+      />
+    );
+  if (card.means !== "pmra") return null;
+  const has = card.hasCosDec === undefined ? true : card.hasCosDec;
+  return (
+    <Small
+      label={`Cosine in ${card.header}`}
+      value={has === null ? null : has ? "with" : "without"}
+      words={{ with: "× cos δ", without: "without cos δ" }}
+      isOff={isOff}
+      onValue={(cosine) => change({ hasCosDec: cosine === "with" })}
+    />
+  );
+};
+
 interface Props {
   card: ColumnCard;
   suggestion: ColumnSuggestion | undefined;
@@ -94,18 +153,27 @@ interface Props {
   isAsking: boolean;
   isReadOnly: boolean;
   onChange: (index: number, change: Partial<ColumnCard>) => void;
+  /** Opens the values of the column. */
+  onOpen: (header: string) => void;
 }
 
 /** One column of the file: what stands in it and how it is read. */
-export const PlanRow = ({ card, suggestion, raUnit, isAsking, isReadOnly, onChange }: Props) => {
+export const PlanRow = ({ card, suggestion, raUnit, isAsking, isReadOnly, onChange, onOpen }: Props) => {
   const meaning = findMeaning(card.means);
   const isUnused = card.means === KEPT;
   const isOwn = suggestion !== undefined && suggestion.means !== card.means;
   const change = (part: Partial<ColumnCard>) => onChange(card.index, part);
   return (
     <tr className={isAsking ? "bg-sel" : undefined}>
-      <th scope="row" className="max-w-44 truncate font-mono text-xs font-normal" title={card.header}>
-        {card.header}
+      <th scope="row" className="max-w-44 font-mono text-xs font-normal">
+        <button
+          type="button"
+          title={`Values of ${card.header}`}
+          onClick={() => onOpen(card.header)}
+          className="block min-h-6 max-w-full truncate text-left underline decoration-edge underline-offset-4 hover:decoration-ink"
+        >
+          {card.header}
+        </button>
       </th>
       <td className="max-w-52 truncate font-mono text-xs text-soft">
         <Sample suggestion={suggestion} />
@@ -139,6 +207,7 @@ export const PlanRow = ({ card, suggestion, raUnit, isAsking, isReadOnly, onChan
         ) : (
           <span className="px-2 text-soft">–</span>
         )}
+        <Convention card={card} isOff={isReadOnly} change={change} />
       </td>
       <td className="w-36">
         {isUnused ? (

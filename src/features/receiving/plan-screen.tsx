@@ -1,4 +1,5 @@
-import type { Extract, ExtractPreview, ReadingPlan } from "#shared/api/extracts.ts";
+import { useState } from "react";
+import type { Extract, ExtractPreview } from "#shared/api/extracts.ts";
 import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { count } from "#shared/format/numbers.ts";
 import { ApiError } from "#src/api/client.ts";
@@ -6,14 +7,24 @@ import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { useCan } from "#src/lib/rights.ts";
 import { Button } from "#src/ui/button.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
-import { Select, TextInput } from "#src/ui/inputs.tsx";
 import { LevelMark } from "#src/ui/level-mark.tsx";
+import { ColumnValues } from "./column-values.tsx";
+import { EarlierPlanDialog } from "./earlier-plan-dialog.tsx";
 import { ExtractFrame } from "./extract-frame.tsx";
-import { DECIMAL_MARKS, DELIMITERS, ENCODINGS, openOf, questionsLeft } from "./extract-words.ts";
+import { openOf, questionsLeft } from "./extract-words.ts";
+import { FileFacts } from "./file-facts.tsx";
+import { FileReading } from "./file-reading.tsx";
+import { KnownPlan } from "./known-plan.tsx";
+import { LookTabs, useLook } from "./look-tabs.tsx";
 import { withCard } from "./plan-answers.ts";
 import { PlanTable } from "./plan-table.tsx";
+import { PositionMap } from "./position-map.tsx";
+import { PreviewRows } from "./preview-rows.tsx";
 import { Questions } from "./questions.tsx";
+import { SavePlanButton } from "./save-plan-dialog.tsx";
 import { usePlan } from "./use-plan.ts";
+
+type Reading = ReturnType<typeof usePlan>;
 
 interface Props {
   extract: Extract;
@@ -21,55 +32,6 @@ interface Props {
   /** Opens the extract anew, with what is saved. */
   onReload: () => void;
 }
-
-const entries = <K extends string>(words: Readonly<Record<K, string>>): [K, string][] =>
-  Object.entries(words) as [K, string][];
-
-/** How the text of the file is cut into cells, and to which release its identifiers belong. */
-const FileReading = ({
-  plan,
-  isReadOnly,
-  onPlan,
-}: {
-  plan: ReadingPlan;
-  isReadOnly: boolean;
-  onPlan: (plan: ReadingPlan) => void;
-}) => {
-  const choice = <K extends "delimiter" | "encoding" | "decimalMark">(
-    label: string,
-    key: K,
-    words: Readonly<Record<ReadingPlan[K], string>>,
-  ) => (
-    <Select
-      label={label}
-      value={plan[key]}
-      disabled={isReadOnly}
-      onChange={(event) => onPlan({ ...plan, [key]: event.target.value })}
-    >
-      {entries(words).map(([value, word]) => (
-        <option key={value} value={value}>
-          {word}
-        </option>
-      ))}
-    </Select>
-  );
-  return (
-    <div className="mb-5 grid grid-cols-1 gap-3 sm:grid-cols-2 2xl:grid-cols-4">
-      {choice("Values separated by", "delimiter", DELIMITERS)}
-      {choice("Decimal mark", "decimalMark", DECIMAL_MARKS)}
-      {choice("Encoding", "encoding", ENCODINGS)}
-      <TextInput
-        label="Release of the identifiers"
-        placeholder="as the catalogue names it"
-        maxLength={80}
-        autoComplete="off"
-        value={plan.release}
-        disabled={isReadOnly}
-        onChange={(event) => onPlan({ ...plan, release: event.target.value })}
-      />
-    </div>
-  );
-};
 
 const Failure = ({ failure }: { failure: NonNullable<Extract["failure"]> }) => (
   <div role="alert" className="mb-4 rounded border border-mark bg-sheet p-3">
@@ -81,67 +43,151 @@ const Failure = ({ failure }: { failure: NonNullable<Extract["failure"]> }) => (
   </div>
 );
 
+const Trouble = ({
+  error,
+  onReload,
+  onCheck,
+}: {
+  error: unknown;
+  onReload: () => void;
+  onCheck: () => void;
+}) => {
+  const isStale = error instanceof ApiError && error.code === "stale-version";
+  return (
+    <div className="mb-4">
+      <ErrorNotice error={error} />
+      <Button className="mt-2" onClick={isStale ? onReload : onCheck}>
+        {isStale ? "Show what is saved" : "Save again"}
+      </Button>
+    </div>
+  );
+};
+
+/** Ways on with the plan: another one, a name for this one, and the one main way. */
+const Actions = ({ extract, reading }: { extract: Extract; reading: Reading }) => {
+  const [isChoosing, setChoosing] = useState(false);
+  const open = openOf(reading.findings).length;
+  return (
+    <div className="flex flex-wrap gap-2">
+      <Button onClick={() => setChoosing(true)}>Use an earlier plan</Button>
+      <SavePlanButton extract={extract} plan={reading.plan} />
+      <Button
+        kind="main"
+        disabled={open > 0 || reading.isSaving}
+        isBusy={reading.isCommitting}
+        onClick={reading.commit}
+        title={open > 0 ? questionsLeft(reading.findings) : undefined}
+      >
+        {extract.failure ? "Commit again" : "Commit extract"}
+      </Button>
+      <EarlierPlanDialog
+        preview={reading.preview}
+        isOpen={isChoosing}
+        onClose={() => setChoosing(false)}
+        onPlan={reading.change}
+      />
+    </div>
+  );
+};
+
+const Looks = ({
+  reading,
+  isReadOnly,
+  onOpen,
+}: {
+  reading: Reading;
+  isReadOnly: boolean;
+  onOpen: (header: string) => void;
+}) => {
+  const { plan, preview, findings } = reading;
+  return (
+    <LookTabs
+      label="The file"
+      looks={[
+        {
+          key: "plan",
+          label: "Columns",
+          show: () => (
+            <PlanTable
+              plan={plan}
+              preview={preview}
+              findings={findings}
+              isReadOnly={isReadOnly}
+              onCard={(index, change) => reading.change(withCard(plan, index, change))}
+              onOpen={onOpen}
+            />
+          ),
+        },
+        { key: "rows", label: "Rows", show: () => <PreviewRows plan={plan} preview={preview} /> },
+        {
+          key: "sky",
+          label: "Sky",
+          show: () => (
+            <div className="max-w-3xl">
+              <PositionMap points={preview.sky} />
+              <p className="text-xs text-soft">
+                Right ascension and declination in degrees, as they are read now.
+              </p>
+            </div>
+          ),
+        },
+        { key: "values", label: "Values", show: () => <ColumnValues plan={plan} preview={preview} /> },
+      ]}
+    />
+  );
+};
+
 /** The reading plan: the columns in the middle, what is open at the right, and the one way on. */
 export const PlanScreen = ({ extract, preview: opened, onReload }: Props) => {
   const isReadOnly = !useCan()("extract.edit");
+  const [, look] = useLook();
   const reading = usePlan(useProgrammeId(), extract, opened);
-  const { plan, preview, findings, isSaving, error } = reading;
+  const { plan, preview, findings } = reading;
   const open = openOf(findings).length;
   const used = plan.columns.filter((c) => c.means !== KEPT).length;
-  const isStale = error instanceof ApiError && error.code === "stale-version";
+  const openColumn = (header: string) => look("values", { column: header });
   return (
     <ExtractFrame
       extract={{ ...extract, plan }}
       planNote={`${questionsLeft(findings)}; ${count(used)} of ${count(plan.columns.length)} columns used`}
+      onDescribed={onReload}
+      below={
+        preview.sky.length > 0 ? (
+          <div className="mt-5 max-w-sm max-xl:hidden">
+            <PositionMap title="Where they fall" points={preview.sky} isSmall />
+          </div>
+        ) : null
+      }
       aside={
         <Questions
           plan={plan}
+          sky={preview.sky}
           findings={findings}
-          isSaving={isSaving}
+          isSaving={reading.isSaving}
           isReadOnly={isReadOnly}
           onPlan={reading.change}
           onCheck={reading.check}
+          onOpen={openColumn}
         />
       }
     >
       <header className="mb-4 flex flex-wrap items-start justify-between gap-3">
         <div className="min-w-60 flex-1">
           <h1 className="text-[30px]">How should this file be read?</h1>
-          <p className="mt-1 text-soft">
-            <span className="font-mono text-ink">{count(preview.sampledRows)}</span> rows looked at; all are
-            read when the extract is committed. Nothing is stored yet.
-            {open > 0 ? ` It can be committed once nothing is open: ${questionsLeft(findings)}.` : ""}
-          </p>
+          {open > 0 ? (
+            <p className="mt-1 text-soft">
+              It can be committed once nothing is open: {questionsLeft(findings)}.
+            </p>
+          ) : null}
         </div>
-        {isReadOnly ? null : (
-          <Button
-            kind="main"
-            disabled={open > 0 || isSaving}
-            isBusy={reading.isCommitting}
-            onClick={reading.commit}
-            title={open > 0 ? questionsLeft(findings) : undefined}
-          >
-            {extract.failure ? "Commit again" : "Commit extract"}
-          </Button>
-        )}
+        {isReadOnly ? null : <Actions extract={extract} reading={reading} />}
       </header>
       {extract.failure ? <Failure failure={extract.failure} /> : null}
-      {error ? (
-        <div className="mb-4">
-          <ErrorNotice error={error} />
-          <Button className="mt-2" onClick={isStale ? onReload : reading.check}>
-            {isStale ? "Show what is saved" : "Save again"}
-          </Button>
-        </div>
-      ) : null}
+      {reading.error ? <Trouble error={reading.error} onReload={onReload} onCheck={reading.check} /> : null}
+      {isReadOnly || extract.plan ? null : <KnownPlan preview={opened} onPlan={reading.change} />}
+      <FileFacts extract={extract} plan={plan} preview={preview} />
       <FileReading plan={plan} isReadOnly={isReadOnly} onPlan={reading.change} />
-      <PlanTable
-        plan={plan}
-        preview={preview}
-        findings={findings}
-        isReadOnly={isReadOnly}
-        onCard={(index, change) => reading.change(withCard(plan, index, change))}
-      />
+      <Looks reading={reading} isReadOnly={isReadOnly} onOpen={openColumn} />
     </ExtractFrame>
   );
 };

@@ -3,8 +3,10 @@ import type { ColumnCard, ExtractPreview, Finding, ReadingPlan } from "#shared/a
 import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { count } from "#shared/format/numbers.ts";
 import { Button } from "#src/ui/button.tsx";
+import { Choice } from "./choice.tsx";
 import { openOf } from "./extract-words.ts";
-import { meaningLabel, PlanRow, UnitLists } from "./plan-row.tsx";
+import { PlanRow, UnitLists } from "./plan-row.tsx";
+import { meaningLabel } from "./plan-words.ts";
 
 type Which = "all" | "used" | "asks";
 const WORDS: Readonly<Record<Which, string>> = { all: "All", used: "Used", asks: "Asks" };
@@ -20,6 +22,8 @@ interface Props {
   findings: Finding[];
   isReadOnly: boolean;
   onCard: (index: number, change: Partial<ColumnCard>) => void;
+  /** Opens the values of a column. */
+  onOpen: (header: string) => void;
 }
 
 const useChosen = ({ plan, findings }: Props) => {
@@ -46,7 +50,7 @@ const HEADS = ["In the file", "Text → value", "Means", "Unit", "Blank marks", 
 
 /** The column cards: what each column of the file means, in which unit, and why it is thought so. */
 export const PlanTable = (props: Props) => {
-  const { preview, isReadOnly, onCard } = props;
+  const { preview, isReadOnly, onCard, onOpen } = props;
   const { which, setWhich, search, setSearch, portions, setPortions, asking, chosen, countOf } =
     useChosen(props);
   const suggestions = new Map(preview.columns.map((c) => [c.index, c]));
@@ -54,20 +58,19 @@ export const PlanTable = (props: Props) => {
   return (
     <section aria-label="Columns">
       <div className="mb-2 flex flex-wrap items-center gap-2">
-        <fieldset className="flex rounded border border-edge">
-          <legend className="sr-only">Columns shown</legend>
-          {(["all", "used", "asks"] as const).map((w) => (
-            <button
-              key={w}
-              type="button"
-              aria-pressed={which === w}
-              onClick={() => setWhich(w)}
-              className={`min-h-7 px-2.5 text-[13px] first:rounded-l last:rounded-r ${which === w ? "bg-ink text-paper" : "bg-sheet"}`}
-            >
-              {WORDS[w]} <span className="font-mono text-xs">{count(countOf(w))}</span>
-            </button>
-          ))}
-        </fieldset>
+        <Choice
+          legend="Columns shown"
+          value={which}
+          onValue={setWhich}
+          choices={(["all", "used", "asks"] as const).map((w) => ({
+            value: w,
+            label: (
+              <>
+                {WORDS[w]} <span className="font-mono text-xs">{count(countOf(w))}</span>
+              </>
+            ),
+          }))}
+        />
         <input
           type="text"
           aria-label="Find a column"
@@ -104,6 +107,7 @@ export const PlanTable = (props: Props) => {
                 isAsking={asking.has(card.header)}
                 isReadOnly={isReadOnly}
                 onChange={onCard}
+                onOpen={onOpen}
               />
             ))}
           </tbody>

@@ -1,17 +1,17 @@
-import { useState } from "react";
+import { type ReactNode, useState } from "react";
 import type { Finding, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning } from "#shared/catalogue/header-spellings.ts";
+import { count } from "#shared/format/numbers.ts";
 import { unitChoices } from "#shared/units/units.ts";
 import { Button } from "#src/ui/button.tsx";
 import { LevelMark } from "#src/ui/level-mark.tsx";
-
-const YEARS = { least: 1800, most: 2200 };
+import { NO_YEAR, yearOf } from "./extract-words.ts";
 
 const EpochAnswer = ({ onAnswer }: { onAnswer: (value: string) => void }) => {
   const [text, setText] = useState("");
   const [isTried, setTried] = useState(false);
-  const year = text.trim() === "" ? Number.NaN : Number(text.replace(",", "."));
-  const isYear = year >= YEARS.least && year <= YEARS.most;
+  const year = yearOf(text);
+  const isWrong = isTried && year === undefined;
   return (
     <form
       noValidate
@@ -19,13 +19,13 @@ const EpochAnswer = ({ onAnswer }: { onAnswer: (value: string) => void }) => {
       onSubmit={(event) => {
         event.preventDefault();
         setTried(true);
-        if (isYear) onAnswer(String(year));
+        if (year !== undefined) onAnswer(String(year));
       }}
     >
       <span className="flex flex-wrap gap-2">
         <input
           aria-label="Epoch as a year"
-          aria-invalid={isTried && !isYear ? true : undefined}
+          aria-invalid={isWrong ? true : undefined}
           inputMode="decimal"
           placeholder="2016.0"
           value={text}
@@ -34,16 +34,16 @@ const EpochAnswer = ({ onAnswer }: { onAnswer: (value: string) => void }) => {
         />
         <Button type="submit">Set epoch</Button>
       </span>
-      {isTried && !isYear ? (
+      {isWrong ? (
         <span role="alert" className="mt-1 block text-xs text-mark">
-          ◆ Enter a year from {YEARS.least} to {YEARS.most}, for example 2016.0.
+          ◆ {NO_YEAR}
         </span>
       ) : null}
     </form>
   );
 };
 
-const Answers = ({ finding, plan, onAnswer }: Omit<Props, "place" | "isReadOnly">) => {
+const Answers = ({ finding, plan, onAnswer }: Pick<Props, "finding" | "plan" | "onAnswer">) => {
   if (finding.code === "epoch-missing") return <EpochAnswer onAnswer={onAnswer} />;
   const card = plan.columns.find((c) => c.header === finding.column);
   const meaning = card && findMeaning(card.means);
@@ -84,10 +84,12 @@ interface Props {
   place: string;
   isReadOnly: boolean;
   onAnswer: (value: string) => void;
+  /** Further evidence. */
+  children?: ReactNode;
 }
 
 /** One finding: what, why, and the way to deal with it. */
-export const Question = ({ finding, plan, place, isReadOnly, onAnswer }: Props) => (
+export const Question = ({ finding, plan, place, isReadOnly, onAnswer, children }: Props) => (
   <li className="border-t border-hair py-3.5">
     <p className="mb-1">
       <LevelMark level={finding.level} hasWord />
@@ -99,11 +101,17 @@ export const Question = ({ finding, plan, place, isReadOnly, onAnswer }: Props) 
         </span>
       ) : null}
     </p>
-    <p className="wrap-anywhere">{finding.message}</p>
+    <p className="wrap-anywhere">
+      {finding.message}
+      {finding.count > 1 ? (
+        <span className="font-mono text-xs text-soft"> {count(finding.count)}×</span>
+      ) : null}
+    </p>
     <p className="text-xs text-soft">{finding.hint}</p>
     <Examples examples={finding.examples} />
     {finding.level === "ask" && !isReadOnly ? (
       <Answers finding={finding} plan={plan} onAnswer={onAnswer} />
     ) : null}
+    {children}
   </li>
 );

@@ -1,15 +1,20 @@
-import type { Finding, ReadingPlan } from "#shared/api/extracts.ts";
+import type { ExtractPreview, Finding, ReadingPlan } from "#shared/api/extracts.ts";
+import { answered } from "#shared/catalogue/answers.ts";
 import { Button } from "#src/ui/button.tsx";
-import { answered, givenAnswers } from "./plan-answers.ts";
+import { CompareMaps } from "./compare-maps.tsx";
+import { givenAnswers } from "./plan-answers.ts";
 import { Question } from "./question.tsx";
 
 interface Props {
   plan: ReadingPlan;
+  sky: ExtractPreview["sky"];
   findings: Finding[];
   isSaving: boolean;
   isReadOnly: boolean;
   onPlan: (plan: ReadingPlan) => void;
   onCheck: () => void;
+  /** Opens the values of a column. */
+  onOpen: (header: string) => void;
 }
 
 const ORDER: readonly Finding["level"][] = ["stop", "ask", "note"];
@@ -38,8 +43,29 @@ const Given = ({ plan, isReadOnly, onPlan }: Pick<Props, "plan" | "isReadOnly" |
   );
 };
 
+/** Where the rows behind a question can be looked at. */
+const Evidence = ({
+  plan,
+  finding,
+  sky,
+  onOpen,
+}: Pick<Props, "plan" | "sky" | "onOpen"> & { finding: Finding }) => {
+  const { column } = finding;
+  const isOfFile = plan.columns.some((card) => card.header === column);
+  return (
+    <>
+      {finding.code === "ra-unit" ? <CompareMaps sky={sky} /> : null}
+      {column !== null && isOfFile ? (
+        <Button kind="plain" className="mt-1 px-0!" onClick={() => onOpen(column)}>
+          Show the column
+        </Button>
+      ) : null}
+    </>
+  );
+};
+
 /** What only a person can tell, and what a person should know. */
-export const Questions = ({ plan, findings, isSaving, isReadOnly, onPlan, onCheck }: Props) => {
+export const Questions = ({ plan, sky, findings, isSaving, isReadOnly, onPlan, onCheck, onOpen }: Props) => {
   const sorted = ORDER.flatMap((level) => findings.filter((f) => f.level === level));
   const asks = sorted.filter((f) => f.level === "ask");
   const hasStop = sorted.some((f) => f.level === "stop");
@@ -64,7 +90,9 @@ export const Questions = ({ plan, findings, isSaving, isReadOnly, onPlan, onChec
             place={placeOf(finding)}
             isReadOnly={isReadOnly}
             onAnswer={(value) => onPlan(answered(plan, finding, value))}
-          />
+          >
+            <Evidence plan={plan} finding={finding} sky={sky} onOpen={onOpen} />
+          </Question>
         ))}
       </ul>
       <Given plan={plan} isReadOnly={isReadOnly} onPlan={onPlan} />

@@ -1,75 +1,100 @@
 import { useState } from "react";
 import { useNavigate } from "react-router-dom";
+import { count } from "#shared/format/numbers.ts";
 import { LIMITS } from "#shared/limits.ts";
+import { makeExtract, removeExtract, sendCompanion, useKeepExtract } from "#src/api/extracts.ts";
 import { paths } from "#src/app/paths.ts";
 import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { Button } from "#src/ui/button.tsx";
 import { Dialog } from "#src/ui/dialog.tsx";
+import { ErrorNotice } from "#src/ui/error-notice.tsx";
 import { TextArea, TextInput } from "#src/ui/inputs.tsx";
-import { Progress } from "#src/ui/progress.tsx";
-import { FileDrop, refusalOf } from "./file-drop.tsx";
-import { UploadProblem } from "./upload-problem.tsx";
-import { useUpload } from "./use-upload.ts";
+import { Choice } from "./choice.tsx";
+import { FileDrop } from "./file-drop.tsx";
+import { pastedRows } from "./pasted.ts";
+import { type ReadDraft, useReadDraft, type Way } from "./read-draft.ts";
+import { startUpload } from "./uploads.ts";
 
-/** A name to begin with: the file's own without its ending. */
-const nameOf = (file: File): string =>
-  file.name
-    .replace(/\.[a-z0-9]{1,5}$/i, "")
-    .replaceAll("_", " ")
-    .slice(0, LIMITS.nameCharacters);
+const WAYS: readonly { value: Way; label: string }[] = [
+  { value: "file", label: "A file" },
+  { value: "paste", label: "Pasted rows" },
+];
 
-const useDraft = () => {
-  const [file, setFile] = useState<File | null>(null);
-  const [name, setName] = useState("");
-  const [origin, setOrigin] = useState("");
-  const [isTried, setTried] = useState(false);
-  const choose = (chosen: File) => {
-    setFile(chosen);
-    if (name.trim() === "" || (file && name === nameOf(file))) setName(nameOf(chosen));
-  };
-  const isTooLarge = file !== null && file.size > LIMITS.fileBytes;
-  return {
-    file,
-    name,
-    origin,
-    setName,
-    setOrigin,
-    choose,
-    try: () => setTried(true),
-    fileError: isTried || isTooLarge ? refusalOf(file) : undefined,
-    nameError: isTried && name.trim() === "" ? "Give the extract a name." : undefined,
-  };
-};
-
-const Sending = ({ onClose }: { onClose: () => void }) => {
+/** Makes the extract, sends its description, and lets the file follow while the extract's own page shows it. */
+const useBring = () => {
   const programmeId = useProgrammeId();
   const navigate = useNavigate();
-  const draft = useDraft();
-  const { upload, error, send, cancel, forget } = useUpload(programmeId, ({ extract }) =>
-    navigate(paths.programme.to(programmeId, "extracts", `/${extract.id}`)),
-  );
-  const submit = () => {
-    draft.try();
-    const { file } = draft;
-    if (!file || refusalOf(file) || draft.name.trim() === "") return;
-    const { name, origin } = draft;
-    void send(file, { name: name.trim(), origin: origin.trim(), fileName: file.name, bytes: file.size });
+  const keep = useKeepExtract(programmeId);
+  const [isBusy, setBusy] = useState(false);
+  const [error, setError] = useState<unknown>(null);
+  const bring = async (file: File, { name, origin, companion }: ReadDraft): Promise<void> => {
+    setError(null);
+    setBusy(true);
+    let made: string | null = null;
+    try {
+      const extract = await makeExtract(programmeId, {
+        name: name.trim(),
+        origin: origin.trim(),
+        fileName: file.name,
+        bytes: file.size,
+      });
+      made = extract.id;
+      keep({ extract, preview: null });
+      if (companion) keep(await sendCompanion(programmeId, extract.id, companion));
+      startUpload({ programmeId, extractId: made, file, receivedBytes: 0, isNew: true, onDone: keep });
+      await navigate(paths.programme.to(programmeId, "extracts", `/${made}`));
+    } catch (problem) {
+      if (made) await removeExtract(programmeId, made).catch(() => undefined);
+      setError(problem);
+      setBusy(false);
+    }
   };
-  if (upload)
-    return (
-      <div className="flex flex-col gap-4">
-        <Progress
-          label={upload.sent < upload.bytes ? `Sending ${draft.name}` : "Looking at the first rows"}
-          done={upload.sent}
-          total={upload.bytes}
-          unit="bytes"
-        />
-        <p className="text-soft">Stay on this page until the file has arrived.</p>
-        <div className="flex justify-end">
-          <Button onClick={cancel}>Stop sending</Button>
-        </div>
-      </div>
-    );
+  return { bring, isBusy, error };
+};
+
+const Table = ({ draft }: { draft: ReadDraft }) => {
+  if (draft.way === "file")
+    return <FileDrop file={draft.file} error={draft.fileError} onFile={draft.choose} />;
+  const rows = pastedRows(draft.pasted);
+  return (
+    <TextArea
+      label="Rows"
+      name="rows"
+      rows={8}
+      spellCheck={false}
+      wrap="off"
+      className="font-mono text-xs"
+      hint={`The names of the columns in the first line, then 1 to ${LIMITS.pastedRows} stars; kept as pasted.${rows > 0 ? ` ${count(rows)} rows so far.` : ""}`}
+      value={draft.pasted}
+      error={draft.fileError}
+      onChange={(event) => draft.setPasted(event.target.value)}
+    />
+  );
+};
+
+const Description = ({ draft }: { draft: ReadDraft }) => (
+  <details>
+    <summary className="min-h-6">The columns are described in a file of their own</summary>
+    <p className="mt-1 mb-2 text-xs text-soft">
+      A ReadMe with a byte-by-byte description, for example. Both files are kept untouched in one extract.
+    </p>
+    <FileDrop
+      file={draft.companion}
+      error={draft.companionError}
+      onFile={draft.setCompanion}
+      label="Choose description"
+      says="or drop it here: text of up to 8 MiB"
+    />
+  </details>
+);
+
+const Reading = ({ onClose }: { onClose: () => void }) => {
+  const draft = useReadDraft();
+  const { bring, isBusy, error } = useBring();
+  const submit = () => {
+    const file = draft.ready();
+    if (file) void bring(file, draft);
+  };
   return (
     <form
       noValidate
@@ -79,15 +104,11 @@ const Sending = ({ onClose }: { onClose: () => void }) => {
         submit();
       }}
     >
-      <UploadProblem error={error} />
-      <FileDrop
-        file={draft.file}
-        error={draft.fileError}
-        onFile={(file) => {
-          forget();
-          draft.choose(file);
-        }}
-      />
+      <ErrorNotice error={error} />
+      <div>
+        <Choice legend="What is brought" choices={WAYS} value={draft.way} onValue={draft.setWay} />
+      </div>
+      <Table draft={draft} />
       <TextInput
         label="Name"
         name="name"
@@ -105,9 +126,10 @@ const Sending = ({ onClose }: { onClose: () => void }) => {
         value={draft.origin}
         onChange={(event) => draft.setOrigin(event.target.value)}
       />
+      <Description draft={draft} />
       <div className="flex flex-wrap justify-end gap-2">
         <Button onClick={onClose}>Cancel</Button>
-        <Button kind="main" type="submit">
+        <Button kind="main" type="submit" isBusy={isBusy}>
           Read file
         </Button>
       </div>
@@ -115,9 +137,9 @@ const Sending = ({ onClose }: { onClose: () => void }) => {
   );
 };
 
-/** Brings a file as a new extract; nothing of it reaches the catalogue before its plan is confirmed. */
+/** Brings a file or pasted rows as a new extract; nothing of it reaches the catalogue before its plan is confirmed. */
 export const ReadFileDialog = ({ isOpen, onClose }: { isOpen: boolean; onClose: () => void }) => (
   <Dialog title="Read file" isOpen={isOpen} onClose={onClose}>
-    <Sending onClose={onClose} />
+    <Reading onClose={onClose} />
   </Dialog>
 );

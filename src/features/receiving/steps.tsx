@@ -1,6 +1,6 @@
 import type { Extract } from "#shared/api/extracts.ts";
 import { count } from "#shared/format/numbers.ts";
-import { DECIMAL_MARKS, DELIMITERS, ENCODINGS, shortHash, sizeOf } from "./extract-words.ts";
+import { readingOf, shareOf, shortHash, sizeOf } from "./extract-words.ts";
 
 interface Step {
   title: string;
@@ -9,17 +9,20 @@ interface Step {
   hash?: string | null;
 }
 
+const awaited = (extract: Extract): string => {
+  if (extract.receivedBytes > 0) return `${shareOf(extract)} is here`;
+  return extract.failure ? "did not arrive" : "not here yet";
+};
+
 const fileStep = (extract: Extract): Step => {
   const { plan } = extract;
   if (extract.state === "receiving")
     return {
       title: "File received",
-      note: extract.failure ? "did not arrive" : "not here yet",
+      note: awaited(extract),
       state: extract.failure ? "failed" : "now",
     };
-  const read = plan
-    ? ` · ${ENCODINGS[plan.encoding]}, ${DELIMITERS[plan.delimiter]}, ${DECIMAL_MARKS[plan.decimalMark]}`
-    : "";
+  const read = plan ? ` · ${readingOf(plan)}` : "";
   return {
     title: "File received",
     note: `${sizeOf(extract.bytes)}${read}`,

@@ -2,7 +2,7 @@ import { useEffect, useRef, useState } from "react";
 import type { Extract, ExtractPreview, Finding, ReadingPlan } from "#shared/api/extracts.ts";
 import { putPlan, useCommitExtract, useKeepExtract } from "#src/api/extracts.ts";
 import { openOf } from "./extract-words.ts";
-import { stillOpen, suggestedColumns, suggestedPlan } from "./plan-answers.ts";
+import { suggestedColumns, suggestedPlan } from "./plan-answers.ts";
 
 /** Quick successions of changes are kept as one. */
 const SETTLE_MS = 500;
@@ -11,11 +11,6 @@ interface Shown {
   preview: ExtractPreview;
   findings: Finding[];
 }
-
-const firstShown = (extract: Extract, preview: ExtractPreview): Shown => ({
-  preview,
-  findings: extract.plan ? stillOpen(preview.findings, extract.plan) : preview.findings,
-});
 
 const hasSameColumns = (plan: ReadingPlan, preview: ExtractPreview): boolean =>
   plan.columns.length === preview.columns.length &&
@@ -26,7 +21,7 @@ export const usePlan = (programmeId: string, extract: Extract, opened: ExtractPr
   const keep = useKeepExtract(programmeId);
   const commit = useCommitExtract(programmeId, extract.id);
   const [plan, setPlan] = useState<ReadingPlan>(extract.plan ?? suggestedPlan(opened));
-  const [shown, setShown] = useState(() => firstShown(extract, opened));
+  const [shown, setShown] = useState<Shown>({ preview: opened, findings: opened.findings });
   const [isSaving, setSaving] = useState(false);
   const [isKept, setKept] = useState(extract.plan !== null);
   const [error, setError] = useState<unknown>(null);

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
 import { countInCells } from "#server/lists/sky.ts";
-import { hammer, meridian, parallel } from "#src/features/lists/projection.ts";
+import { hammer, meridian, parallel } from "#src/lib/projection.ts";
 
 describe("stars counted in cells", () => {
   test("are all counted, the poles and the meridian of zero too", () => {
