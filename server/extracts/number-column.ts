@@ -26,7 +26,7 @@ export class NumberColumn {
   private readonly marks: readonly number[];
   private readonly readSlowly: (text: string) => number | null;
   private readonly isIdentity: boolean;
-  private readonly isQuick: boolean;
+  private readonly decimalMark: "." | ",";
   private readonly isError: boolean;
 
   constructor(
@@ -38,8 +38,9 @@ export class NumberColumn {
     this.offset = offset;
     this.marks = markValues(card, plan);
     this.readSlowly = numberReader(card, plan);
-    this.isIdentity = factor === 1 && offset === 0;
-    this.isQuick = decimalMarkOf(plan) === ".";
+    this.decimalMark = decimalMarkOf(plan);
+    // The database reads a point as the decimal mark.
+    this.isIdentity = factor === 1 && offset === 0 && this.decimalMark === ".";
     this.isError = card.means.endsWith("_err");
   }
 
@@ -82,7 +83,7 @@ export class NumberColumn {
   private readTexts(source: readonly string[], rows: number, refuse: Refuse): void {
     for (let row = 0; row < rows; row++) {
       const text = source[row] ?? "";
-      const quick = this.isQuick ? quickNumber(text) : Number.NaN;
+      const quick = quickNumber(text, this.decimalMark);
       if (Number.isFinite(quick)) {
         const isMark = this.marks.length > 0 && this.marks.includes(quick);
         this.isPlain[row] = this.isIdentity ? 1 : 0;

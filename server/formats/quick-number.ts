@@ -1,4 +1,3 @@
-const POINT = 46;
 const PLUS = 43;
 const MINUS = 45;
 const ZERO = 48;
@@ -18,12 +17,16 @@ const isExponent = (text: string, from: number): boolean => {
   return true;
 };
 
+const numberOf = (text: string, decimalMark: "." | ","): number =>
+  Number(decimalMark === "." ? text : text.replace(decimalMark, "."));
+
 /**
- * Number of a text that has a sign, digits, a point and an exponent at most, without blanks around it: rounded as exactly as
+ * Number of a text that has a sign, digits, a decimal mark and an exponent at most, without blanks around it: rounded as exactly as
  * `Number` does, several times quicker for the short texts of tables. NaN for every other text, which may still be a number
  * in another spelling.
  */
-export const quickNumber = (text: string): number => {
+export const quickNumber = (text: string, decimalMark: "." | ","): number => {
+  const mark = decimalMark.charCodeAt(0);
   const sign = text.charCodeAt(0);
   let mantissa = 0;
   let digits = 0;
@@ -34,12 +37,13 @@ export const quickNumber = (text: string): number => {
     if (digit >= 0 && digit <= 9) {
       mantissa = mantissa * 10 + digit;
       digits++;
-    } else if (code === POINT && point < 0) point = at;
-    else if ((code === 69 || code === 101) && digits > 0 && isExponent(text, at + 1)) return Number(text);
+    } else if (code === mark && point < 0) point = at;
+    else if ((code === 69 || code === 101) && digits > 0 && isExponent(text, at + 1))
+      return numberOf(text, decimalMark);
     else return Number.NaN;
   }
   if (digits === 0) return Number.NaN;
-  if (digits > EXACT_DIGITS) return Number(text);
+  if (digits > EXACT_DIGITS) return numberOf(text, decimalMark);
   const value = point < 0 ? mantissa : mantissa / (POWERS[text.length - 1 - point] ?? Number.NaN);
   return sign === MINUS ? -value : value;
 };
