@@ -18,8 +18,8 @@ const Filling = ({ card }: { card: DetectorCard }) => {
   if (usual === undefined || sharp === undefined || Number.isNaN(usual)) return null;
   return (
     <>
-      From magnitude {fixed(usual, 1)} on, {limitOf(card)} within one exposure; with an image a quarter
-      sharper, from {fixed(sharp, 1)} on.{" "}
+      At magnitude {fixed(usual, 1)} and brighter, {limitOf(card)} within one exposure; with an image a
+      quarter sharper, at {fixed(sharp, 1)} and brighter.{" "}
     </>
   );
 };
