@@ -2,11 +2,10 @@ import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { encodeRow, encodeValue, type Value } from "../database/bulk.ts";
 import { stellarColumns } from "../database/star-table.ts";
 import { deriveColumns } from "../derive/derive.ts";
-import { allocateGiven, GIVEN_KEYS, type StellarColumns } from "../derive/star-columns.ts";
+import type { StellarColumns } from "../derive/star-columns.ts";
 import { GIVEN } from "./adopt.ts";
-import { ruweLimits } from "./ruwe-limits.ts";
+import { givenColumns } from "./given-columns.ts";
 
-const RELEASE = GIVEN.indexOf("release");
 const STELLAR: readonly string[] = Object.keys(stellarColumns());
 
 /** Columns of a star's row after its keys. */
@@ -22,17 +21,7 @@ const arrayOf = (derived: StellarColumns, key: string): ArrayLike<number> => {
 
 /** Whole rows as encoded lines, in the order of `STAR_VALUES`, from adopted values. */
 export const deriveLines = (adopted: readonly Value[][], recipe: RecipeSettings): string[] => {
-  const given = allocateGiven(adopted.length);
-  for (const key of GIVEN_KEYS) {
-    const at = GIVEN.indexOf(key);
-    const column = given[key];
-    if (column) for (let i = 0; i < adopted.length; i++) column[i] = Number(adopted[i]?.[at] ?? Number.NaN);
-  }
-  const limits = ruweLimits(
-    adopted.map((row) => row[RELEASE]),
-    recipe.astrometricQuality,
-  );
-  if (limits) given.ruwe_limit = limits;
+  const given = givenColumns(adopted, recipe);
   const derived = deriveColumns(given, adopted.length, recipe);
   const columns = STELLAR.map((key) => arrayOf(derived, key));
   return adopted.map((row, i) => {

@@ -1,6 +1,9 @@
 import { blankReason, PRESENT } from "#shared/catalogue/blank-reasons.ts";
 import { blankKey, COLUMNS, type Column, errorKey } from "#shared/catalogue/columns.ts";
+import { flagsIn } from "#shared/catalogue/flags.ts";
+import { methodKey } from "#shared/catalogue/methods.ts";
 import { GIVEN } from "../catalogue/adopt.ts";
+import { METHOD_KEYS } from "../database/star-table.ts";
 import type { EcsvColumn } from "../handover/ecsv.ts";
 import type { WorkedOut } from "./worked-out.ts";
 
@@ -80,6 +83,39 @@ const columnsOf = (c: Column): OutputColumn[] => {
   return [value, ...(c.hasError ? [error] : []), ...(hasBlank ? [blank] : [])];
 };
 
+/** By which relation a quantity came about, as the key of a method. */
+const methodOf = (c: Column): OutputColumn[] =>
+  METHOD_KEYS.some((key) => key === c.key)
+    ? [
+        {
+          name: `${c.key}_method`,
+          datatype: "string",
+          unit: "",
+          ucd: "meta.note",
+          description: `By which relation ${c.key} came about`,
+          bind: ({ stellar }) => {
+            const codes = stellar.methods[`${c.key}_method`];
+            return (row) => methodKey(codes?.[row] ?? 0) ?? null;
+          },
+        },
+      ]
+    : [];
+
+/** Which flags a star carries, those that only inform too. */
+const FLAG_WORDS: OutputColumn = {
+  name: "flag_words",
+  datatype: "string",
+  unit: "",
+  ucd: "meta.code.qual",
+  description: "Flags of the star and marks of its values, between semicolons",
+  bind:
+    ({ stellar }) =>
+    (row) =>
+      flagsIn(stellar.flagBits[row] ?? 0)
+        .map((flag) => flag.word)
+        .join("; ") || null,
+};
+
 /** Quantities that may be given or derived stand twice: as given, and as what the recipe makes of it. */
 const asGiven = (c: Column): OutputColumn[] => {
   const key = `${c.key}_given`;
@@ -95,4 +131,6 @@ const asGiven = (c: Column): OutputColumn[] => {
 export const OUTPUT_COLUMNS: readonly OutputColumn[] = (COLUMNS as readonly Column[]).flatMap((c) => [
   ...asGiven(c),
   ...columnsOf(c),
+  ...methodOf(c),
+  ...(c.key === "flags" ? [FLAG_WORDS] : []),
 ]);

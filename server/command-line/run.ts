@@ -1,6 +1,7 @@
 import { DERIVE_HELP, derive } from "./derive.ts";
 import { EXPLAIN_HELP, explain } from "./explain.ts";
 import { PRECISION_HELP, precision } from "./precision.ts";
+import { READ_HELP, read } from "./read.ts";
 import { type Surroundings, write } from "./surroundings.ts";
 import { EXIT, exitCode, isClosedPipe, troubleText, usage } from "./trouble.ts";
 
@@ -13,6 +14,7 @@ const COMMANDS: Readonly<Record<string, Command>> = {
   derive: { run: derive, help: DERIVE_HELP },
   explain: { run: explain, help: EXPLAIN_HELP },
   precision: { run: precision, help: PRECISION_HELP },
+  read: { run: read, help: READ_HELP },
 };
 
 const HELP = `Works out what a transit survey can do with a star, without a server and without a database.
@@ -23,6 +25,8 @@ const HELP = `Works out what a transit survey can do with a star, without a serv
       how one of these numbers comes about, step by step
   shortlight precision --diameters LIST --exposures LIST --magnitude M
       how precisely a star can be measured, by diameter of the aperture and time
+  shortlight read FILE
+      what the readers make of a file: its format, columns and rows, and what is wrong with it
 
   shortlight COMMAND --help says more of each.
 

@@ -247,6 +247,10 @@ const refuseOpen = (questions: readonly Question[]): void => {
   });
 };
 
+/** Nothing that is worked out here needs a date but motions: without them an unknown epoch just stays blank. */
+const moves = (columns: readonly ColumnCard[]): boolean =>
+  columns.some(({ means }) => means === "pmra" || means === "pmdec");
+
 /**
  * The reading plan of a table: what its names, units and UCDs leave no doubt about, and what the plan file answers. Ends
  * with the list of questions while one is open.
@@ -272,9 +276,10 @@ export const understand = (glance: Glance, plan: PlanFile): ReadingPlan => {
     frame: "ICRS",
     equinox: null,
   };
-  // What two columns mean is asked once, with more to say than that they mean the same.
   const findings = planFindings(sample, understood).filter(
-    (f) => f.code !== "meaning-twice" || rivals.length === 0,
+    // What two columns mean is asked once, with more to say than that they mean the same.
+    (f) =>
+      (f.code !== "meaning-twice" || rivals.length === 0) && (f.code !== "epoch-missing" || moves(columns)),
   );
   refuseOpen([
     ...askAboutFile(glance.findings, plan),

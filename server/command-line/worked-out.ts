@@ -1,10 +1,10 @@
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
 import type { RecipeSettings } from "#shared/science/recipes.ts";
 import { assessColumns, type InstrumentColumns } from "../assess/columns.ts";
-import { GIVEN } from "../catalogue/adopt.ts";
+import { givenColumns } from "../catalogue/given-columns.ts";
 import type { Value } from "../database/bulk.ts";
 import { deriveColumns } from "../derive/derive.ts";
-import { allocateGiven, type Columns, GIVEN_KEYS, type StellarColumns } from "../derive/star-columns.ts";
+import type { StellarColumns } from "../derive/star-columns.ts";
 
 export interface Settings {
   readonly card: CardSettings;
@@ -20,20 +20,9 @@ export interface WorkedOut {
   readonly instrument: InstrumentColumns;
 }
 
-const givenOf = (rows: readonly (readonly Value[])[]): Columns => {
-  const given = allocateGiven(rows.length);
-  for (const key of GIVEN_KEYS) {
-    const at = GIVEN.indexOf(key);
-    const column = given[key];
-    if (!column) continue;
-    for (const [i, row] of rows.entries()) column[i] = Number(row[at] ?? Number.NaN);
-  }
-  return given;
-};
-
 /** Derives and assesses a block. Pure: the same rows and settings give the same bits. */
 export const workOut = (rows: readonly (readonly Value[])[], settings: Settings): WorkedOut => {
-  const given = givenOf(rows);
+  const given = givenColumns(rows, settings.recipe);
   const stellar = deriveColumns(given, rows.length, settings.recipe);
   const instrument = assessColumns(
     { ...given, ...stellar.values },

@@ -10,8 +10,12 @@ const BLANK_WORDS = new Set(["nan", "null", "none", "n/a", "na", "-", "--", "---
 export const isBlankWord = (text: string): boolean =>
   text === "" || (text.length <= 5 && BLANK_WORDS.has(text.toLowerCase()));
 
+/** No number is written longer; the time to refuse a longer text would grow with the square of its length. */
+const LONGEST_NUMBER = 500;
+
 /** NaN for what is not a plain number: nothing is cut off, and thousands marks are never guessed. */
 export const parseNumber = (text: string, decimalMark: "." | ","): number => {
+  if (text.length > LONGEST_NUMBER) return Number.NaN;
   let plain = text;
   if (decimalMark === ",") {
     if (plain.includes(".")) return Number.NaN;

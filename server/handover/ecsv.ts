@@ -14,7 +14,7 @@ const NOT_IN_YAML = /[\u007f-\u009f\u2028\u2029\ufeff]/g;
 const escaped = (sign: string): string => `\\u${sign.charCodeAt(0).toString(16).padStart(4, "0")}`;
 
 /** A YAML scalar in double quotes: but for those signs, JSON's strings are YAML's too. */
-const scalar = (text: string): string => JSON.stringify(text).replace(NOT_IN_YAML, escaped);
+export const scalar = (text: string): string => JSON.stringify(text).replace(NOT_IN_YAML, escaped);
 
 const metaLines = (key: string, value: MetaValue): string[] => {
   if (typeof value === "number") return [`# - ${key}: ${value}`];

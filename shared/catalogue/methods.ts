@@ -35,5 +35,9 @@ const words = new Map<number, string>(METHODS.map((method) => [method.code, meth
 
 export const methodCode = (key: MethodKey): number => codes.get(key) ?? 0;
 
+/** The key of a stored code; undefined for a blank. */
+export const methodKey = (code: number): MethodKey | undefined =>
+  METHODS.find((method) => method.code === code)?.key;
+
 /** The words of a stored code; empty for a blank. */
 export const methodWord = (code: number): string => words.get(code) ?? "";

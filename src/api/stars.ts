@@ -12,7 +12,7 @@ import { EMPTY_VIEW, type ViewSpec, viewToParams } from "#shared/catalogue/view.
 import { get } from "./client.ts";
 import { programmeKeys } from "./programmes.ts";
 
-const stars = (
+export const starsPath = (
   programmeId: string,
   part: string,
   view: ViewSpec,
@@ -40,7 +40,7 @@ export const summaryOptions = (programmeId: string, view: ViewSpec) =>
   queryOptions({
     queryKey: programmeKeys.part(programmeId, "stars", "summary", viewKey(unordered(view))),
     queryFn: async ({ signal }) =>
-      (await get<{ summary: ViewSummary }>(stars(programmeId, "summary", view), signal)).summary,
+      (await get<{ summary: ViewSummary }>(starsPath(programmeId, "summary", view), signal)).summary,
     placeholderData: keepPreviousData,
   });
 
@@ -56,7 +56,7 @@ export const readWindow = async (
 ): Promise<StarRow[]> =>
   (
     await get<{ window: StarWindow }>(
-      stars(programmeId, "window", view, { offset: String(offset), limit: String(limit) }),
+      starsPath(programmeId, "window", view, { offset: String(offset), limit: String(limit) }),
       signal,
     )
   ).window.rows;
@@ -73,7 +73,7 @@ export const histogramsOptions = (programmeId: string, view: ViewSpec, columns: 
     queryFn: async ({ signal }) =>
       (
         await get<{ histograms: Histogram[] }>(
-          stars(programmeId, "histograms", view, { columns: columns.join() }),
+          starsPath(programmeId, "histograms", view, { columns: columns.join() }),
           signal,
         )
       ).histograms,
@@ -85,7 +85,7 @@ export const sheetOptions = (programmeId: string, view: ViewSpec, starId: string
   queryOptions({
     queryKey: programmeKeys.part(programmeId, "stars", "sheet", starId, viewKey(view)),
     queryFn: async ({ signal }): Promise<StarSheet> =>
-      (await get<{ star: StarSheet }>(stars(programmeId, starId, view), signal)).star,
+      (await get<{ star: StarSheet }>(starsPath(programmeId, starId, view), signal)).star,
     // The same star under another question stays until its new answer; another star is never shown in its place.
     placeholderData: (before) => (before?.id === starId ? before : undefined),
   });
@@ -94,6 +94,7 @@ export const findOptions = (programmeId: string, view: ViewSpec, text: string) =
   queryOptions({
     queryKey: programmeKeys.part(programmeId, "stars", "find", text, viewKey(view)),
     queryFn: async ({ signal }) =>
-      (await get<{ matches: StarMatch[] }>(stars(programmeId, "find", view, { q: text }), signal)).matches,
+      (await get<{ matches: StarMatch[] }>(starsPath(programmeId, "find", view, { q: text }), signal))
+        .matches,
     enabled: text !== "",
   });

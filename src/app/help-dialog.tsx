@@ -9,6 +9,7 @@ const KEYS: readonly (readonly [keys: string, what: string])[] = [
   ["Ctrl + Home, Ctrl + End", "First and last row"],
   ["Ctrl + G", "Go to a row"],
   ["Enter", "Open the star, or sort by the column"],
+  ["M", "Workings of the value (in the table)"],
   ["D", "Degrees or sexagesimal (in the table)"],
 ];
 

@@ -69,6 +69,57 @@ describe("the address of the catalogue", () => {
   });
 });
 
+describe("the workings of a number", () => {
+  const open = async (size: { width: number; height: number }) => {
+    const opened = await openPage({
+      url: app.url,
+      session: furnished.session,
+      expected: PREPARING,
+      ...size,
+    });
+    const path = `/programmes/${furnished.programme.id}/catalogue?${furnished.view}&columns=designation,radius,r_min`;
+    await openScreen(opened.page, { name: "catalogue", path, ready: GRID });
+    return opened;
+  };
+  const focused = (page: Page) => page.evaluate(() => document.activeElement?.textContent ?? "");
+
+  test("open from a cell by M, stand in the address, and Esc leads back step by step", async () => {
+    const { page, finish } = await open({ width: 1280, height: 900 });
+    await page.locator('[data-row="0"]').last().focus();
+    const cell = await focused(page);
+    await page.keyboard.press("m");
+    const panel = page.getByRole("article", { name: /^Workings of R min/ });
+    await panel.waitFor();
+    expect(await focused(page)).toBe("R min");
+    expect(new URL(page.url()).searchParams.get("workings")).toBe("r_min");
+    await panel.getByRole("button", { name: "workings of the radius of the star" }).click();
+    await page.getByRole("article", { name: /^Workings of Radius/ }).waitFor();
+    expect(new URL(page.url()).searchParams.get("workings")).toBe("r_min,radius");
+    await page.keyboard.press("Escape");
+    await panel.waitFor();
+    await expect.poll(() => focused(page)).toContain("workings of the radius of the star");
+    await page.keyboard.press("Escape");
+    await page.getByRole("article", { name: /^Star / }).waitFor();
+    await expect.poll(() => focused(page)).toBe(cell);
+    await finish();
+  });
+
+  test("lie beside the table, never over it, at any width from 1024 px on", async () => {
+    const { page, finish } = await open({ width: 1024, height: 800 });
+    await page.locator('[data-row="0"]').first().click();
+    await page.getByRole("article", { name: /^Star / }).waitFor();
+    for (const width of [1024, 1150, 1279, 1280]) {
+      await page.setViewportSize({ width, height: 800 });
+      const [table, sheet] = await Promise.all(
+        ["Catalogue", "Star"].map((name) => page.getByLabel(name, { exact: true }).first().boundingBox()),
+      );
+      expect(table && sheet && table.x + table.width <= sheet.x + 0.5, `${width} px`).toBe(true);
+      expect(table?.width ?? 0, `${width} px`).toBeGreaterThan(500);
+    }
+    await finish();
+  });
+});
+
 test("no screen scrolls sideways in a window of 320 px", async () => {
   const size = { url: app.url, width: 320, height: 640 };
   const visitor = await openPage(size);

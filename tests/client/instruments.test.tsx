@@ -1,8 +1,13 @@
-import { cleanup, render, screen, within } from "@testing-library/react";
+import { QueryClientProvider } from "@tanstack/react-query";
+import { cleanup, fireEvent, render, screen, waitFor, within } from "@testing-library/react";
+import { Suspense } from "react";
+import { createMemoryRouter, RouterProvider } from "react-router-dom";
 import { afterEach, describe, expect, test } from "vitest";
 import type { Card } from "#shared/api/instruments.ts";
 import type { CardSettings } from "#shared/science/cards.ts";
-import { noiseParts } from "#shared/science/noise.ts";
+import { brightestUsable, noiseParts } from "#shared/science/noise.ts";
+import { sessionOptions } from "#src/api/session.ts";
+import { createQueryClient } from "#src/app/query-client.ts";
 import { campaignSchema, draftOfCampaign } from "#src/features/instruments/campaign-draft.ts";
 import {
   draftOf,
@@ -12,11 +17,22 @@ import {
   usableSettings,
   withModel,
 } from "#src/features/instruments/card-draft.ts";
+import { CardEditor } from "#src/features/instruments/card-editor.tsx";
 import { NoiseLede } from "#src/features/instruments/noise-lede.tsx";
 import { NoiseNumbers } from "#src/features/instruments/noise-numbers.tsx";
 import { NoisePlot } from "#src/features/instruments/noise-plot.tsx";
-import { axesOf, curve, noiseTicks, spread, usableAt } from "#src/features/instruments/noise-series.ts";
+import {
+  axesOf,
+  curve,
+  largestPart,
+  noiseTicks,
+  PARTS,
+  spread,
+  usableAt,
+} from "#src/features/instruments/noise-series.ts";
 import { PrecisionTable } from "#src/features/instruments/precision-table.tsx";
+import { SaturationNote } from "#src/features/instruments/saturation-note.tsx";
+import { answerWith, PERSON, sessionOf } from "./people/support.tsx";
 
 afterEach(cleanup);
 
@@ -33,6 +49,33 @@ const formula: CardSettings = {
 
 const detector = usableSettings({ ...emptyDraft(), name: "Heron" });
 if (detector?.model !== "detector") throw new Error("The first figures of a new card cannot be used.");
+
+/** A detector that says everything a card can say. */
+const everything: Required<Extract<Card["settings"], { model: "detector" }>> = {
+  ...detector,
+  photonBand: "R",
+  passband: "rp_mag",
+  magnitudeSystem: "ab",
+  gain: 1.5,
+  digitisation: 0.289,
+  mostCounts: 65_535,
+  scintillationLaw: "osborn",
+  scintillationCoefficient: 1.35,
+  comparisonStars: 4,
+  jitterPpm: 120,
+  redNoisePpm: 80,
+};
+const cardOf = (settings: Card["settings"]): Card => ({
+  id: "1",
+  versionId: "2",
+  number: 3,
+  name: "Heron",
+  source: "a report",
+  isVerified: true,
+  settings,
+  savedBy: { id: "1", name: "Someone" },
+  savedAt: "2027-01-01T00:00:00.000Z",
+});
 
 const messagesOf = (draft: ReturnType<typeof emptyDraft>): Record<string, string> => {
   const parsed = draftSchema.safeParse(draft);
@@ -66,6 +109,33 @@ describe("a card as it is typed", () => {
       name: "Practice",
       source: "a report",
       settings: formula,
+    });
+  });
+
+  test("keeps all that a detector can say, and says nothing that it did not", () => {
+    expect(draftSchema.parse(draftOf(cardOf(everything))).settings).toEqual(everything);
+    expect(draftSchema.parse(draftOf(cardOf(detector as Card["settings"]))).settings).toEqual(detector);
+    const stated = { ...detector, magnitudeSystem: "vega", scintillationLaw: "young" } as Card["settings"];
+    expect(draftSchema.parse(draftOf(cardOf(stated))).settings).toEqual(stated);
+    expect(Object.keys(detector).filter((key) => /gain|counts|digit|law|ppm/i.test(key))).toEqual([
+      "floorPpm",
+    ]);
+  });
+
+  test("what is cleared is no longer said; what is typed wrongly is refused beside it", () => {
+    const draft = draftOf(cardOf(everything));
+    const cleared = draftSchema.parse({ ...draft, figures: { ...draft.figures, gain: " ", jitterPpm: "" } });
+    const { gain: _, jitterPpm: __, ...rest } = everything;
+    expect(cleared.settings).toEqual(rest);
+    expect(
+      messagesOf({
+        ...draft,
+        figures: { ...draft.figures, gain: "0", redNoisePpm: "-5", mostCounts: "many" },
+      }),
+    ).toEqual({
+      "figures.gain": "The gain is above zero.",
+      "figures.redNoisePpm": "Noise is zero or more.",
+      "figures.mostCounts": "“many” is not a number. Enter most counts in figures.",
     });
   });
 
@@ -129,7 +199,87 @@ describe("a card as it is typed", () => {
   });
 });
 
+describe("an opened card", () => {
+  const open = async () => {
+    const sent = answerWith(({ method, body }) =>
+      method === "PUT"
+        ? { status: 200, body: { card: { ...cardOf(everything), ...(body as object), number: 4 } } }
+        : { status: 200, body: { cards: [], campaigns: [] } },
+    );
+    const client = createQueryClient();
+    client.setQueryData(
+      sessionOptions.queryKey,
+      sessionOf({
+        person: PERSON,
+        programmes: [{ id: "9", name: "Sky", roles: ["instrument-team"], isInvented: false }],
+      }),
+    );
+    const router = createMemoryRouter(
+      [
+        {
+          path: "/programmes/:programmeId/instruments",
+          element: (
+            <Suspense>
+              <CardEditor programmeId="9" card={cardOf(everything)} choice={null} onSaved={() => undefined} />
+            </Suspense>
+          ),
+        },
+      ],
+      { initialEntries: ["/programmes/9/instruments"] },
+    );
+    render(
+      <QueryClientProvider client={client}>
+        <RouterProvider router={router} />
+      </QueryClientProvider>,
+    );
+    await screen.findByRole("form", { name: "Figures of the card" });
+    return sent;
+  };
+
+  test("is saved with every figure it came with and the one that was changed", async () => {
+    const sent = await open();
+    expect(screen.getByLabelText<HTMLSelectElement>("Scintillation").value).toBe("osborn");
+    fireEvent.change(screen.getByLabelText("Red noise"), { target: { value: "95" } });
+    fireEvent.click(screen.getByRole("button", { name: "Save version 4" }));
+    await waitFor(() => expect(sent.some(({ method }) => method === "PUT")).toBe(true));
+    expect(sent.find(({ method }) => method === "PUT")?.body).toEqual({
+      name: "Heron",
+      source: "a report",
+      number: 3,
+      settings: { ...everything, redNoisePpm: 95 },
+    });
+  });
+});
+
+describe("a word of caution", () => {
+  test("stands near saturation, names what fills first, and leaves the last word to the observatory", () => {
+    const brightest = brightestUsable(everything);
+    const { rerender } = render(<SaturationNote card={everything} magnitude={brightest + 0.5} />);
+    const note = screen.getByRole("note").textContent ?? "";
+    expect(note).toContain("Near saturation.");
+    // 65 535 counts of 1.5 electrons are fewer than the 100 000 that the pixel holds.
+    expect(note).toContain("the converter reaches its largest number");
+    expect(note).toContain("The observatory's own rules on bright stars go first.");
+    rerender(<SaturationNote card={{ ...everything, gain: 2 }} magnitude={2} />);
+    expect(screen.getByRole("note").textContent).toMatch(/Saturated.*the central pixel is full/);
+    rerender(<SaturationNote card={everything} magnitude={brightest + 1.5} />);
+    expect(screen.queryByRole("note")).toBeNull();
+  });
+});
+
 describe("the picture of the noise", () => {
+  test("has a line for every part, and none for a part that is zero", () => {
+    const keys = Object.keys(noiseParts(everything, 12)).toSorted();
+    expect(PARTS.map(({ key }) => key).toSorted()).toEqual(keys as (typeof PARTS)[number]["key"][]);
+    const { rerender } = render(<NoisePlot card={{ ...everything, jitterPpm: 900 }} magnitude={12} />);
+    for (const label of ["jitter", "red noise", "scintillation"])
+      expect(screen.getByText(label)).toBeDefined();
+    rerender(<NoisePlot card={detector} magnitude={12} />);
+    expect(screen.queryByText("jitter")).toBeNull();
+    expect(screen.queryByText("red noise")).toBeNull();
+    expect(largestPart(noiseParts({ ...everything, jitterPpm: 1e5 }, 12))).toBe("pointing jitter is");
+  });
+
   test("a saturated, a faint and a measured magnitude are told apart", () => {
     expect([6.9, 7, 14.5, 14.6].map((m) => usableAt(formula, m))).toEqual([
       "saturated",

@@ -134,11 +134,19 @@ describe("the address", () => {
     expect(now().view).toEqual({ ...EMPTY_VIEW, sort: { key: "teff", direction: "asc" } });
     const cuts = [{ label: "Near", expression: "distance < 30", blanks: "drop" as const }];
     await act(async () => now().ask({ card: "5", cuts }));
-    await act(async () => now().show({ star: "77", columns: ["teff", "radius"], isSexagesimal: true }));
+    await act(async () =>
+      now().show({
+        star: "77",
+        workings: ["r_min", "radius"],
+        columns: ["teff", "radius"],
+        isSexagesimal: true,
+      }),
+    );
     const again = openAt(router.state.location.search).now();
     expect(again.view).toEqual({ ...EMPTY_VIEW, card: "5", cuts, sort: { key: "teff", direction: "asc" } });
     expect(again.screen).toEqual({
       star: "77",
+      workings: ["r_min", "radius"],
       columns: ["teff", "radius"],
       find: "",
       isSexagesimal: true,

@@ -39,6 +39,19 @@ const DETECTOR: CardSettings = {
   faintLimit: 14.5,
 };
 
+const EVERYTHING: CardSettings = {
+  ...DETECTOR,
+  magnitudeSystem: "ab",
+  gain: 1.5,
+  digitisation: 0.289,
+  mostCounts: 65_535,
+  scintillationLaw: "osborn",
+  scintillationCoefficient: 1.35,
+  comparisonStars: 4,
+  jitterPpm: 120,
+  redNoisePpm: 80,
+};
+
 const cardsUrl = (of = programme) => `/api/programmes/${of.id}/instruments`;
 const campaignsUrl = (of = programme) => `/api/programmes/${of.id}/campaigns`;
 const cardBody = (more: object = {}) => ({
@@ -66,15 +79,16 @@ test("the settings of the interface are those of the science, to the last field"
 });
 
 describe("an instrument card", () => {
-  test.each([["formula", PRACTICE_30] as const, ["detector", DETECTOR] as const])(
-    "of the model %s comes back as it was saved",
-    async (_, settings) => {
-      const made = card.parse(await make({ settings }));
-      expect(made).toMatchObject({ id: made.versionId, number: 1, settings, isVerified: true });
-      const { body } = await agent.get(`${cardsUrl()}/versions/${made.versionId}`).expect(200);
-      expect(body.card).toEqual(made);
-    },
-  );
+  test.each([
+    ["formula", PRACTICE_30] as const,
+    ["detector", DETECTOR] as const,
+    ["detector, with all that it may say besides,", EVERYTHING] as const,
+  ])("of the model %s comes back as it was saved", async (_, settings) => {
+    const made = card.parse(await make({ settings }));
+    expect(made).toMatchObject({ id: made.versionId, number: 1, settings, isVerified: true });
+    const { body } = await agent.get(`${cardsUrl()}/versions/${made.versionId}`).expect(200);
+    expect(body.card).toEqual(made);
+  });
 
   test("without a source is unverified", async () => {
     expect(await make({ source: "   " })).toMatchObject({ source: "", isVerified: false });

@@ -44,6 +44,11 @@ export const SCREENS: readonly (Omit<ScreenAt, "path"> & { path: (f: Furnished) 
     path: inProgramme((f) => `catalogue?${f.view}&cut=drop~cool~teff+%3C+3900&star=${f.star}`),
     ready: "article h2",
   },
+  {
+    name: "workings",
+    path: inProgramme((f) => `catalogue?${f.view}&star=${f.star}&workings=r_min,radius`),
+    ready: "article h2",
+  },
   { name: "instruments", path: inProgramme("instruments"), ready: "h1" },
   { name: "merit", path: inProgramme("merit"), ready: "h1" },
   { name: "lists", path: inProgramme("lists"), ready: "h1" },

@@ -1,9 +1,8 @@
-import { unprocessable } from "../../errors.ts";
 import { CsvSplitter } from "../csv-splitter.ts";
 import type { DecimalMark, Delimiter } from "../dialect.ts";
-import { notATable } from "../encoding.ts";
 import { cutOff } from "../read-records.ts";
 import type { RowBatch, TableReader } from "../table.ts";
+import { checkText } from "../text/check-text.ts";
 import { textColumns, textMeta } from "../text/columns.ts";
 import type { TextEncoding } from "../text/encoding.ts";
 import { textFindings } from "../text/findings.ts";
@@ -36,23 +35,6 @@ const VARIANTS: Readonly<Record<Delimiter, string>> = {
   "|": "bars",
 };
 
-/** Refuses what is no text, or holds nothing. */
-export const checkText = (source: TextSource): void => {
-  if (source.head.length === 0 || (source.isWhole && source.headText().trim() === ""))
-    throw unprocessable("empty-file", "The file is empty, so it has no line of names.", {
-      hint: "Get the file again.",
-    });
-  const instead = notATable(source.head, source.encoding === "utf-16be" ? "utf-16le" : source.encoding);
-  if (instead !== null)
-    throw unprocessable("not-a-table", `This is ${instead}, not a table as text.`, {
-      hint: "Export the table as CSV or ECSV and read that.",
-    });
-  if (source.headText() === "")
-    throw unprocessable("line-too-long", "The first line does not end where the names of a table would.", {
-      hint: "Export the table again with one row on a line, and bring the file as a new extract.",
-    });
-};
-
 async function* batchesOf(source: TextSource, layout: Layout, rows: DelimitedRows): AsyncGenerator<RowBatch> {
   const splitter = new CsvSplitter(layout.delimiter);
   let [skip, bytes] = [layout.preamble.lines, 0];
@@ -69,9 +51,9 @@ async function* batchesOf(source: TextSource, layout: Layout, rows: DelimitedRow
   }
   const { record, isQuoteOpen } = splitter.end();
   if (record) {
-    if (isQuoteOpen || rows.isShort(record))
-      throw cutOff(rows.lineOf(record), record.cells.length, layout.found.names.length);
     const batch = rows.batch([record], bytes);
+    if (isQuoteOpen || rows.isCut(record, batch))
+      throw cutOff(rows.lineOf(record), record.cells.length, layout.found.names.length);
     rows.endsOpen = batch.rows + batch.refused.length > 0;
     yield batch;
   }
@@ -90,7 +72,7 @@ export const openDelimited = async (
   checkText(source);
   const layout = judgeLayout(source.headText(), { ...choice, name });
   const { columns, renamed } = textColumns(layout.found, layout.preamble.comments);
-  const rows = new DelimitedRows(layout, layout.preamble.lines);
+  const rows = new DelimitedRows(layout);
   return {
     header: {
       format: "delimited",

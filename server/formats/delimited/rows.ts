@@ -1,35 +1,31 @@
 import { LIMITS } from "#shared/limits.ts";
 import type { CsvRecord } from "../csv-splitter.ts";
 import type { RefusedRow, RowBatch } from "../table.ts";
-import { declaredIn, isRule, uncommented } from "../text/preamble.ts";
+import { OutsideLines } from "../text/outside-lines.ts";
+import { isRule } from "../text/preamble.ts";
 import { insideFrame, type Layout } from "./layout.ts";
 
 const isBlank = (cells: readonly string[]): boolean => cells.every((cell) => cell.trim() === "");
-
-/** As a database's own client counts what it printed. */
-const COUNTED = /^\((\d{1,12}) rows?\)$/;
 
 /** Sorts the records of a text into rows and refused ones; blank lines, comments and ruled lines are neither. */
 export class DelimitedRows {
   /** Rows and refused rows. */
   seen = 0;
-  comments = 0;
+  /** All rows have been read. */
   isDone = false;
+  /** The last line has no end. */
   endsOpen = false;
-  readonly commentExamples: string[] = [];
-  declaredRows: number | null;
+  readonly outside: OutsideLines;
+  /** Lines of names, units and rules still to come. */
   private left: number;
   /** In the batch that is being made. */
   private blankLines = 0;
   private readonly width: number;
 
-  constructor(
-    private readonly layout: Layout,
-    private readonly linesBefore: number,
-  ) {
+  constructor(private readonly layout: Layout) {
     this.width = layout.found.names.length;
     this.left = layout.found.skip;
-    this.declaredRows = layout.preamble.declaredRows;
+    this.outside = new OutsideLines(layout.preamble);
   }
 
   batch(records: readonly CsvRecord[], bytes: number): RowBatch {
@@ -43,7 +39,7 @@ export class DelimitedRows {
       this.seen++;
       const why = this.trouble(cells, record.text);
       if (why !== null) {
-        refused.push({ row: this.seen, line: this.linesBefore + record.line, text: record.text, why });
+        refused.push({ row: this.seen, line: this.lineOf(record), text: record.text, why });
         continue;
       }
       kept.push(record);
@@ -56,54 +52,37 @@ export class DelimitedRows {
     return { rows: kept.length, columns, refused, bytes, blankLines: this.blankLines, lineOf };
   }
 
-  /** Whether the record would be a row, and has too few values for one. */
-  isShort({ cells, text }: CsvRecord): boolean {
-    if (this.isOutside(text) || isBlank(cells)) return false;
-    if (this.layout.isFramed && !text.trimEnd().endsWith("|")) return true;
-    return (this.layout.isFramed ? cells.length - 2 : cells.length) < this.width;
+  /** Whether a last record without an end lacks a part of its row. */
+  isCut({ cells, text }: CsvRecord, batch: RowBatch): boolean {
+    if (batch.refused.length === 0) return false;
+    return this.layout.isFramed ? !isInFrame(text) : cells.length < this.width;
   }
 
-  /** Line of the file of a record. */
+  /** Line of the file on which a record begins. */
   lineOf(record: CsvRecord): number {
-    return this.linesBefore + record.line;
+    return this.layout.preamble.lines + record.line;
   }
 
   /** Cells of a row; null where the record is none. */
   private cellsOf({ cells, text }: CsvRecord): readonly string[] | null {
-    if (cells.length !== this.width || this.layout.preamble.mark !== null) {
-      if (this.isOutside(text)) return null;
-    }
+    const isFramed = this.layout.isFramed && isInFrame(text);
+    const isWide = !this.layout.isFramed && cells.length === this.width;
+    if ((!isWide || this.outside.hasMark) && this.outside.take(text, isWide)) return null;
     if (isBlank(cells)) {
       this.blankLines++;
       return null;
     }
+    if (this.seen === 0 && isRule(text)) return null;
     if (this.left > 0) {
       this.left--;
       return null;
     }
-    return this.layout.isFramed && text.trimEnd().endsWith("|") ? insideFrame(cells) : cells;
-  }
-
-  /** A comment, a ruled line or a count of the rows. */
-  private isOutside(text: string): boolean {
-    const { mark } = this.layout.preamble;
-    const own = mark !== null && text.startsWith(mark) ? mark : text.startsWith("#") ? "#" : null;
-    if (own !== null && (own === mark || text.split(this.layout.delimiter).length !== this.width)) {
-      this.noteComment(text, own);
-      return true;
-    }
-    const counted = COUNTED.exec(text.trim());
-    if (counted) this.declaredRows ??= Number(counted[1]);
-    return counted !== null || isRule(text);
-  }
-
-  private noteComment(text: string, mark: string): void {
-    this.declaredRows ??= declaredIn(uncommented(text, mark));
-    this.comments++;
-    if (this.commentExamples.length < 5) this.commentExamples.push(text.slice(0, 80));
+    return isFramed ? insideFrame(cells) : cells;
   }
 
   private trouble(cells: readonly string[], text: string): string | null {
+    if (this.layout.isFramed && !isInFrame(text))
+      return "This row does not stand between bars as the others do.";
     if (cells.length !== this.width)
       return `This row has ${cells.length} values; the table has ${this.width} columns. Nothing was guessed about where the others belong.`;
     if (text.length <= LIMITS.cellCharacters) return null;
@@ -112,3 +91,8 @@ export class DelimitedRows {
     return `A value of this row has ${longest.toLocaleString("en")} characters; ${LIMITS.cellCharacters.toLocaleString("en")} are the most that are read.`;
   }
 }
+
+const isInFrame = (text: string): boolean => {
+  const own = text.trim();
+  return own.length > 1 && own.startsWith("|") && own.endsWith("|");
+};

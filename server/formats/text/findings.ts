@@ -1,6 +1,7 @@
 import type { TableFinding } from "../table.ts";
 import { Findings } from "../votable/findings.ts";
 import type { NamesFound } from "./names.ts";
+import type { OutsideLines } from "./outside-lines.ts";
 import type { TextSource } from "./text-source.ts";
 import {
   COMMENT_LINES,
@@ -19,9 +20,7 @@ import {
 /** What the rows of a text showed besides their values. */
 export interface RowsRead {
   readonly seen: number;
-  readonly declaredRows: number | null;
-  readonly comments: number;
-  readonly commentExamples: readonly string[];
+  readonly outside: OutsideLines;
   /** All rows have been read. */
   readonly isDone: boolean;
   /** The last line has no end. */
@@ -43,6 +42,12 @@ const addNames = ({ found, renamed }: Read, findings: Findings): void => {
   if (found.units !== null) findings.add(UNITS_LINE, found.units.join(" ").trim());
 };
 
+/** Adds what was found elsewhere, its count and examples with it. */
+export const addAgain = ({ count, examples, ...words }: TableFinding, findings: Findings): void => {
+  findings.add(words, examples[0], count);
+  for (const example of examples.slice(1)) findings.add(words, example, 0);
+};
+
 /** Adds what differs between the rows that a file declares and those that it has. */
 export const addRowCount = (declared: number | null, seen: number, findings: Findings): void => {
   if (declared === null || declared === seen) return;
@@ -53,9 +58,7 @@ export const addRowCount = (declared: number | null, seen: number, findings: Fin
 /** Adds what the bytes of a text left open. */
 export const addEncoding = ({ judged, strays, strayExamples }: TextSource, findings: Findings): void => {
   if (judged.isGuess) findings.add(ENCODING_GUESSED);
-  strayExamples.forEach((example, at) => {
-    findings.add(STRAY_BYTES, example, at === 0 ? strays - strayExamples.length + 1 : 1);
-  });
+  if (strays > 0) addAgain({ ...STRAY_BYTES, count: strays, examples: strayExamples }, findings);
 };
 
 /** Everything that the reading of a text found. */
@@ -65,11 +68,9 @@ export const textFindings = (read: Read): readonly TableFinding[] => {
   addNames(read, findings);
   addEncoding(source, findings);
   if (rival !== null) findings.add(TWO_READINGS, rival === "\t" ? "tab" : rival);
-  if (rows.comments > 0) {
-    findings.add(COMMENT_LINES, rows.commentExamples[0], rows.comments);
-    for (const example of rows.commentExamples.slice(1)) findings.add(COMMENT_LINES, example, 0);
-  }
+  const { comments: count, examples } = rows.outside;
+  if (count > 0) addAgain({ ...COMMENT_LINES, count, examples }, findings);
   if (rows.endsOpen) findings.add(OPEN_END);
-  if (rows.isDone) addRowCount(rows.declaredRows, rows.seen, findings);
+  if (rows.isDone) addRowCount(rows.outside.declaredRows, rows.seen, findings);
   return findings.list();
 };

@@ -37,7 +37,7 @@ class Evidence {
   private readonly isNumeric: readonly boolean[];
 
   constructor(
-    body: readonly (readonly string[])[],
+    private readonly body: readonly (readonly string[])[],
     width: number,
     private readonly decimalMark: DecimalMark,
   ) {
@@ -58,16 +58,27 @@ class Evidence {
     return filled.some((cell, at) => this.isNumeric[at] && cell !== "" && !isBlankWord(cell));
   }
 
-  /** Numbers as below, at half of the places or more, and nowhere a word above numbers. */
+  /** Numbers as below, at half of the places or more, and nowhere a word above numbers; or a name as those below. */
   isValues(cells: readonly string[]): boolean {
     const filled = cells.map((cell) => cell.trim());
+    if (filled.some((cell, at) => this.isNumeric[at] && !isBlankWord(cell) && !this.isNumber(cell)))
+      return false;
+    if (this.isAsBelow(filled[0] ?? "")) return true;
     const numbers = filled.filter((cell) => this.isNumber(cell)).length;
-    const isWordAbove = filled.some(
-      (cell, at) => this.isNumeric[at] && !isBlankWord(cell) && !this.isNumber(cell),
-    );
-    return numbers > 0 && numbers >= filled.filter((cell) => !isBlankWord(cell)).length / 2 && !isWordAbove;
+    return numbers > 0 && numbers >= filled.filter((cell) => !isBlankWord(cell)).length / 2;
+  }
+
+  /** `LH-0031` above other designations of that shape is one itself. */
+  private isAsBelow(cell: string): boolean {
+    const own = shapeOf(cell);
+    if (!/A.*9/.test(own)) return false;
+    const same = this.body.filter((row) => shapeOf((row[0] ?? "").trim()) === own).length;
+    return same > 0 && same >= this.body.length * NUMBER_SHARE;
   }
 }
+
+/** Letters and digits as one sign each, however many there are. */
+const shapeOf = (cell: string): string => cell.replace(/\p{L}+/gu, "A").replace(/\d+/g, "9");
 
 const isName = (cell: string): boolean => /^\S{1,80}$/.test(cell.trim()) && /[\p{L}_]/u.test(cell);
 

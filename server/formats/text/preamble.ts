@@ -25,11 +25,11 @@ export const commentMark = (line: string): string | null => {
 export const uncommented = (line: string, mark: string): string => {
   let at = line.indexOf(mark);
   while (line[at] === mark) at++;
-  return line.slice(at).replace(/^ /, "");
+  return line.slice(at, at + LONGEST_COMMENT).replace(/^ /, "");
 };
 
 /** A line drawn below names or around a table: dashes, equals signs and the crossings of a frame. */
-export const isRule = (line: string): boolean => /^[\s|+:]*(?:[-=]{2,}|\|\s*[-=]+)[-=\s|+:]*$/.test(line);
+export const isRule = (line: string): boolean => /^[-=\s|+:]+$/.test(line) && /-{3}|==|\|\s*[-=]/.test(line);
 
 const ROWS =
   /(?:^|[^\w])(?:n(?:umber)?[ _]?(?:of[ _])?rows?|rows?(?:[ _]?(?:retrieved|returned|count|total|number))?|row[ _]?count|nrows)\s*[:=]\s*(\d{1,12}|\d{1,3}(?:,\d{3})+)\b/i;
@@ -40,7 +40,10 @@ export const declaredIn = (comment: string): number | null => {
   return found ? Number((found[1] ?? "").replaceAll(",", "")) : null;
 };
 
-const TITLE = /^\s*title\s*[:=]\s*(\S.*?)\s*$/i;
+const TITLE = /^\s*title\s*[:=]\s*(\S.*)$/i;
+
+/** As much of a comment as is looked at. */
+const LONGEST_COMMENT = 1000;
 
 const firstOf = <T>(comments: readonly string[], find: (comment: string) => T | null): T | null => {
   for (const comment of comments) {
@@ -68,6 +71,6 @@ export const readPreamble = (lines: readonly string[]): Preamble => {
     mark,
     lines: at,
     declaredRows: firstOf(comments, declaredIn),
-    title: firstOf(comments, (comment) => TITLE.exec(comment)?.[1] ?? null),
+    title: firstOf(comments, (comment) => TITLE.exec(comment)?.[1]?.trim() ?? null),
   };
 };

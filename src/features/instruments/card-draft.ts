@@ -1,9 +1,9 @@
 import { z } from "zod";
 import { type Card, cardBody, cardSettings } from "#shared/api/instruments.ts";
 import type { CardSettings } from "#shared/science/cards.ts";
-import { fieldsOf, type Model } from "./card-fields.ts";
+import { choicesOf, fieldsOf, type Model, type NumberField } from "./card-fields.ts";
 
-/** A card as it is being typed: every figure is still text. */
+/** A card as it is being typed: every figure is still text, and so is every choice; blank where the card says nothing. */
 export interface CardDraft {
   name: string;
   source: string;
@@ -62,6 +62,15 @@ export const withModel = (draft: CardDraft, model: Model): CardDraft => ({
   figures: { ...FIRST_FIGURES[model], ...draft.figures },
 });
 
+/** What a card may leave unsaid, as blanks. */
+const unsaid = (model: Model): Readonly<Record<string, string>> =>
+  Object.fromEntries(
+    [...fieldsOf(model).filter(({ blank }) => blank === "absent"), ...choicesOf(model)].map(({ key }) => [
+      key,
+      "",
+    ]),
+  );
+
 export const draftOf = ({ name, source, settings }: Card): CardDraft => {
   const { model, passband, ...rest } = settings;
   const { photonBand, ...figures } = { photonBand: "R", ...rest };
@@ -71,9 +80,12 @@ export const draftOf = ({ name, source, settings }: Card): CardDraft => {
     model,
     passband,
     photonBand,
-    figures: Object.fromEntries(
-      Object.entries(figures).map(([key, value]) => [key, value === null ? "" : String(value)]),
-    ),
+    figures: {
+      ...unsaid(model),
+      ...Object.fromEntries(
+        Object.entries(figures).map(([key, value]) => [key, value === null ? "" : String(value)]),
+      ),
+    },
   };
 };
 
@@ -92,16 +104,25 @@ const whyNot = (label: string, text: string): string => {
 
 type Settings = z.infer<typeof cardSettings>;
 
+const textOf = (draft: CardDraft, key: string): string => (draft.figures[key] ?? "").trim();
+
+/** Whether a figure is left blank where it may be. */
+const isLeftBlank = (draft: CardDraft, { key, blank }: NumberField): boolean =>
+  blank !== undefined && textOf(draft, key) === "";
+
 const settingsOf = (draft: CardDraft): Record<string, unknown> => {
-  const figures = fieldsOf(draft.model).map(({ key, mayBeBlank }) => {
-    const text = draft.figures[key] ?? "";
-    return [key, mayBeBlank && text.trim() === "" ? null : readFigure(text)] as const;
+  const figures = fieldsOf(draft.model).flatMap((field): [string, number | null][] => {
+    if (!isLeftBlank(draft, field)) return [[field.key, readFigure(textOf(draft, field.key))]];
+    return field.blank === "null" ? [[field.key, null]] : [];
   });
+  const choices = choicesOf(draft.model).flatMap(({ key }): [string, string][] =>
+    textOf(draft, key) === "" ? [] : [[key, textOf(draft, key)]],
+  );
   return {
     model: draft.model,
     passband: draft.passband,
     ...(draft.model === "detector" ? { photonBand: draft.photonBand } : {}),
-    ...Object.fromEntries(figures),
+    ...Object.fromEntries<unknown>([...figures, ...choices]),
   };
 };
 
@@ -126,10 +147,9 @@ export const draftSchema = z
     const fields = fieldsOf(draft.model);
     const refuse = (path: string[], message: string) =>
       context.addIssue({ code: "custom", path, message, input: draft });
-    const unread = fields.filter(({ key, mayBeBlank }) => {
-      const text = draft.figures[key] ?? "";
-      return !(mayBeBlank && text.trim() === "") && !Number.isFinite(readFigure(text));
-    });
+    const unread = fields.filter(
+      (field) => !isLeftBlank(draft, field) && !Number.isFinite(readFigure(textOf(draft, field.key))),
+    );
     for (const { key, label } of unread) refuse(["figures", key], whyNot(label, draft.figures[key] ?? ""));
     const body = { name: draft.name, source: draft.source, settings: settingsOf(draft) };
     const parsed = cardBody.safeParse(body);

@@ -23,6 +23,7 @@ import { NoiseLede } from "./noise-lede.tsx";
 import { NoiseNumbers } from "./noise-numbers.tsx";
 import { NoisePlot } from "./noise-plot.tsx";
 import { PrecisionTable } from "./precision-table.tsx";
+import { SaturationNote } from "./saturation-note.tsx";
 
 interface Props {
   programmeId: string;
@@ -103,6 +104,7 @@ const Meaning = ({
         {settings.model === "detector" ? `, airmass ${settings.airmass}` : ""}; hatched: saturated or too
         faint
       </p>
+      <SaturationNote card={settings} magnitude={magnitude} />
       <div className="rounded border border-rule bg-sheet p-3">
         <NoisePlot card={settings} magnitude={magnitude} />
       </div>

@@ -9,21 +9,35 @@ export interface NumberField {
   readonly label: string;
   readonly unit: string;
   readonly hint?: string;
-  /** Blank means that it does not apply. */
-  readonly mayBeBlank?: true;
+  /** Blank may mean that it does not apply (`null`) or that the card does not say it (`absent`). */
+  readonly blank?: "null" | "absent";
+}
+
+/** A word out of a few; the blank one leaves it to what is usual. */
+export interface ChoiceField {
+  readonly key: string;
+  readonly label: string;
+  readonly hint?: string;
+  readonly choices: readonly { value: string; label: string }[];
 }
 
 interface Group {
   readonly title: string;
-  readonly fields: readonly NumberField[];
+  readonly fields: readonly (NumberField | ChoiceField)[];
 }
+
+export const isChoice = (field: NumberField | ChoiceField): field is ChoiceField => "choices" in field;
 
 const field = (
   key: string,
   label: string,
   unit = "",
-  more: Pick<NumberField, "hint" | "mayBeBlank"> = {},
+  more: Pick<NumberField, "hint" | "blank"> = {},
 ): NumberField => ({ key, label, unit, ...more });
+
+/** A figure that a card need not state; the hint says what holds then. */
+const optional = (key: string, label: string, unit: string, hint: string): NumberField =>
+  field(key, label, unit, { hint, blank: "absent" });
 
 const LIMITS_OF_USE: Group = {
   title: "Limits",
@@ -71,23 +85,91 @@ export const GROUPS: Readonly<Record<Model, readonly Group[]>> = {
       ],
     },
     {
+      title: "Converter",
+      fields: [
+        optional("gain", "Gain", "e⁻/ct", "Above 0 to 10 000; blank counts as 1."),
+        optional(
+          "mostCounts",
+          "Most counts",
+          "ct",
+          "The largest number it writes, 65 535 for 16 bit. With the gain a second limit beside the full well; blank: the full well alone.",
+        ),
+        optional("digitisation", "Digitisation", "ct", "0 to 1000; 0.289 is that of rounding. Blank: none."),
+      ],
+    },
+    {
       title: "Sky and site",
       fields: [
+        {
+          key: "magnitudeSystem",
+          label: "Magnitudes",
+          choices: [
+            { value: "", label: "not stated: Vega" },
+            { value: "vega", label: "Vega" },
+            { value: "ab", label: "AB" },
+          ],
+          hint: "System of the star's and of the sky's magnitudes.",
+        },
         field("skyBrightness", "Sky, dark time", "mag/″²"),
         field("extinction", "Extinction", "mag", { hint: "Per airmass; 0 in space." }),
         field("airmass", "Airmass", ""),
         field("siteAltitudeM", "Altitude", "m", {
-          mayBeBlank: true,
+          blank: "null",
           hint: "Blank in space, where nothing scintillates.",
         }),
-        field("floorPpm", "Floor, red noise", "ppm"),
+        {
+          key: "scintillationLaw",
+          label: "Scintillation",
+          choices: [
+            { value: "", label: "not stated: Young" },
+            { value: "young", label: "Young 1967" },
+            { value: "osborn", label: "Osborn 2015" },
+          ],
+          hint: "At the zenith Osborn's law gives about 1.6 times what Young's does.",
+        },
+        optional(
+          "scintillationCoefficient",
+          "Site coefficient",
+          "",
+          "Of Osborn's law alone, above 0 to 100; medians of sites lie between 1.30 and 1.67. Blank counts as 1.5.",
+        ),
+      ],
+    },
+    {
+      title: "Light curve",
+      fields: [
+        optional(
+          "comparisonStars",
+          "Comparison stars",
+          "",
+          "Equal to the target, 1 or more. They add their own photon noise and scintillation; blank: none is added.",
+        ),
+        optional(
+          "jitterPpm",
+          "Pointing jitter",
+          "ppm",
+          "In one exposure; averages down as photon noise does. Blank: none.",
+        ),
+        optional(
+          "redNoisePpm",
+          "Red noise",
+          "ppm",
+          "Shared by the points of one transit: averages down over transits, not within one. Blank: none.",
+        ),
+        field("floorPpm", "Floor", "ppm", { hint: "What is left however long one observes within an hour." }),
       ],
     },
     LIMITS_OF_USE,
   ],
 };
 
-export const fieldsOf = (model: Model): readonly NumberField[] => GROUPS[model].flatMap((g) => g.fields);
+const allOf = (model: Model) => GROUPS[model].flatMap(({ fields }) => fields);
+
+export const fieldsOf = (model: Model): readonly NumberField[] =>
+  allOf(model).flatMap((f) => (isChoice(f) ? [] : [f]));
+
+export const choicesOf = (model: Model): readonly ChoiceField[] =>
+  allOf(model).flatMap((f) => (isChoice(f) ? [f] : []));
 
 export const MODEL_LABELS: Readonly<Record<Model, string>> = {
   formula: "A noise curve in three terms",

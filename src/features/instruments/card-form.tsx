@@ -3,7 +3,9 @@ import { Select, TextArea, TextInput } from "#src/ui/inputs.tsx";
 import { SectionTitle } from "#src/ui/section-title.tsx";
 import { type CardDraft, withModel } from "./card-draft.ts";
 import {
+  type ChoiceField,
   GROUPS,
+  isChoice,
   MODEL_LABELS,
   type Model,
   type NumberField,
@@ -34,6 +36,28 @@ const Figure = ({ field, form, isReadOnly }: Props & { field: NumberField }) => 
       form.set((now) => ({ figures: { ...now.figures, [field.key]: value } }));
     }}
   />
+);
+
+const Choice = ({ field, form, isReadOnly }: Props & { field: ChoiceField }) => (
+  <Select
+    label={field.label}
+    name={`figures.${field.key}`}
+    isInline
+    hint={field.hint}
+    disabled={isReadOnly}
+    value={form.values.figures[field.key] ?? ""}
+    error={form.fields[`figures.${field.key}`]}
+    onChange={(event) => {
+      const { value } = event.target;
+      form.set((now) => ({ figures: { ...now.figures, [field.key]: value } }));
+    }}
+  >
+    {field.choices.map(({ value, label }) => (
+      <option key={value} value={value}>
+        {label}
+      </option>
+    ))}
+  </Select>
 );
 
 /** Passband: where the star's magnitude comes from, and for a telescope the band its photons are counted in. */
@@ -115,9 +139,13 @@ export const CardFields = ({ form, isReadOnly }: Props) => (
       <div key={title} className="-mt-3">
         <SectionTitle>{title}</SectionTitle>
         <div className="flex flex-col gap-2">
-          {fields.map((field) => (
-            <Figure key={field.key} field={field} form={form} isReadOnly={isReadOnly} />
-          ))}
+          {fields.map((field) =>
+            isChoice(field) ? (
+              <Choice key={field.key} field={field} form={form} isReadOnly={isReadOnly} />
+            ) : (
+              <Figure key={field.key} field={field} form={form} isReadOnly={isReadOnly} />
+            ),
+          )}
         </div>
       </div>
     ))}

@@ -20,6 +20,9 @@ export const PARTS: readonly Part[] = [
   { key: "background", label: "background", color: "var(--soft)", dash: "10 3 2 3", width: 1.6 },
   { key: "read", label: "read", color: "var(--faint)", dash: "1 3", width: 1.6 },
   { key: "dark", label: "dark", color: "var(--faint)", dash: "12 6", width: 1.2 },
+  { key: "digitisation", label: "digitisation", color: "var(--soft)", dash: "1 6", width: 1.6 },
+  { key: "jitter", label: "jitter", color: "var(--blue)", dash: "3 3", width: 1.6 },
+  { key: "red", label: "red noise", color: "var(--gold)", dash: "14 4 2 4", width: 1.6 },
   { key: "total", label: "total", color: "var(--mark)", dash: "", width: 2.6 },
 ];
 
@@ -105,6 +108,7 @@ export const largestPart = (parts: NoiseParts): string => {
     background: "the background is",
     read: "reading the detector is",
     dark: "dark current is",
+    jitter: "pointing jitter is",
   };
   return words[largest.key] ?? `${largest.label} is`;
 };

@@ -43,8 +43,10 @@ const byMagnitude = (card: CardSettings, magnitude: number): Row[] =>
 export const PrecisionTable = ({ card, magnitude }: { card: CardSettings; magnitude: number }) => {
   const isDetector = card.model === "detector";
   const rows = isDetector ? byAperture(card, magnitude) : byMagnitude(card, magnitude);
+  const compared =
+    isDetector && card.comparisonStars !== undefined ? ", that of the comparison stars included" : "";
   const what = isDetector
-    ? `Photon noise alone, ppm at magnitude ${fixed(magnitude, 1)}, this passband, exposed as this card does.`
+    ? `Photon noise alone, ppm at magnitude ${fixed(magnitude, 1)}, this passband, exposed as this card does${compared}.`
     : "Photon noise alone, ppm, by magnitude.";
   return (
     <section aria-labelledby="precision-title">

@@ -2,7 +2,7 @@ import { useQuery } from "@tanstack/react-query";
 import { useEffect, useRef } from "react";
 import type { StarSheet as Sheet } from "#shared/api/stars.ts";
 import { blankReason } from "#shared/catalogue/blank-reasons.ts";
-import { type Column, errorKey, findColumn } from "#shared/catalogue/columns.ts";
+import { type Column, errorKey } from "#shared/catalogue/columns.ts";
 import { flagsIn } from "#shared/catalogue/flags.ts";
 import type { ViewSpec } from "#shared/catalogue/view.ts";
 import { cellText, count, fixed } from "#shared/format/numbers.ts";
@@ -15,44 +15,41 @@ import { Pill } from "#src/ui/pill.tsx";
 import { SectionTitle } from "#src/ui/section-title.tsx";
 import { ReachPicture } from "./reach-picture.tsx";
 import { StarOrigins } from "./star-origins.tsx";
+import { toldColumns } from "./told.ts";
 import { TransitPicture } from "./transit-picture.tsx";
-
-/** What the sheet tells of a star, in order, in words that need no key. */
-const TOLD: readonly (readonly [key: string, words: string])[] = [
-  ["distance", "Distance"],
-  ["teff", "Effective temperature"],
-  ["radius", "Radius"],
-  ["mass", "Mass"],
-  ["luminosity", "Luminosity"],
-  ["hz_inner", "Habitable zone from"],
-  ["hz_outer", "Habitable zone to"],
-  ["earth_distance", "Earth's insolation at"],
-  ["earth_period", "Period there"],
-  ["transit_probability", "Transit probability there"],
-  ["transit_duration", "Transit duration there"],
-  ["earth_depth", "Depth of 1 R⊕, no limb darkening"],
-  ["noise_1h", "Noise in one hour"],
-  ["transits", "Transits in the campaign"],
-  ["r_min", "Smallest planet found there"],
-];
+import { WorkingsPanel } from "./workings/workings-panel.tsx";
 
 const unitOf = (column: Column): string => (column.unitLabel === "–" ? "" : ` ${column.unitLabel}`);
 
-const Quantity = ({ column, words, star }: { column: Column; words: string; star: Sheet }) => {
+interface QuantityProps {
+  column: Column;
+  words: string;
+  star: Sheet;
+  onOpen: (key: string) => void;
+}
+
+/** A value, or the word of its blank: it opens its workings. */
+const Quantity = ({ column, words, star, onOpen }: QuantityProps) => {
   const value = star.values[column.key];
   const reason = value === undefined ? blankReason(star.blanks[column.key] ?? 1) : null;
   if (reason && star.blanks[column.key] === undefined && column.stage === "instrument") return null;
   return (
     <>
-      <dt className="text-soft" title={column.description}>
+      <dt className="self-center text-soft" title={column.description}>
         {words}
       </dt>
       <dd className="text-right font-mono">
-        {value === undefined ? (
-          <span className="text-faint">{reason?.word}</span>
-        ) : (
-          `${cellText(column, value, star.values[errorKey(column.key)])}${unitOf(column)}`
-        )}
+        <button
+          type="button"
+          data-workings={column.key}
+          onClick={() => onOpen(column.key)}
+          className={`min-h-6 underline decoration-hair underline-offset-4 hover:decoration-ink ${reason ? "text-faint" : ""}`}
+        >
+          {value === undefined
+            ? reason?.word
+            : `${cellText(column, value, star.values[errorKey(column.key)])}${unitOf(column)}`}
+          <span className="sr-only">, workings of: {words}</span>
+        </button>
       </dd>
       {reason ? <dd className="col-span-2 -mt-0.5 mb-1 text-xs text-soft">{reason.sentence}</dd> : null}
     </>
@@ -104,9 +101,23 @@ const Dropped = ({ star, view }: { star: Sheet; view: ViewSpec }) =>
     </div>
   );
 
-const Told = ({ star, view, onClose }: { star: Sheet; view: ViewSpec; onClose: () => void }) => {
+interface ToldProps {
+  star: Sheet;
+  view: ViewSpec;
+  columns: readonly string[];
+  takeCameFrom: () => string | null;
+  onOpen: (key: string) => void;
+  onClose: () => void;
+}
+
+const Told = ({ star, view, columns, takeCameFrom, onOpen, onClose }: ToldProps) => {
+  const place = useRef<HTMLElement>(null);
+  useEffect(() => {
+    const key = takeCameFrom();
+    if (key !== null) place.current?.querySelector<HTMLElement>(`[data-workings="${key}"]`)?.focus();
+  }, [takeCameFrom]);
   return (
-    <article aria-label={`Star ${star.designation}`} className="p-5">
+    <article ref={place} aria-label={`Star ${star.designation}`} className="p-5">
       <div className="flex items-baseline justify-between gap-3">
         <h2 className="font-mono! text-[19px]">{star.designation}</h2>
         <span className="text-xs whitespace-nowrap text-soft">
@@ -124,11 +135,10 @@ const Told = ({ star, view, onClose }: { star: Sheet; view: ViewSpec; onClose: (
       <Flags star={star} />
       <Dropped star={star} view={view} />
       <Position star={star} />
-      <dl className="mt-3 grid grid-cols-[1fr_auto] gap-x-3 gap-y-1 text-[13px]">
-        {TOLD.flatMap(([key, words]) => {
-          const column = findColumn(key);
-          return column ? [<Quantity key={key} column={column} words={words} star={star} />] : [];
-        })}
+      <dl className="mt-3 grid grid-cols-[1fr_auto] gap-x-3 text-[13px]">
+        {toldColumns(columns).map(({ column, words }) => (
+          <Quantity key={column.key} column={column} words={words} star={star} onOpen={onOpen} />
+        ))}
       </dl>
       <SectionTitle>A transit as this instrument would see it</SectionTitle>
       <TransitPicture star={star} />
@@ -148,11 +158,20 @@ interface Props {
   programmeId: string;
   view: ViewSpec;
   starId: string;
+  /** Columns of the table: what is worked out of them is told too. */
+  columns: readonly string[];
+  /** The quantity whose workings are open, then the steps followed down; empty where none are. */
+  workings: readonly string[];
+  /** The quantity whose workings were just closed, once: the keyboard goes on from there. */
+  takeCameFrom: () => string | null;
+  onWorkings: (trail: readonly string[]) => void;
+  onCloseWorkings: () => void;
   onClose: () => void;
 }
 
 /** Everything on one star: what is known, how well, what the instrument would see, and where each value comes from. */
-export const StarSheet = ({ programmeId, view, starId, onClose }: Props) => {
+export const StarSheet = (props: Props) => {
+  const { programmeId, view, starId, workings, onClose } = props;
   const { data: star, error, isPending, refetch } = useQuery(sheetOptions(programmeId, view, starId));
   const place = useRef<HTMLDivElement>(null);
   // Where the sheet lies under the table, opening a star leads to it.
@@ -171,7 +190,26 @@ export const StarSheet = ({ programmeId, view, starId, onClose }: Props) => {
           </Button>
         </div>
       ) : null}
-      {star ? <Told star={star} view={view} onClose={onClose} /> : null}
+      {star && workings.length > 0 ? (
+        <WorkingsPanel
+          programmeId={programmeId}
+          view={view}
+          star={star}
+          trail={workings}
+          onTrail={props.onWorkings}
+          onClose={props.onCloseWorkings}
+        />
+      ) : null}
+      {star && workings.length === 0 ? (
+        <Told
+          star={star}
+          view={view}
+          columns={props.columns}
+          takeCameFrom={props.takeCameFrom}
+          onOpen={(key) => props.onWorkings([key])}
+          onClose={onClose}
+        />
+      ) : null}
     </div>
   );
 };

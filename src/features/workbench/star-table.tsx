@@ -19,6 +19,7 @@ import { NoStarPasses } from "./no-star-passes.tsx";
 import { PlainPages } from "./plain-pages.tsx";
 import { starColumns } from "./star-columns.tsx";
 import { TableFooter } from "./table-footer.tsx";
+import { hasWorkings } from "./told.ts";
 import { useRemembered } from "./use-remembered.ts";
 import type { Workbench } from "./use-workbench.ts";
 
@@ -33,6 +34,8 @@ interface Props {
   failure: Error | null;
   goTo: { row: number } | null;
   onGoTo: (row: number) => void;
+  /** The workings of a cell are asked for. */
+  onWorkings: (starId: string, key: string) => void;
 }
 
 /** px; the first is the usual one. */
@@ -61,6 +64,7 @@ export const StarTable = ({
   failure,
   goTo,
   onGoTo,
+  onWorkings,
 }: Props) => {
   const { view, screen, ask, show } = workbench;
   const can = useCan();
@@ -107,7 +111,17 @@ export const StarTable = ({
     announce(`Sorted by ${labelOf(key)}, ${direction === "desc" ? "highest" : "lowest"} first`);
     ask({ sort: { key, direction } });
   };
-  const openStar = (row: StarRow) => show({ star: row.id }, screen.star === null);
+  const openStar = (row: StarRow) => show({ star: row.id, workings: [] }, screen.star === null);
+  const openWorkings = (row: StarRow, key: string) => {
+    if (!hasWorkings(key)) {
+      announce(
+        `${labelOf(key)} has no workings: only what is worked out has. The star is open beside the table`,
+      );
+      openStar(row);
+      return;
+    }
+    onWorkings(row.id, key);
+  };
   const sortWords = `sorted by ${labelOf(view.sort.key)}, ${view.sort.direction === "desc" ? "highest" : "lowest"} first`;
   const label = `Stars, ${count(summary.count)} of ${count(summary.total)}, ${sortWords}`;
   return (
@@ -176,8 +190,9 @@ export const StarTable = ({
             onRange={tellRange}
             goTo={goTo}
             onGoToRow={() => setDialog("row")}
-            onLetter={(letter) => {
+            onLetter={(letter, cell) => {
               if (letter === "d") show({ isSexagesimal: !screen.isSexagesimal });
+              if (letter === "m" && cell.row) openWorkings(cell.row, cell.column);
             }}
             isBusy={blocks.isReading}
           />

@@ -24,6 +24,8 @@ const USUAL_COLUMNS = [
 export interface Screen {
   readonly columns: readonly string[];
   readonly star: string | null;
+  /** The quantity of that star whose workings are open, then the steps followed down from it. */
+  readonly workings: readonly string[];
   readonly find: string;
   readonly isSexagesimal: boolean;
 }
@@ -41,6 +43,17 @@ export interface Workbench {
   readonly show: (change: Partial<Screen>, isStep?: boolean) => void;
 }
 
+/** A key of the registry or of a step, as the address may name it. */
+const QUANTITY = /^[a-z0-9_]{1,40}$/;
+/** Deeper than any chain of steps; an address that goes on is not followed. */
+const DEEPEST = 30;
+
+const trailOf = (text: string | null): string[] =>
+  (text ?? "")
+    .split(",")
+    .filter((key) => QUANTITY.test(key))
+    .slice(0, DEEPEST);
+
 const known = new Set<string>(COLUMNS.map((c) => c.key));
 
 const screenOf = (params: URLSearchParams): Screen => {
@@ -48,6 +61,7 @@ const screenOf = (params: URLSearchParams): Screen => {
   return {
     columns: columns.length > 0 ? columns : USUAL_COLUMNS,
     star: params.get("star"),
+    workings: params.has("star") ? trailOf(params.get("workings")) : [],
     find: params.get("find") ?? "",
     isSexagesimal: params.get("positions") === "sexagesimal",
   };
@@ -57,6 +71,7 @@ const toParams = (view: ViewSpec, screen: Screen): URLSearchParams => {
   const params = viewToParams(view);
   if (screen.columns.join() !== USUAL_COLUMNS.join()) params.set("columns", screen.columns.join());
   if (screen.star) params.set("star", screen.star);
+  if (screen.star && screen.workings.length > 0) params.set("workings", screen.workings.join());
   if (screen.find) params.set("find", screen.find);
   if (screen.isSexagesimal) params.set("positions", "sexagesimal");
   return params;

@@ -1,5 +1,5 @@
 import { useQuery } from "@tanstack/react-query";
-import { useEffect, useState } from "react";
+import { useCallback, useEffect, useRef, useState } from "react";
 import { Link } from "react-router-dom";
 import { programmeOptions } from "#src/api/programmes.ts";
 import { summaryOptions } from "#src/api/stars.ts";
@@ -12,7 +12,7 @@ import { FindResult } from "./find-result.tsx";
 import { Ladder } from "./ladder.tsx";
 import { StarSheet } from "./star-sheet.tsx";
 import { StarTable } from "./star-table.tsx";
-import { useWorkbench } from "./use-workbench.ts";
+import { useWorkbench, type Workbench } from "./use-workbench.ts";
 
 const NoStars = ({ programmeId }: { programmeId: string }) => {
   const can = useCan();
@@ -37,7 +37,7 @@ const NoStars = ({ programmeId }: { programmeId: string }) => {
 /** Where the keyboard stands in the table: closing what lies beside it leads back there. */
 const focusTable = () => document.querySelector<HTMLElement>('[role="grid"] [tabindex="0"]')?.focus();
 
-/** Esc closes the star, unless it closes something nearer or ends what is being typed. */
+/** Esc closes what is open beside the table, unless it closes something nearer or ends what is being typed. */
 const useEscape = (isOpen: boolean, close: () => void): void => {
   useEffect(() => {
     if (!isOpen) return;
@@ -51,6 +51,40 @@ const useEscape = (isOpen: boolean, close: () => void): void => {
   }, [isOpen, close]);
 };
 
+/** Opens and closes workings; closing them leads back to the cell or to the line of the sheet they were opened from. */
+const useWorkingsTrail = ({ screen, show }: Workbench) => {
+  const isFromTable = useRef(false);
+  const cameFrom = useRef<string | null>(null);
+  const takeCameFrom = useCallback(() => {
+    const key = cameFrom.current;
+    cameFrom.current = null;
+    return key;
+  }, []);
+  return {
+    takeCameFrom,
+    openFromTable: (star: string, key: string) => {
+      isFromTable.current = true;
+      show({ star, workings: [key] }, true);
+    },
+    followWorkings: (trail: readonly string[]) => {
+      const isOpening = screen.workings.length === 0;
+      if (isOpening) isFromTable.current = false;
+      show({ workings: trail }, isOpening);
+    },
+    closeWorkings: () => {
+      cameFrom.current = isFromTable.current ? null : (screen.workings[0] ?? null);
+      show({ workings: [] });
+      if (isFromTable.current) focusTable();
+    },
+  };
+};
+
+/** Between 1024 and 1279 px there is no room for three columns: beside an open star the cuts fold up over the table. */
+const layoutOf = (hasStar: boolean): string =>
+  hasStar
+    ? "lg:grid-cols-[minmax(0,1fr)_396px] lg:grid-rows-[auto_minmax(0,1fr)] xl:grid-cols-[268px_minmax(0,1fr)_396px] xl:grid-rows-[minmax(0,1fr)]"
+    : "lg:grid-cols-[268px_minmax(0,1fr)]";
+
 /** The catalogue: cuts at the left, the ranked table, one star at the right. All of it stands in the address. */
 export const WorkbenchPage = () => {
   const programmeId = useProgrammeId();
@@ -61,10 +95,16 @@ export const WorkbenchPage = () => {
   const { data: programme } = useQuery(programmeOptions(programmeId));
   const summary = useQuery({ ...summaryOptions(programmeId, view), enabled: !workbench.isPending });
   const closeStar = () => {
-    show({ star: null });
+    show({ star: null, workings: [] });
     focusTable();
   };
-  useEscape(screen.star !== null, closeStar);
+  const { takeCameFrom, openFromTable, followWorkings, closeWorkings } = useWorkingsTrail(workbench);
+  const stepBack = () => {
+    if (screen.workings.length > 1) followWorkings(screen.workings.slice(0, -1));
+    else if (screen.workings.length === 1) closeWorkings();
+    else closeStar();
+  };
+  useEscape(screen.star !== null, stepBack);
   if (programme && programme.edition === null) return <NoStars programmeId={programmeId} />;
   if (summary.isPending)
     return <Loading what={summary.failureCount > 0 ? "Preparing the table" : "Loading"} />;
@@ -72,26 +112,32 @@ export const WorkbenchPage = () => {
     return <ErrorNotice error={summary.error} onRetry={() => void summary.refetch()} isPage />;
   const ignored = [...unread, ...summary.data.ignored];
   const cuts = view.cuts.length;
+  const folded = screen.star
+    ? { button: "xl:hidden", ladder: "max-xl:hidden" }
+    : { button: "lg:hidden", ladder: "max-lg:hidden" };
   return (
-    <main className="relative grid min-h-full grid-cols-[minmax(0,1fr)] lg:h-full lg:grid-cols-[268px_minmax(0,1fr)] xl:grid-cols-[268px_minmax(0,1fr)_auto]">
+    <main className={`grid min-h-full grid-cols-[minmax(0,1fr)] lg:h-full ${layoutOf(screen.star !== null)}`}>
       <title>Catalogue · Shortlight</title>
-      <aside aria-label="Cuts" className="min-h-0 overflow-y-auto border-rule lg:border-r">
+      <aside
+        aria-label="Cuts"
+        className={`min-h-0 overflow-y-auto border-rule lg:border-r ${screen.star ? "lg:max-xl:max-h-[40dvh] lg:max-xl:border-r-0" : ""}`}
+      >
         <button
           type="button"
           aria-expanded={isLadderShown}
           onClick={() => setLadderShown(!isLadderShown)}
-          className="flex min-h-11 w-full items-center gap-2 px-5 text-left lg:hidden"
+          className={`flex min-h-11 w-full items-center gap-2 px-5 text-left ${folded.button}`}
         >
           <span aria-hidden="true">{isLadderShown ? "▾" : "▸"}</span>
           {cuts === 0 ? "No cuts" : cuts === 1 ? "1 cut" : `${cuts} cuts`}
         </button>
-        <div className={isLadderShown ? "" : "max-lg:hidden"}>
+        <div className={isLadderShown ? "" : folded.ladder}>
           <Ladder programmeId={programmeId} view={view} summary={summary.data} ask={ask} />
         </div>
       </aside>
       <section
         aria-label="Catalogue"
-        className="flex h-[85dvh] min-h-0 min-w-0 flex-col border-t border-rule lg:h-auto lg:border-t-0"
+        className={`flex h-[85dvh] min-h-0 min-w-0 flex-col border-t border-rule lg:h-auto ${screen.star ? "xl:border-t-0" : "lg:border-t-0"}`}
       >
         {screen.find ? (
           <FindResult
@@ -99,7 +145,7 @@ export const WorkbenchPage = () => {
             view={view}
             text={screen.find}
             onOpen={(star, place) => {
-              show({ star, find: "" }, true);
+              show({ star, workings: [], find: "" }, true);
               if (place !== null) setGoTo({ row: place - 1 });
             }}
             onClose={() => show({ find: "" })}
@@ -119,14 +165,25 @@ export const WorkbenchPage = () => {
           failure={summary.error}
           goTo={goTo}
           onGoTo={(row) => setGoTo({ row })}
+          onWorkings={openFromTable}
         />
       </section>
       {screen.star ? (
         <aside
           aria-label="Star"
-          className="min-h-0 overflow-y-auto border-t border-rule bg-sheet lg:absolute lg:inset-y-0 lg:right-0 lg:z-20 lg:w-[396px] lg:border-t-0 lg:border-l xl:static"
+          className="min-h-0 overflow-y-auto border-t border-rule bg-sheet lg:col-start-2 lg:row-span-2 lg:row-start-1 lg:border-t-0 lg:border-l xl:col-start-3 xl:row-span-1"
         >
-          <StarSheet programmeId={programmeId} view={view} starId={screen.star} onClose={closeStar} />
+          <StarSheet
+            programmeId={programmeId}
+            view={view}
+            starId={screen.star}
+            columns={screen.columns}
+            workings={screen.workings}
+            takeCameFrom={takeCameFrom}
+            onWorkings={followWorkings}
+            onCloseWorkings={closeWorkings}
+            onClose={closeStar}
+          />
         </aside>
       ) : null}
     </main>

@@ -34,8 +34,8 @@ interface Props<Row> {
   /** A row to go to, from 0; another object goes there again. */
   goTo?: { readonly row: number } | null;
   onGoToRow: () => void;
-  /** A single letter pressed inside the grid, in lower case. */
-  onLetter?: (letter: string) => void;
+  /** A single letter pressed inside the grid, in lower case, and the cell it was pressed on; no row in the head. */
+  onLetter?: (letter: string, cell: { row: Row | undefined; column: string }) => void;
   isBusy?: boolean;
 }
 
@@ -164,7 +164,10 @@ export const Grid = <Row,>(props: Props<Row>): ReactNode => {
     } else if (event.key === "Enter" || (event.key === " " && activeRow >= 0)) enter();
     else if (isCtrl && event.key.toLowerCase() === "g") onGoToRow();
     else if (onLetter && !isCtrl && !event.altKey && !event.shiftKey && /^[a-z]$/.test(event.key))
-      onLetter(event.key);
+      onLetter(event.key, {
+        row: activeRow < 0 ? undefined : rowAt(activeRow),
+        column: columns[active.column]?.key ?? "",
+      });
     else return;
     event.preventDefault();
     event.stopPropagation();

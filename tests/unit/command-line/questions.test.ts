@@ -63,8 +63,8 @@ const CASES: readonly Case[] = [
     question: /“gmag” may be a magnitude of the AB system/,
   },
   {
-    what: "the epoch",
-    file: "name,ra,dec,Kmag\nS,200.5,-10.5,8\n",
+    what: "the epoch of stars that move",
+    file: "name,ra,dec,pmra,pmdec,Kmag\nS,200.5,-10.5,300,-120,8\n",
     question: /does not say at which date its positions are true/,
   },
   {
@@ -90,14 +90,21 @@ describe("a question that the file cannot answer", () => {
   );
 
   test("an epoch is not offered: it is asked for until a year is filled in", async () => {
-    put("t.csv", "name,ra,dec,Kmag\nS,200.5,-10.5,8\n");
+    put("t.csv", "name,ra,dec,pmra,pmdec,Kmag\nS,200.5,-10.5,300,-120,8\n");
     const { err } = await derive();
     put("plan.json", err.slice(err.indexOf("  {")));
     expect((await derive("--plan", "plan.json")).code).toBe(2);
   });
 
+  test("without motions nothing needs an epoch: it stays blank", async () => {
+    put("t.csv", "name,ra,dec,Kmag\nS,200.5,-10.5,8\n");
+    const { code, out } = await derive("--format", "csv");
+    expect(code).toBe(0);
+    expect(out).toContain("S,,,200.5,-10.5,,");
+  });
+
   test("all questions are asked at once", async () => {
-    put("t.csv", "name,ra,dec,plx,Kmag,k_m\nS,200.5,-10.5,0.06,8,8\n");
+    put("t.csv", "name,ra,dec,pmra,pmdec,plx,Kmag,k_m\nS,200.5,-10.5,300,-120,0.06,8,8\n");
     const { err } = await derive();
     expect(err).toMatch(/3 questions are open/);
     put("plan.json", offered(err));
