@@ -1,32 +1,44 @@
-import type { ExtractPreview, ReadingPlan } from "#shared/api/extracts.ts";
+import type { ColumnCard, ColumnSuggestion, ExtractPreview, ReadingPlan } from "#shared/api/extracts.ts";
+import type { Knowledge } from "./findings/look.ts";
 import { planFindings } from "./findings.ts";
+import { shownRows } from "./preview-rows.ts";
 import type { Sample } from "./sample.ts";
 import { suggestColumns } from "./suggest.ts";
+import { suggestFrame } from "./suggest-frame.ts";
+
+const cardOf = ({
+  samples: _samples,
+  because: _because,
+  asks: _asks,
+  ...card
+}: ColumnSuggestion): ColumnCard => card;
 
 /** The plan that follows from the suggestions alone, with every question open. */
-const suggestedPlan = (sample: Sample, columns: ExtractPreview["columns"]): ReadingPlan => ({
+const suggestedPlan = (sample: Sample, columns: readonly ColumnSuggestion[]): ReadingPlan => ({
   format: sample.format,
   delimiter: sample.delimiter,
   encoding: sample.encoding,
   decimalMark: sample.decimalMark,
-  columns: columns.map(({ index, header, means, unit, blankMarks }) => ({
-    index,
-    header,
-    means,
-    unit,
-    blankMarks,
-  })),
-  epoch: null,
+  columns: columns.map(cardOf),
   release: "",
   raUnit: null,
-  frame: "ICRS",
-  equinox: null,
+  ...suggestFrame(sample, columns),
 });
 
-/** What the mapping screen shows first. */
-export const previewOf = async (sample: Sample): Promise<ExtractPreview> => {
+/**
+ * What the mapping screen shows first.
+ *
+ * @param chosen the plan as answered so far; the suggested one where nothing has been answered
+ */
+export const previewOf = async (
+  sample: Sample,
+  chosen?: ReadingPlan,
+  knowledge?: Knowledge,
+): Promise<ExtractPreview> => {
   const columns = await suggestColumns(sample);
-  const findings = planFindings(sample, suggestedPlan(sample, columns));
+  const suggested = suggestedPlan(sample, columns);
+  const plan = chosen ?? suggested;
+  const findings = planFindings(sample, plan, knowledge);
   const asking = new Set(findings.filter((f) => f.level === "ask").map((f) => f.column));
   return {
     format: sample.format,
@@ -35,8 +47,8 @@ export const previewOf = async (sample: Sample): Promise<ExtractPreview> => {
     description: sample.meta.description,
     sources: [...sample.meta.sources],
     declaredRows: sample.declaredRows,
-    rows: [],
-    sky: [],
+    ...shownRows(sample, plan),
+    plan: suggested,
     knownPlan: null,
     delimiter: sample.delimiter,
     encoding: sample.encoding,

@@ -99,7 +99,9 @@ export const extractPreview = z.object({
     .default([]),
   /** Sampled positions, degrees, for a first map. */
   sky: z.array(z.tuple([z.number(), z.number()])).default([]),
-  /** A named plan that was made for a file with the same columns, with what differs; null where there is none. */
+  /** What the file itself says of how it is to be read, with every question open. */
+  plan: readingPlan.optional(),
+  /** A named plan made for a file with these columns or most of them, fitted to this one, with what differs. */
   knownPlan: z
     .object({
       versionId: id,

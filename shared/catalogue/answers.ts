@@ -1,4 +1,4 @@
-import type { ColumnCard, Finding, ReadingPlan } from "../api/extracts.ts";
+import { type ColumnCard, type Finding, type ReadingPlan, readingPlan } from "../api/extracts.ts";
 
 /**
  * What an answer to an Ask makes of the reading plan. Answers speak for themselves, whatever the finding:
@@ -6,13 +6,13 @@ import type { ColumnCard, Finding, ReadingPlan } from "../api/extracts.ts";
  * - `hour`, `deg`: what RA is in
  * - `blank:<text>`, `number:<text>`: whether a text of the column is a mark for no value
  * - `unit:<spelling>`: unit of the column
- * - `vega`, `ab`: zero point of the column's magnitudes
+ * - `vega`, `ab`: zero point of the column's magnitudes, or of all that are open
  * - `with-cos`, `without-cos`: whether the column's motion is multiplied by the cosine of the declination
  * - `means:<key>`: what the column gives; `kept` leaves it unused
  * - `swap`: the two motions change places
  * - `axes:<year>`, `date:<year>`, `both:<year>`: equinox of the axes, date of the positions, or both at once
  * - `frame:ICRS`, `frame:galactic`, `frame:FK5/<equinox>`: frame of the positions
- * - `decimal:.`, `decimal:,`: the decimal mark
+ * - `decimal:.`, `decimal:,`, `delimiter:;`, `encoding:latin1`: how the text is to be read
  * - `accept`: the file is taken as it is
  *
  * Where a value is typed it is the year (`epoch-missing`) or the unit (`unit-unknown`) itself.
@@ -74,6 +74,27 @@ const accept: Change = (plan, _value, finding) => ({
   accepted: added(plan.accepted, acceptedKey(finding)),
 });
 
+/** Of the column, or of every one whose zero point is open where the question names none. */
+const zeroPoint =
+  (magnitudeSystem: "vega" | "ab"): Change =>
+  (plan, _value, { column }) =>
+    column !== null
+      ? withCard(plan, column, () => ({ magnitudeSystem }))
+      : {
+          ...plan,
+          columns: plan.columns.map((card) =>
+            card.magnitudeSystem === null ? { ...card, magnitudeSystem } : card,
+          ),
+        };
+
+/** A dialect that the contract does not have changes nothing. */
+const dialect =
+  (key: "decimalMark" | "delimiter" | "encoding"): Change =>
+  (plan, value, finding) => {
+    const read = readingPlan.shape[key].safeParse(value);
+    return read.success ? accept({ ...plan, [key]: read.data }, value, finding) : plan;
+  };
+
 /** By the words before the colon, or the whole answer. */
 const CHANGES: Readonly<Record<string, Change>> = {
   hour: (plan) => ({ ...plan, raUnit: "hour" }),
@@ -87,8 +108,8 @@ const CHANGES: Readonly<Record<string, Change>> = {
     blankMarks: without(card.blankMarks, text),
   })),
   unit: onCard((_card, unit) => ({ unit })),
-  vega: onCard(() => ({ magnitudeSystem: "vega" })),
-  ab: onCard(() => ({ magnitudeSystem: "ab" })),
+  vega: zeroPoint("vega"),
+  ab: zeroPoint("ab"),
   "with-cos": onCard(() => ({ hasCosDec: true })),
   "without-cos": onCard(() => ({ hasCosDec: false })),
   means: onCard((_card, means) => ({ means })),
@@ -97,7 +118,9 @@ const CHANGES: Readonly<Record<string, Change>> = {
   axes: (plan, year, finding) => accept(axes(plan, year), year, finding),
   date: (plan, year, finding) => accept({ ...plan, epoch: Number(year) }, year, finding),
   both: (plan, year, finding) => accept(axes({ ...plan, epoch: Number(year) }, year), year, finding),
-  decimal: (plan, mark, finding) => accept({ ...plan, decimalMark: mark === "," ? "," : "." }, mark, finding),
+  decimal: dialect("decimalMark"),
+  delimiter: dialect("delimiter"),
+  encoding: dialect("encoding"),
   accept,
 };
 

@@ -6,18 +6,19 @@ export const suggestedColumns = (preview: ExtractPreview): ColumnCard[] =>
   preview.columns.map(({ samples: _samples, because: _because, asks: _asks, ...card }) => card);
 
 /** The plan a person starts from: what was recognised, with every question open. */
-export const suggestedPlan = (preview: ExtractPreview): ReadingPlan => ({
-  format: preview.format,
-  delimiter: preview.delimiter,
-  encoding: preview.encoding,
-  decimalMark: preview.decimalMark,
-  columns: suggestedColumns(preview),
-  epoch: null,
-  release: "",
-  raUnit: null,
-  frame: "ICRS",
-  equinox: null,
-});
+export const suggestedPlan = (preview: ExtractPreview): ReadingPlan =>
+  preview.plan ?? {
+    format: preview.format,
+    delimiter: preview.delimiter,
+    encoding: preview.encoding,
+    decimalMark: preview.decimalMark,
+    columns: suggestedColumns(preview),
+    epoch: null,
+    release: "",
+    raUnit: null,
+    frame: "ICRS",
+    equinox: null,
+  };
 
 export const withCard = (plan: ReadingPlan, index: number, change: Partial<ColumnCard>): ReadingPlan => ({
   ...plan,
