@@ -8,6 +8,7 @@ import { LineBuffer } from "../database/line-buffer.ts";
 import { notFound, unprocessable } from "../errors.ts";
 import type { RowBatch, TableReader } from "../formats/table.ts";
 import type { JobRun } from "../jobs/job-run.ts";
+import { besideOf } from "./beside.ts";
 import { EntryMapper } from "./entry-mapper.ts";
 import { openExtract } from "./open-extract.ts";
 
@@ -166,9 +167,15 @@ const refuseOtherHeader = (plan: ReadingPlan, width: number): void => {
   });
 };
 
-/** What the end of a table shows: that its reader stops, or that fewer rows came than were declared. */
-const refuseWhatIsMissing = (reader: TableReader, rows: number): void => {
-  const stop = reader.findings().find((finding) => finding.level === "stop");
+/** What a reader asks when it finds that a table is only a part of what was meant. */
+const PART_ONLY = new Set(["votable-overflow", "votable-fewer-rows", "fewer-rows"]);
+
+/** What the end of a table shows: that its reader stops, that it is a part, or that fewer rows came than were declared. */
+const refuseWhatIsMissing = (reader: TableReader, plan: ReadingPlan, rows: number): void => {
+  const found = reader.findings();
+  const stop =
+    found.find(({ level }) => level === "stop") ??
+    found.find(({ key }) => PART_ONLY.has(key) && !plan.accepted?.includes(key));
   if (stop) throw unprocessable(stop.key, stop.message, { hint: stop.hint });
   const { declaredRows } = reader.header;
   if (declaredRows === null || rows >= declaredRows) return;
@@ -179,8 +186,13 @@ const refuseWhatIsMissing = (reader: TableReader, rows: number): void => {
   );
 };
 
-const readAll = async (run: JobRun, extract: Extract, loader: Loader, reader: TableReader): Promise<void> => {
-  const total = Number(extract.bytes);
+const readAll = async (
+  run: JobRun,
+  loader: Loader,
+  reader: TableReader,
+  plan: ReadingPlan,
+  total: number,
+): Promise<void> => {
   const { counts } = loader;
   for await (const batch of reader.batches) {
     loader.take(batch);
@@ -188,7 +200,7 @@ const readAll = async (run: JobRun, extract: Extract, loader: Loader, reader: Ta
     const most = reader.header.declaredRows ?? Math.round((counts.read * total) / Math.max(1, batch.bytes));
     await run.progress(counts.read, Math.max(counts.read, most), "Reading rows", "rows");
   }
-  refuseWhatIsMissing(reader, loader.numbered);
+  refuseWhatIsMissing(reader, plan, loader.numbered);
   await loader.flush();
 };
 
@@ -198,9 +210,9 @@ export const loadEntries = async (run: JobRun, extract: Extract, plan: ReadingPl
   const source = await run.deps.files.read(extract.originalKey);
   const loader = new Loader(run, extract, plan);
   try {
-    const reader = await openExtract(source, plan);
+    const { reader } = await openExtract(source, plan, await besideOf(run.deps.files, extract));
     refuseOtherHeader(plan, reader.header.columns.length);
-    await readAll(run, extract, loader, reader);
+    await readAll(run, loader, reader, plan, Number(extract.bytes));
   } finally {
     source.destroy();
     await loader.settled();

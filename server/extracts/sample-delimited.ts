@@ -4,6 +4,7 @@ import { uniqueNames } from "../formats/delimited/unique-names.ts";
 import { detectDialect } from "../formats/dialect.ts";
 import { detectEncoding, type Encoding, notATable, textDecoder } from "../formats/encoding.ts";
 import type { FileStorage } from "../storage/storage.ts";
+import type { DialectChoice } from "./open-extract.ts";
 import { namedColumn, type Sample, sampleOf } from "./sample.ts";
 
 /** Bytes looked at: the beginning, some pieces spread over the rest, and the end. */
@@ -14,9 +15,6 @@ const PIECES = 6;
 const TAIL = 48 * 1024;
 /** Rows of the beginning that are looked at: enough to judge by, few enough to answer at once. */
 const HEAD_ROWS = 800;
-
-/** How a curator says that the text is to be read. */
-export type DialectChoice = Pick<ReadingPlan, "encoding" | "delimiter" | "decimalMark">;
 
 const VARIANTS: Readonly<Record<ReadingPlan["delimiter"], string>> = {
   ",": "commas",
@@ -64,12 +62,12 @@ export const sampleDelimited = async (
   files: FileStorage,
   key: string,
   bytes: number,
-  choice?: DialectChoice,
+  choice: DialectChoice = {},
 ): Promise<Sample> => {
   if (bytes === 0) return empty("utf-8", { isEmpty: true });
   const head = await readHead(files, key, bytes);
   const found = detectEncoding(head);
-  const encoding = choice?.encoding ?? found.encoding;
+  const encoding = choice.encoding ?? found.encoding;
   const instead = notATable(head, found.encoding);
   if (instead !== null || found.isUnreadable)
     return empty(encoding, { instead, isBigEndian: found.isUnreadable });
@@ -78,7 +76,8 @@ export const sampleDelimited = async (
   const headText = textDecoder(encoding).decode(head);
   if (headText.trim() === "") return empty(encoding, { isEmpty: true });
   const wholeLines = isWhole ? headText : headText.slice(0, headText.lastIndexOf("\n") + 1);
-  const { delimiter, decimalMark } = choice ?? detectDialect(wholeLines.slice(0, 64 * 1024));
+  const detected = detectDialect(wholeLines.slice(0, 64 * 1024));
+  const { delimiter = detected.delimiter, decimalMark = detected.decimalMark } = choice;
   const splitter = new CsvSplitter(delimiter);
   const records = splitter.push(wholeLines);
   const last = isWhole ? splitter.end() : { record: null, isQuoteOpen: false };

@@ -6,6 +6,7 @@ import { type AppError, conflict, notFound } from "../errors.ts";
 import { knownError } from "../http/known-errors.ts";
 import { writeLine } from "../logbook/service.ts";
 import type { FileStorage, StorageKey, Written } from "../storage/storage.ts";
+import { besideOf } from "./beside.ts";
 import { previewOf } from "./preview.ts";
 import { lockExtract } from "./queries.ts";
 import { readSample } from "./read-sample.ts";
@@ -44,13 +45,14 @@ export const refuseSameBytes = async (deps: Deps, extract: Extract, written: Wri
 };
 
 /** What the file of an extract looks like, read as the plan says or as it shows itself. */
-export const lookInto = (
+export const lookInto = async (
   files: FileStorage,
-  { originalKey, bytes }: Pick<Extract, "originalKey" | "bytes" | "companion">,
+  extract: Pick<Extract, "originalKey" | "bytes" | "companion" | "fileName">,
   plan?: ReadingPlan,
 ): Promise<Sample> => {
+  const { originalKey, bytes } = extract;
   if (originalKey === null) throw notFound("This file");
-  return readSample(files, originalKey, Number(bytes), plan);
+  return readSample(files, originalKey, Number(bytes), plan, await besideOf(files, extract));
 };
 
 /** The file is whole and new: the extract now waits for its reading plan. */
@@ -61,8 +63,7 @@ export const keep = async (
   key: StorageKey,
   written: Written,
 ): Promise<void> => {
-  const { bytes, companion } = extract;
-  const preview = await previewOf(await lookInto(deps.files, { originalKey: key, bytes, companion }));
+  const preview = await previewOf(await lookInto(deps.files, { ...extract, originalKey: key }));
   await inTransaction(deps.db, async (tx) => {
     const row = await lockExtract(tx, extract.programmeId, extract.id);
     if (!row) throw notFound("This extract");

@@ -19,8 +19,8 @@ import { runNextJob } from "#server/jobs/runner.ts";
 import { enqueueJob } from "#server/jobs/service.ts";
 import { readingPlan } from "#shared/api/extracts.ts";
 import { buildMember } from "#tests/support/factories.ts";
+import { type BinaryColumn, type BinaryRow, fitsTable, votableTable } from "#tests/support/table-files.ts";
 import { type Bench, type Measurement, timed } from "./harness.ts";
-import { type BinaryColumn, type BinaryRow, fitsTable, votableTable } from "./table-files.ts";
 
 const SEED = 20_260_101;
 const LINES = 1_000;

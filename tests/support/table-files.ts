@@ -1,4 +1,4 @@
-/** Tables of numbers and texts as the binary files that archives send, for measurements. */
+/** Tables of numbers and texts as the binary files that archives send. */
 export interface BinaryColumn {
   readonly name: string;
   readonly unit: string;
