@@ -17,7 +17,7 @@ export const Choice = <V extends string>({ legend, choices, value, onValue }: Pr
         type="button"
         aria-pressed={value === choice.value}
         onClick={() => onValue(choice.value)}
-        className={`min-h-7 px-2.5 text-[13px] first:rounded-l last:rounded-r ${value === choice.value ? "bg-ink text-paper" : "bg-sheet"}`}
+        className={`min-h-7 px-2.5 text-[13px] [&:nth-child(2)]:rounded-l last:rounded-r ${value === choice.value ? "bg-ink text-paper" : "bg-sheet"}`}
       >
         {choice.label}
       </button>

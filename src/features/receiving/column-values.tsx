@@ -4,7 +4,7 @@ import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { count } from "#shared/format/numbers.ts";
 import { binned } from "./bins.ts";
 import { ColumnPicker } from "./column-picker.tsx";
-import { valueText } from "./extract-words.ts";
+import { readText } from "./extract-words.ts";
 import { meaningLabel } from "./plan-words.ts";
 import { ValueHistogram } from "./value-histogram.tsx";
 
@@ -79,7 +79,9 @@ export const ColumnValues = ({ plan, preview }: Props) => {
               <td className="max-w-40 truncate pr-4 text-soft" title={text}>
                 {text === "" ? "(empty)" : text}
               </td>
-              <td className={`max-w-40 truncate ${value === null ? "text-soft" : ""}`}>{valueText(value)}</td>
+              <td className={`max-w-40 truncate ${value === null ? "text-soft" : ""}`}>
+                {card.means === KEPT ? text : readText({ text, value })}
+              </td>
             </tr>
           ))}
         </tbody>

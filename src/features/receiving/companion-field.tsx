@@ -43,13 +43,13 @@ export const CompanionField = ({ extract, onShown }: Props) => {
       {companion ? (
         <a
           href={companionAddress(programmeId, extract.id)}
-          className="block min-h-6 wrap-anywhere text-ink underline underline-offset-4"
+          className="block min-h-6 w-fit wrap-anywhere text-ink underline underline-offset-4"
         >
           Download the description, {companion.fileName}
         </a>
       ) : null}
       {isOpen ? (
-        <label className="inline-flex min-h-6 cursor-pointer items-center underline decoration-edge underline-offset-4 has-focus-visible:outline-2 has-focus-visible:outline-mark hover:decoration-ink">
+        <label className="flex min-h-6 w-fit cursor-pointer items-center underline decoration-edge underline-offset-4 has-focus-visible:outline-2 has-focus-visible:outline-mark hover:decoration-ink">
           {isBusy
             ? "Sending the description…"
             : companion

@@ -45,7 +45,7 @@ export const ExtractFrame = ({ extract, planNote, below, aside, onDescribed, chi
           ) : (
             <a
               href={originalAddress(programmeId, extract.id)}
-              className="inline-block min-h-6 wrap-anywhere text-ink underline underline-offset-4"
+              className="block min-h-6 w-fit wrap-anywhere text-ink underline underline-offset-4"
             >
               Download the original
             </a>

@@ -89,9 +89,9 @@ export const yearOf = (text: string): number | undefined => {
   return year >= YEARS.least && year <= YEARS.most ? year : undefined;
 };
 
-/** A value as it was read: numbers with a true minus, texts as they are, a blank as a word. */
-export const valueText = (value: number | string | null): string => {
-  if (value === null) return "blank";
+/** A value as it was read: numbers with a true minus, texts as they are, and words where there is none. */
+export const readText = ({ text, value }: { text: string; value: number | string | null }): string => {
+  if (value === null) return text.trim() === "" ? "blank" : "no value";
   return typeof value === "number" ? String(value).replaceAll("-", "\u2212") : value;
 };
 

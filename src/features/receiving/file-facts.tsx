@@ -10,7 +10,8 @@ interface Props {
 
 const asItIs = (preview: ExtractPreview, plan: ReadingPlan): string => {
   const words = readingOf({ ...plan, format: preview.format });
-  return preview.variant === "" ? words : `${words} (${preview.variant})`;
+  // Of delimited text the variant is the delimiter, which is named already.
+  return preview.variant === "" || preview.format === "delimited" ? words : `${words} (${preview.variant})`;
 };
 
 /** What the file was taken for, and what it says of itself. */

@@ -1,7 +1,6 @@
 import type { ExtractPreview, ReadingPlan } from "#shared/api/extracts.ts";
 import { Button } from "#src/ui/button.tsx";
 import { LevelMark } from "#src/ui/level-mark.tsx";
-import { planFor } from "./plan-answers.ts";
 
 interface Props {
   preview: ExtractPreview;
@@ -31,7 +30,7 @@ export const KnownPlan = ({ preview, onPlan }: Props) => {
       ) : (
         <p className="mt-1 text-soft">Nothing differs: with its answers nothing needs to be asked again.</p>
       )}
-      <Button className="mt-2" onClick={() => onPlan(planFor(preview, known.plan))}>
+      <Button className="mt-2" onClick={() => onPlan(known.plan)}>
         Read with this plan
       </Button>
     </section>

@@ -2,7 +2,7 @@ import { useState } from "react";
 import type { ColumnCard, ColumnSuggestion, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning, KEPT, MEANINGS } from "#shared/catalogue/header-spellings.ts";
 import { unitChoices } from "#shared/units/units.ts";
-import { valueText } from "./extract-words.ts";
+import { readText } from "./extract-words.ts";
 import { meaningLabel } from "./plan-words.ts";
 
 const BOX =
@@ -16,7 +16,7 @@ const Sample = ({ suggestion }: { suggestion: ColumnSuggestion | undefined }) =>
   const [first] = samples;
   if (!first) return <>–</>;
   const pair = ({ text, value }: typeof first): string =>
-    value === null || String(value) === text ? text : `${text} → ${valueText(value)}`;
+    value === null || String(value) === text ? text : `${text} → ${readText({ text, value })}`;
   return <span title={samples.map(pair).join("\n")}>{pair(first)}</span>;
 };
 
@@ -104,7 +104,7 @@ const Small = <V extends string>(props: {
     className={`${BOX} mt-1 ${props.value === null ? "border-mark!" : ""}`}
     onChange={(event) => props.onValue(event.target.value as V)}
   >
-    {props.value === null ? <option value="">not answered</option> : null}
+    {props.value === null ? <option value="">which?</option> : null}
     {(Object.entries(props.words) as [V, string][]).map(([value, word]) => (
       <option key={value} value={value}>
         {word}
@@ -194,7 +194,7 @@ export const PlanRow = ({ card, suggestion, raUnit, isAsking, isReadOnly, onChan
           />
         </span>
       </td>
-      <td className="w-28">
+      <td className="w-32">
         {meaning?.kind === "number" ? (
           <LateText
             label={`Unit of ${card.header}`}

@@ -4,10 +4,11 @@ import type { ColumnCard, ExtractPreview, ReadingPlan } from "#shared/api/extrac
 import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { count } from "#shared/format/numbers.ts";
 import { Choice } from "./choice.tsx";
-import { valueText } from "./extract-words.ts";
+import { readText } from "./extract-words.ts";
 import { meaningLabel } from "./plan-words.ts";
 
-const COLUMN = 148;
+/** Room for an identifier of 19 digits. */
+const COLUMN = 168;
 const LINE = 64;
 const TALLEST = 560;
 
@@ -21,10 +22,13 @@ type Row = ExtractPreview["rows"][number];
 /** The value that is read, and below it the text it was read from where the two differ. */
 const Cell = ({ card, row }: { card: ColumnCard; row: Row }) => {
   const { text = "", value = null } = row.cells[card.index] ?? {};
+  if (card.means === KEPT) return <span className="block truncate text-soft">{text || "(empty)"}</span>;
   const isSame = value !== null && String(value) === text.trim();
   return (
     <>
-      <span className={`block truncate ${value === null ? "text-soft" : ""}`}>{valueText(value)}</span>
+      <span className={`block truncate ${value === null ? "text-soft" : ""}`}>
+        {readText({ text, value })}
+      </span>
       {isSame ? null : (
         <span className="block truncate text-[11px] text-soft" title={text}>
           {text === "" ? "(empty)" : text}

@@ -1,7 +1,6 @@
 import { type ReactNode, useState } from "react";
 import type { Finding, ReadingPlan } from "#shared/api/extracts.ts";
 import { findMeaning } from "#shared/catalogue/header-spellings.ts";
-import { count } from "#shared/format/numbers.ts";
 import { unitChoices } from "#shared/units/units.ts";
 import { Button } from "#src/ui/button.tsx";
 import { LevelMark } from "#src/ui/level-mark.tsx";
@@ -101,12 +100,7 @@ export const Question = ({ finding, plan, place, isReadOnly, onAnswer, children 
         </span>
       ) : null}
     </p>
-    <p className="wrap-anywhere">
-      {finding.message}
-      {finding.count > 1 ? (
-        <span className="font-mono text-xs text-soft"> {count(finding.count)}×</span>
-      ) : null}
-    </p>
+    <p className="wrap-anywhere">{finding.message}</p>
     <p className="text-xs text-soft">{finding.hint}</p>
     <Examples examples={finding.examples} />
     {finding.level === "ask" && !isReadOnly ? (

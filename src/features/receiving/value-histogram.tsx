@@ -15,7 +15,7 @@ export const histogramWords = ({ low, high, counts }: Bins, unit: string): strin
   const of = unit === "" ? "" : ` ${unit}`;
   const range = `${count(total(counts))} values from ${figureText(low)} to ${figureText(high)}${of}`;
   return counts.length > 1
-    ? `${range}; most of them between ${figureText(low + most * width)} and ${figureText(low + (most + 1) * width)}.`
+    ? `${range}; the highest bar is between ${figureText(low + most * width)} and ${figureText(low + (most + 1) * width)}.`
     : `${range}.`;
 };
 

@@ -1,37 +1,17 @@
 import { configure, fireEvent, screen, waitFor } from "@testing-library/react";
 import { Route, Routes } from "react-router-dom";
 import { describe, expect, test } from "vitest";
-import type { Extract, ExtractPreview, Finding, ReadingPlan } from "#shared/api/extracts.ts";
+import type { ExtractPreview, Finding, ReadingPlan } from "#shared/api/extracts.ts";
 import { answered } from "#shared/catalogue/answers.ts";
 import { keepSession } from "#src/api/client.ts";
 import { ExtractPage } from "#src/features/receiving/extract-page.tsx";
 import { givenAnswers, suggestedPlan } from "#src/features/receiving/plan-answers.ts";
 import { answerWith, openAt, PERSON, refusal, sessionOf } from "../people/support.tsx";
+import { extract, finding, preview as plainPreview } from "./fixtures.ts";
 
 // A busy machine takes longer to show a page than the default second.
 configure({ asyncUtilTimeout: 10_000 });
 
-const column = (index: number, header: string, means: string, unit = "") => ({
-  index,
-  header,
-  means,
-  unit,
-  blankMarks: [],
-  samples: [{ text: "14,495", value: 14.495 }],
-  because: "name",
-  asks: false,
-});
-const finding = (code: string, more: Partial<Finding> = {}): Finding => ({
-  level: "ask",
-  code,
-  column: null,
-  message: `Question about ${code}.`,
-  hint: "Answer it.",
-  count: 1,
-  examples: [],
-  answers: [],
-  ...more,
-});
 const EPOCH = finding("epoch-missing");
 const MARK = finding("blank-mark", {
   column: "e_Ks",
@@ -40,46 +20,7 @@ const MARK = finding("blank-mark", {
     { value: "number:-999", label: "A number" },
   ],
 });
-const preview: ExtractPreview = {
-  delimiter: ";",
-  encoding: "utf-8",
-  decimalMark: ",",
-  columns: [column(0, "RA", "ra", "deg"), column(1, "e_Ks", "ks_mag_err", "mag"), column(2, "note", "kept")],
-  findings: [EPOCH, MARK],
-  sampledRows: 1000,
-  format: "delimited",
-  variant: "semicolons",
-  title: null,
-  description: null,
-  sources: [],
-  declaredRows: null,
-  rows: [],
-  sky: [],
-  knownPlan: null,
-};
-const extract: Extract = {
-  id: "5",
-  number: 3,
-  name: "Southern cool dwarfs",
-  origin: "",
-  state: "planning",
-  isInvented: true,
-  fileName: "south.csv",
-  bytes: 61_200_000,
-  receivedBytes: 61_200_000,
-  sha256: `9c41${"0".repeat(56)}e07b`,
-  companion: null,
-  uploadedBy: { id: "1", name: "Ada Marlow" },
-  createdAt: "2027-03-04T09:15:00.000Z",
-  committedAt: null,
-  edition: null,
-  rows: null,
-  newStars: null,
-  plan: null,
-  job: null,
-  failure: null,
-  version: 1,
-};
+const preview: ExtractPreview = { ...plainPreview, findings: [EPOCH, MARK] };
 
 /** What of the questions that plan leaves open, as the server would find. */
 const stillOpen = (findings: readonly Finding[], plan: ReadingPlan): Finding[] =>
