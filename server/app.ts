@@ -23,6 +23,7 @@ import { addMeritRoutes } from "./merit/routes.ts";
 import { addInterfaceRoutes } from "./openapi.ts";
 import { addPeopleRoutes } from "./people/routes.ts";
 import { addProgrammeRoutes } from "./programmes/routes.ts";
+import { addReadingPlanRoutes } from "./reading-plans/routes.ts";
 import { addRecipeRoutes } from "./recipes/routes.ts";
 import { addSelectionRoutes } from "./selections/routes.ts";
 import { addStarRoutes } from "./stars/routes.ts";
@@ -38,6 +39,7 @@ const SUBJECTS: readonly ((routes: Routes) => void)[] = [
   addInterfaceRoutes,
   addJobRoutes,
   addExtractRoutes,
+  addReadingPlanRoutes,
   addCatalogueRoutes,
   addRecipeRoutes,
   addInstrumentRoutes,

@@ -8,10 +8,10 @@ import type { Deps } from "../deps.ts";
 import { AppError, conflict, notFound, unprocessable } from "../errors.ts";
 import { enqueueJob, newestJobOf } from "../jobs/service.ts";
 import { writeLine } from "../logbook/service.ts";
-import { isOpen, planFindings } from "./findings.ts";
+import { isOpen } from "./findings.ts";
 import { presentExtract, presentPreview } from "./present.ts";
-import { previewOf } from "./preview.ts";
 import { extractsOf, findExtractRow, lockExtract, namesOf, nextNumber } from "./queries.ts";
+import { reviewFile, reviewPlan } from "./review.ts";
 import { lookInto } from "./upload-keep.ts";
 import { growingKey } from "./upload-pieces.ts";
 
@@ -167,13 +167,10 @@ export const savePlan = async (
   refuseUnlessPlanning(row);
   refuseStale(row, input.version);
   const sample = await lookInto(deps.files, row, input.plan);
-  const findings = planFindings(sample, input.plan);
-  await writePlan(deps, person, row, input.version, {
-    plan: input.plan,
-    // What is open under the plan as answered, not under the one that was suggested.
-    preview: { ...(await previewOf(sample)), findings },
-  });
-  return { ...(await showExtract(deps, programmeId, id)), findings };
+  // What is open under the plan as answered, not under the one that was suggested.
+  const preview = await reviewFile(deps, row, sample, input.plan);
+  await writePlan(deps, person, row, input.version, { plan: input.plan, preview });
+  return { ...(await showExtract(deps, programmeId, id)), findings: preview.findings };
 };
 
 const refuseOpen = (findings: Finding[]): void => {
@@ -203,7 +200,7 @@ export const commitExtract = async (
     throw unprocessable("plan-not-ready", "The reading plan has not been confirmed.", {
       hint: "Look through the columns and confirm the plan first.",
     });
-  refuseOpen(planFindings(await lookInto(deps.files, row, plan), plan));
+  refuseOpen(await reviewPlan(deps, row, await lookInto(deps.files, row, plan), plan));
   const jobId = await inTransaction(deps.db, async (tx) => {
     const locked = await lockExtract(tx, programmeId, id);
     if (!locked) throw notFound("This extract");

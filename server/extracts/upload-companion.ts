@@ -7,8 +7,8 @@ import type { Deps } from "../deps.ts";
 import { AppError, conflict, notFound } from "../errors.ts";
 import { writeLine } from "../logbook/service.ts";
 import { FileTooLargeError } from "../storage/storage-errors.ts";
-import { previewOf } from "./preview.ts";
 import { findExtractRow, lockExtract } from "./queries.ts";
+import { reviewFile } from "./review.ts";
 import { announcedBytes, bodyOf } from "./upload-body.ts";
 import { lookInto } from "./upload-keep.ts";
 
@@ -33,7 +33,7 @@ const cutOff = (): AppError =>
 const readAgain = async (deps: Deps, row: Extract, companion: Companion): Promise<Partial<Extract>> => {
   if (row.state !== "planning") return { companion };
   const sample = await lookInto(deps.files, { ...row, companion });
-  return { companion, plan: null, preview: await previewOf(sample) };
+  return { companion, plan: null, preview: await reviewFile(deps, row, sample) };
 };
 
 const keepCompanion = async (deps: Deps, person: Person, seen: Extract, companion: Companion) => {

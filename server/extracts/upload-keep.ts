@@ -7,9 +7,9 @@ import { knownError } from "../http/known-errors.ts";
 import { writeLine } from "../logbook/service.ts";
 import type { FileStorage, StorageKey, Written } from "../storage/storage.ts";
 import { besideOf } from "./beside.ts";
-import { previewOf } from "./preview.ts";
 import { lockExtract } from "./queries.ts";
 import { readSample } from "./read-sample.ts";
+import { reviewFile } from "./review.ts";
 import type { Sample } from "./sample.ts";
 
 interface Person {
@@ -63,7 +63,11 @@ export const keep = async (
   key: StorageKey,
   written: Written,
 ): Promise<void> => {
-  const preview = await previewOf(await lookInto(deps.files, { ...extract, originalKey: key }));
+  const preview = await reviewFile(
+    deps,
+    extract,
+    await lookInto(deps.files, { ...extract, originalKey: key }),
+  );
   await inTransaction(deps.db, async (tx) => {
     const row = await lockExtract(tx, extract.programmeId, extract.id);
     if (!row) throw notFound("This extract");

@@ -33,6 +33,8 @@ export const RIGHTS = {
   "job.cancel": ["curator", "lead", "administrator"],
   "extract.read": MEMBERS,
   "extract.edit": ["curator"],
+  "plan.read": MEMBERS,
+  "plan.edit": ["curator", "lead"],
   "catalogue.read": READERS,
   "recipe.read": READERS,
   "recipe.edit": ["curator", "lead"],

@@ -186,7 +186,7 @@ describe("a wrong file", () => {
     ["empty", "", "empty-file"],
     ["of blank lines", "\n\n  \n", "empty-file"],
     ["binary", Buffer.from(Array.from({ length: 4000 }, (_, i) => (i * 7919) % 256)), "not-a-table"],
-    ["zipped", Buffer.concat([Buffer.from([0x1f, 0x8b, 8, 0]), Buffer.alloc(500, 200)]), "not-a-table"],
+    ["zipped", Buffer.concat([Buffer.from([0x1f, 0x8b, 8, 0]), Buffer.alloc(500, 200)]), "gzip-broken"],
     ["without rows", "source_id,ra,dec,epoch,plx\n", "header-only"],
     ["without rows or line end", "source_id,ra,dec,epoch,plx", "header-only"],
     ["without a usable column", "colour,shape\nred,round\nblue,square\n", "nothing-usable"],
@@ -215,7 +215,7 @@ describe("a plan", () => {
   test("cannot be committed before every question is answered", async () => {
     const { agent, programme } = await app.asPerson("curator");
     const content =
-      "id,ra,dec,plx[furlong],Ks\n1,1.5,-80,5,9.1\n2,13.5,70,6,-999\n3,22.5,10,7,9.3\n4,2.5,10,7,9.4\n";
+      "id,ra,dec,plx[furlong],ks_m\n1,1.5,-80,5,9.1\n2,13.5,70,6,-999\n3,22.5,10,7,9.3\n4,2.5,10,7,9.4\n";
     const received = await receive(agent, programme, content);
     const open = received.preview.findings.filter((f) => f.level === "ask").map((f) => f.code);
     expect(open.sort()).toEqual(["blank-mark", "epoch-missing", "ra-unit", "unit-unknown"]);

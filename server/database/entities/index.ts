@@ -14,6 +14,7 @@ import { MeritVersion } from "./merit.entity.ts";
 import { OneTimeLink } from "./one-time-link.entity.ts";
 import { Person } from "./person.entity.ts";
 import { Programme } from "./programme.entity.ts";
+import { ReadingPlanVersion } from "./reading-plan.entity.ts";
 import { RecipeVersion } from "./recipe.entity.ts";
 import { RefusedRow } from "./refused-row.entity.ts";
 import { SelectionVersion } from "./selection.entity.ts";
@@ -38,6 +39,7 @@ export const ENTITIES = [
   OneTimeLink,
   Person,
   Programme,
+  ReadingPlanVersion,
   RecipeVersion,
   RefusedRow,
   SelectionVersion,
