@@ -3,10 +3,8 @@ import { RADIANS_PER_DEGREE } from "#shared/science/angles.ts";
 import { accept, ask, isAccepted } from "./finding.ts";
 import { columnOf, type Look, median, type UsedColumn } from "./look.ts";
 
-const ANSWERS = [
-  { value: "with-cos", label: "With cos δ" },
-  { value: "without-cos", label: "Without" },
-];
+const WITH = { value: "with-cos", label: "With cos δ" };
+const WITHOUT = { value: "without-cos", label: "Without" };
 
 /** Only there both conventions differ by more than a factor of two. */
 const HIGH_DECLINATION = 60;
@@ -55,7 +53,7 @@ const cosine = (look: Look): Finding[] => {
   if (!pmra) return [];
   const { hasCosDec, header } = pmra.card;
   const fit = conventions(look, pmra);
-  const about = { column: header, count: fit?.count ?? pmra.given.length, answers: ANSWERS };
+  const about = { column: header, count: fit?.count ?? pmra.given.length, answers: [WITH, WITHOUT] };
   if (hasCosDec === null)
     return [
       ask(
@@ -73,7 +71,7 @@ const cosine = (look: Look): Finding[] => {
       "cos-dec-doubt",
       `“${header}” is read as ${hasCosDec === false ? "not multiplied" : "multiplied"} by the cosine of the declination.${evidence(fit)}`,
       "Change it, or say that it is right.",
-      { ...about, answers: [...ANSWERS, accept("It is right")] },
+      { ...about, answers: [hasCosDec === false ? WITH : WITHOUT, accept("It is right")] },
     ),
   ];
 };
