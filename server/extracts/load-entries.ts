@@ -170,20 +170,22 @@ const refuseOtherHeader = (plan: ReadingPlan, width: number): void => {
 /** What a reader asks when it finds that a table is only a part of what was meant. */
 const PART_ONLY = new Set(["votable-overflow", "votable-fewer-rows", "fewer-rows"]);
 
+const rowsMissing = (declared: number, rows: number): Error =>
+  unprocessable(
+    "rows-missing",
+    `The file says that it has ${declared.toLocaleString("en")} rows, and ${rows.toLocaleString("en")} of them came. Nothing was kept but the original.`,
+    { hint: "Get the table again, whole, and bring it as a new extract." },
+  );
+
 /** What the end of a table shows: that its reader stops, that it is a part, or that fewer rows came than were declared. */
 const refuseWhatIsMissing = (reader: TableReader, plan: ReadingPlan, rows: number): void => {
+  const { declaredRows } = reader.header;
+  if (declaredRows !== null && rows < declaredRows) throw rowsMissing(declaredRows, rows);
   const found = reader.findings();
   const stop =
     found.find(({ level }) => level === "stop") ??
     found.find(({ key }) => PART_ONLY.has(key) && !plan.accepted?.includes(key));
   if (stop) throw unprocessable(stop.key, stop.message, { hint: stop.hint });
-  const { declaredRows } = reader.header;
-  if (declaredRows === null || rows >= declaredRows) return;
-  throw unprocessable(
-    "rows-missing",
-    `The file says that it has ${declaredRows.toLocaleString("en")} rows, and ${rows.toLocaleString("en")} of them came. Nothing was kept but the original.`,
-    { hint: "Get the table again, whole, and bring it as a new extract." },
-  );
 };
 
 const readAll = async (

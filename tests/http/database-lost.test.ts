@@ -1,4 +1,3 @@
-import { connect, createServer, type Server, type Socket } from "node:net";
 import supertest from "supertest";
 import type { DataSource } from "typeorm";
 import { afterAll, beforeAll, expect, test } from "vitest";
@@ -6,45 +5,15 @@ import { createApp } from "#server/app.ts";
 import { createDataSource } from "#server/database/data-source.ts";
 import { startTestApp, type TestApp } from "#tests/support/app.ts";
 import { testDatabaseUrl } from "#tests/support/database.ts";
-
-/** A line to the database that can be cut and mended. */
-class Line {
-  private server: Server | undefined;
-  private readonly sockets = new Set<Socket>();
-
-  constructor(
-    private readonly to: { host: string; port: number },
-    public port = 0,
-  ) {}
-
-  async mend(): Promise<void> {
-    this.server = createServer((near) => {
-      const far = connect(this.to.port, this.to.host);
-      for (const socket of [near, far]) {
-        this.sockets.add(socket);
-        socket.on("error", () => socket.destroy());
-      }
-      near.pipe(far).pipe(near);
-    });
-    await new Promise<void>((resolve) => this.server?.listen(this.port, "127.0.0.1", resolve));
-    const address = this.server.address();
-    if (typeof address === "object" && address) this.port = address.port;
-  }
-
-  async cut(): Promise<void> {
-    for (const socket of this.sockets) socket.destroy();
-    this.sockets.clear();
-    await new Promise<void>((resolve) => this.server?.close(() => resolve()));
-  }
-}
+import { DatabaseLine } from "#tests/support/database-line.ts";
 
 let on: TestApp;
-let line: Line;
+let line: DatabaseLine;
 let db: DataSource;
 beforeAll(async () => {
   on = await startTestApp({ logLevel: "silent" });
   const url = new URL(testDatabaseUrl());
-  line = new Line({ host: url.hostname, port: Number(url.port) });
+  line = new DatabaseLine({ host: url.hostname, port: Number(url.port) });
   await line.mend();
   url.port = String(line.port);
   db = await createDataSource(url.href, 3).initialize();
