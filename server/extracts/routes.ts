@@ -25,7 +25,7 @@ import {
   withdrawExtract,
 } from "./service.ts";
 import { receiveOriginal } from "./upload.ts";
-import { openCompanion, receiveCompanion } from "./upload-companion.ts";
+import { openCompanion, receiveCompanion, removeCompanion } from "./upload-companion.ts";
 import { receivePiece } from "./upload-pieces.ts";
 
 const ALL = "/programmes/:programmeId/extracts";
@@ -71,6 +71,14 @@ export const addExtractRoutes = (routes: Routes): void => {
     async ({ deps, programmeId, caller, params, query, req }) => {
       const id = params.extractId ?? "";
       await receiveCompanion(deps, programmeId, caller, id, query.name, req);
+      return showExtract(deps, programmeId, id);
+    },
+  );
+  routes.add(
+    { method: "delete", path: `${ONE}/companion`, access: "extract.edit" },
+    async ({ deps, programmeId, caller, params }) => {
+      const id = params.extractId ?? "";
+      await removeCompanion(deps, programmeId, caller, id);
       return showExtract(deps, programmeId, id);
     },
   );

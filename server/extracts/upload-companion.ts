@@ -30,35 +30,49 @@ const cutOff = (): AppError =>
   });
 
 /** What the file looks like beside the description, and no plan any more: its columns may be others now. */
-const readAgain = async (deps: Deps, row: Extract, companion: Companion): Promise<Partial<Extract>> => {
+const readAgain = async (
+  deps: Deps,
+  row: Extract,
+  companion: Companion | null,
+): Promise<Partial<Extract>> => {
   if (row.state !== "planning") return { companion };
   const sample = await lookInto(deps.files, { ...row, companion });
   return { companion, plan: null, preview: await reviewFile(deps, row, sample) };
 };
 
-const keepCompanion = async (deps: Deps, person: Person, seen: Extract, companion: Companion) => {
+const inLogbook = (companion: Companion | null): unknown =>
+  companion && { fileName: companion.fileName, bytes: companion.bytes, sha256: companion.sha256 };
+
+/** Puts another description, or none, in the place of what there was; the file of that is removed. */
+const replaceCompanion = async (
+  deps: Deps,
+  person: Person,
+  seen: Extract,
+  companion: Companion | null,
+): Promise<void> => {
   const changes = await readAgain(deps, seen, companion);
-  return inTransaction(deps.db, async (tx) => {
+  const old = await inTransaction(deps.db, async (tx) => {
     const row = await lockExtract(tx, seen.programmeId, seen.id);
     if (!row) throw notFound("This extract");
     refuseUnlessOpen(row);
     if (row.state !== seen.state)
       throw conflict("stale-version", "The table of this extract arrived meanwhile.", {
-        hint: "Send the description again.",
+        hint: "Look at it, then do it again.",
       });
-    const old = row.companion;
+    const before = row.companion;
     await tx.save(Object.assign(row, changes));
-    const { fileName, bytes, sha256 } = companion;
     await writeLine(tx, {
       programmeId: row.programmeId,
       person,
       action: "extract.describe",
       subject: { type: "extract", id: row.id, name: row.name },
-      after: { fileName, bytes, sha256 },
+      before: inLogbook(before),
+      after: inLogbook(companion),
       at: deps.now(),
     });
-    return old;
+    return before;
   });
+  if (old) await deps.files.remove(old.key);
 };
 
 /** Takes the file that describes the table of an extract (a ReadMe); another one takes its place. */
@@ -78,12 +92,24 @@ export const receiveCompanion = async (
   const key = `programmes/${programmeId}/extracts/${id}/companion-${crypto.randomUUID()}`;
   try {
     const written = await deps.files.write(key, bodyOf(req, cutOff()), { limitBytes });
-    const old = await keepCompanion(deps, person, extract, { key, fileName, ...written });
-    if (old) await deps.files.remove(old.key);
+    await replaceCompanion(deps, person, extract, { key, fileName, ...written });
   } catch (error) {
     await deps.files.remove(key);
     throw error;
   }
+};
+
+/** Leaves out a description that does not belong to the table. */
+export const removeCompanion = async (
+  deps: Deps,
+  programmeId: string,
+  person: Person,
+  id: string,
+): Promise<void> => {
+  const extract = await findExtractRow(deps.db.manager, programmeId, id);
+  if (!extract?.companion) throw notFound("This file");
+  refuseUnlessOpen(extract);
+  await replaceCompanion(deps, person, extract, null);
 };
 
 export const openCompanion = async (

@@ -177,7 +177,7 @@ export const commitBody = z.strictObject({ version });
  */
 export const uploadQuery = z.object({ offset: z.coerce.number().int().min(0).optional() });
 
-/** PUT …/extracts/:id/companion?name=ReadMe (raw body) → { extract, preview }. GET → the untouched file. */
+/** PUT …/extracts/:id/companion?name=ReadMe (raw body), DELETE → { extract, preview }. GET → the untouched file. */
 export const companionQuery = z.object({ name: z.string().trim().min(1).max(255) });
 
 /** GET …/reading-plans → { plans }; POST → 201 { plan }; PUT …/reading-plans/:id → { plan } (a further version). */

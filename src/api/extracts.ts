@@ -72,6 +72,9 @@ export const sendCompanion = (programmeId: string, id: string, file: File): Prom
     new AbortController().signal,
   );
 
+export const removeCompanion = (programmeId: string, id: string): Promise<ExtractShown> =>
+  request<ExtractShown>("DELETE", `${one(programmeId, id)}/companion`);
+
 export const removeExtract = (programmeId: string, id: string): Promise<void> =>
   request<void>("DELETE", one(programmeId, id));
 

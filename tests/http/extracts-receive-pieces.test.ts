@@ -237,6 +237,11 @@ describe("a description beside the table", () => {
     expect(body.extract).toMatchObject({ state: "planning", plan: null, companion: { fileName: "ReadMe" } });
     expect(body.preview).not.toBeNull();
     expect(made.stored()).toHaveLength(2);
+    const without = await made.agent.delete(`${made.url}/companion`).expect(200);
+    expect(without.body.extract).toMatchObject({ state: "planning", companion: null });
+    expect(without.body.preview.columns[0].header).toBe("source_id");
+    expect(made.stored()).toHaveLength(1);
+    await made.agent.delete(`${made.url}/companion`).expect(404);
     await made.agent.delete(made.url).expect(204);
     expect(made.stored()).toEqual([]);
   });

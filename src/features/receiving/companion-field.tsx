@@ -1,9 +1,10 @@
 import { useState } from "react";
 import type { Extract } from "#shared/api/extracts.ts";
 import { LIMITS } from "#shared/limits.ts";
-import { companionAddress, type ExtractShown, sendCompanion } from "#src/api/extracts.ts";
+import { companionAddress, type ExtractShown, removeCompanion, sendCompanion } from "#src/api/extracts.ts";
 import { useProgrammeId } from "#src/lib/programme-path.ts";
 import { useCan } from "#src/lib/rights.ts";
+import { Button } from "#src/ui/button.tsx";
 import { ErrorNotice } from "#src/ui/error-notice.tsx";
 import { sizeOf } from "./extract-words.ts";
 
@@ -22,21 +23,23 @@ export const CompanionField = ({ extract, onShown }: Props) => {
   const [refusal, setRefusal] = useState("");
   const { companion, state } = extract;
   const isOpen = (state === "receiving" || state === "planning") && can("extract.edit");
-  const send = async (file: File): Promise<void> => {
-    const isTooLarge = file.size > LIMITS.companionBytes;
-    setRefusal(
-      isTooLarge ? `${file.name} has ${sizeOf(file.size)}; a description may have at most 8 MiB.` : "",
-    );
-    if (isTooLarge) return;
+  const act = async (change: Promise<ExtractShown>): Promise<void> => {
     setBusy(true);
     setProblem(null);
     try {
-      onShown(await sendCompanion(programmeId, extract.id, file));
+      onShown(await change);
     } catch (error) {
       setProblem(error);
     } finally {
       setBusy(false);
     }
+  };
+  const send = (file: File): void => {
+    const isTooLarge = file.size > LIMITS.companionBytes;
+    setRefusal(
+      isTooLarge ? `${file.name} has ${sizeOf(file.size)}; a description may have at most 8 MiB.` : "",
+    );
+    if (!isTooLarge) void act(sendCompanion(programmeId, extract.id, file));
   };
   return (
     <>
@@ -62,10 +65,20 @@ export const CompanionField = ({ extract, onShown }: Props) => {
             onChange={(event) => {
               const file = event.target.files?.[0];
               event.target.value = "";
-              if (file) void send(file);
+              if (file) send(file);
             }}
           />
         </label>
+      ) : null}
+      {isOpen && companion ? (
+        <Button
+          kind="plain"
+          className="px-0!"
+          disabled={isBusy}
+          onClick={() => void act(removeCompanion(programmeId, extract.id))}
+        >
+          Leave the description out
+        </Button>
       ) : null}
       {refusal ? (
         <p role="alert" className="text-xs text-mark">

@@ -135,9 +135,7 @@ const Report = ({ extract }: { extract: Extract }) => {
         {extract.state === "committed" && can("extract.edit") && !isBusy ? (
           <Button onClick={() => setWithdrawing(true)}>Withdraw extract</Button>
         ) : null}
-        {extract.plan && can("extract.edit") ? (
-          <SavePlanButton extract={extract} plan={extract.plan} />
-        ) : null}
+        {extract.plan && can("plan.edit") ? <SavePlanButton extract={extract} plan={extract.plan} /> : null}
       </div>
       <WithdrawDialog extract={extract} isOpen={isWithdrawing} onClose={() => setWithdrawing(false)} />
     </>
