@@ -1,4 +1,5 @@
 import type { ColumnCard, Finding, ReadingPlan } from "#shared/api/extracts.ts";
+import { acceptedKey } from "#shared/catalogue/answers.ts";
 import { findMeaning, KEPT, plainHeader } from "#shared/catalogue/header-spellings.ts";
 import { conversionTo } from "#shared/units/units.ts";
 import { unprocessable } from "../errors.ts";
@@ -181,11 +182,19 @@ const SETTLED_BY_A_PLAN = new Set([
   "unknown-meaning",
 ]);
 
-const answerTo = ({ code, column, examples, answers }: Finding, cards: readonly ColumnCard[]): PlanFile => {
+/** What is asked here with more to say than that it is doubtful. */
+const ASKED_ALREADY = new Set(["unit-doubt", "meaning-doubtful"]);
+
+const ABOUT_EPOCH = new Set(["epoch-missing", "j2000-doubt"]);
+
+const answerTo = (finding: Finding, cards: readonly ColumnCard[]): PlanFile => {
+  const { code, column, examples, answers } = finding;
   // No year is likelier than another: whoever takes the plan over is asked again until it is filled in.
-  if (code === "epoch-missing") return { epoch: null };
+  if (ABOUT_EPOCH.has(code)) return { epoch: null };
   const card = cards.find((c) => c.header === column);
   const [first] = answers;
+  if (answers.some(({ value }) => value === "accept" || /^(decimal|delimiter):/.test(value)))
+    return { accept: [acceptedKey(finding)] };
   const mark = first?.value.startsWith("blank:") ? first.value.slice("blank:".length) : undefined;
   if (card && mark !== undefined)
     return columnAnswer(card.header, { key: card.means, unit: card.unit, blankMarks: [mark] });
@@ -275,11 +284,14 @@ export const understand = (glance: Glance, plan: PlanFile): ReadingPlan => {
     raUnit: raUnitOf(ra),
     frame: "ICRS",
     equinox: null,
+    accepted: plan.accept,
   };
   const findings = planFindings(sample, understood).filter(
     // What two columns mean is asked once, with more to say than that they mean the same.
     (f) =>
-      (f.code !== "meaning-twice" || rivals.length === 0) && (f.code !== "epoch-missing" || moves(columns)),
+      !ASKED_ALREADY.has(f.code) &&
+      (f.code !== "meaning-twice" || rivals.length === 0) &&
+      (!ABOUT_EPOCH.has(f.code) || moves(columns)),
   );
   refuseOpen([
     ...askAboutFile(glance.findings, plan),

@@ -117,3 +117,6 @@ export const quoted = (names: readonly string[]): string => names.map((n) => `â€
 
 /** A number as messages write it: a true minus, and no more digits than it needs. */
 export const said = (value: number): string => String(Number(value.toPrecision(6))).replace("-", "âˆ’");
+
+/** A number with two digits that count. */
+export const roughly = (value: number): string => said(Number(value.toPrecision(2)));

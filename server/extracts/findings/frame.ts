@@ -1,6 +1,6 @@
 import type { Finding } from "#shared/api/extracts.ts";
 import { julianYear, unreadFrame } from "../suggest-frame.ts";
-import { ask, isAccepted, stop } from "./finding.ts";
+import { ask, isAccepted, roughly, stop } from "./finding.ts";
 import { columnOf, type Look, rowsWhere, type UsedColumn } from "./look.ts";
 
 const FRAMES = [
@@ -32,7 +32,7 @@ const farthest = (look: Look): string => {
   );
   const arcsec = (most * YEARS) / 1000;
   return arcsec >= 0.1
-    ? ` and it has proper motions. Its fastest star would be misplaced by ${arcsec.toPrecision(2)}″ in ${YEARS} years`
+    ? ` and it has proper motions. Its fastest star would be misplaced by ${roughly(arcsec)}″ in ${YEARS} years`
     : ". A fast star would be misplaced by many arcseconds";
 };
 

@@ -1,6 +1,6 @@
 import type { Finding } from "#shared/api/extracts.ts";
 import { RADIANS_PER_DEGREE } from "#shared/science/angles.ts";
-import { accept, ask, isAccepted } from "./finding.ts";
+import { accept, ask, isAccepted, roughly } from "./finding.ts";
 import { columnOf, type Look, median, type UsedColumn } from "./look.ts";
 
 const WITH = { value: "with-cos", label: "With cos δ" };
@@ -45,7 +45,7 @@ const conventions = (
 
 const evidence = (fit: ReturnType<typeof conventions>): string =>
   fit
-    ? ` For ${fit.count} shared stars beyond ±${HIGH_DECLINATION}° it differs from the other extracts by ${fit.asWith.toPrecision(2)} mas/yr if it is, and by ${fit.asWithout.toPrecision(2)} if it is not.`
+    ? ` For ${fit.count} shared stars beyond ±${HIGH_DECLINATION}° it differs from the other extracts by ${roughly(fit.asWith)} mas/yr if it is, and by ${roughly(fit.asWithout)} if it is not.`
     : "";
 
 const cosine = (look: Look): Finding[] => {
@@ -90,7 +90,7 @@ const swapped = (look: Look): Finding[] => {
   return [
     ask(
       "motions-swapped",
-      `“${pmra.card.header}” and “${pmdec.card.header}” fit the other extracts better when they change places: for ${straight.count} shared stars they differ by ${crossed.toPrecision(2)} mas/yr then, and by ${asIs.toPrecision(2)} as they stand.`,
+      `“${pmra.card.header}” and “${pmdec.card.header}” fit the other extracts better when they change places: for ${straight.count} shared stars they differ by ${roughly(crossed)} mas/yr then, and by ${roughly(asIs)} as they stand.`,
       "Say whether they are to change places.",
       {
         column: null,
