@@ -1,5 +1,6 @@
 import type { RecipeSettings } from "#shared/science/recipes.ts";
-import { encodeRow, encodeValue, type Value } from "../database/bulk.ts";
+import type { Value } from "../database/bulk.ts";
+import type { LineBuffer } from "../database/line-buffer.ts";
 import { stellarColumns } from "../database/star-table.ts";
 import { deriveColumns } from "../derive/derive.ts";
 import type { StellarColumns } from "../derive/star-columns.ts";
@@ -19,14 +20,22 @@ const arrayOf = (derived: StellarColumns, key: string): ArrayLike<number> => {
   return found;
 };
 
-/** Whole rows as encoded lines, in the order of `STAR_VALUES`, from adopted values. */
-export const deriveLines = (adopted: readonly Value[][], recipe: RecipeSettings): string[] => {
+/** Writes the cells of a star's row after its keys, in the order of `STAR_VALUES`. */
+export type WriteStar = (index: number, lines: LineBuffer) => void;
+
+const writeValue = (value: Value, lines: LineBuffer): void => {
+  if (value === null) lines.blank();
+  else if (typeof value === "string") lines.text(value);
+  else lines.number(value);
+};
+
+/** Derives whole rows from adopted values; each is written when it is asked for. */
+export const deriveRows = (adopted: readonly Value[][], recipe: RecipeSettings): WriteStar => {
   const given = givenColumns(adopted, recipe);
   const derived = deriveColumns(given, adopted.length, recipe);
   const columns = STELLAR.map((key) => arrayOf(derived, key));
-  return adopted.map((row, i) => {
-    let line = encodeRow(row);
-    for (const column of columns) line += `\t${encodeValue(column[i] ?? null)}`;
-    return line;
-  });
+  return (index, lines) => {
+    for (const value of adopted[index] ?? []) writeValue(value, lines);
+    for (const column of columns) lines.number(column[index] ?? Number.NaN);
+  };
 };

@@ -2,6 +2,7 @@ import type { EntityManager } from "typeorm";
 import { recipeLabel } from "#shared/format/recipe-label.ts";
 import { CatalogueEdition } from "../database/entities/catalogue-edition.entity.ts";
 import { Programme } from "../database/entities/programme.entity.ts";
+import { LineBuffer } from "../database/line-buffer.ts";
 import { inTransaction } from "../database/transaction.ts";
 import { conflict, notFound } from "../errors.ts";
 import { type Cleaner, type JobRun, LeaseLost, WorkerStopping } from "../jobs/job-run.ts";
@@ -43,16 +44,18 @@ const prepareAll = async (
   let done = 0;
   // One block is written while the next is read and derived.
   let writing = Promise.resolve();
+  let [lines, spare] = [new LineBuffer(), new LineBuffer()];
   await run.progress(0, plan.total, "Deriving", "stars");
   try {
     for await (const ids of plan.stars()) {
-      const prepared = prepareBlock(basis, await readStarBlock(run, basis, ids), fingerprint);
+      const prepared = prepareBlock(basis, await readStarBlock(run, basis, ids), fingerprint, lines);
       changes.added += prepared.added;
       changes.ended += prepared.ended;
       await writing;
       await run.progress(done, plan.total, "Deriving", "stars");
       writing = writeBlock(run, basis, prepared);
       writing.catch(() => undefined);
+      [lines, spare] = [spare, lines];
       done += ids.length;
     }
   } finally {

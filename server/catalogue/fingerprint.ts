@@ -1,4 +1,4 @@
-import { createHash } from "node:crypto";
+import { hash } from "node:crypto";
 
 /** 256 bits in parts of 32, the lowest first. */
 const PARTS = 8;
@@ -18,7 +18,7 @@ export class Fingerprint {
     if (before !== undefined) this.sum(Buffer.from(before, "hex"), 1);
   }
 
-  add(row: string): void {
+  add(row: string | Uint8Array): void {
     this.sum(hashOf(row), 1);
   }
 
@@ -33,9 +33,9 @@ export class Fingerprint {
       .join("");
   }
 
-  private sum(hash: Buffer, sign: 1 | -1): void {
+  private sum(digest: Buffer, sign: 1 | -1): void {
     for (let i = 0; i < PARTS; i++)
-      this.parts[i] = (this.parts[i] ?? 0) + sign * hash.readUInt32BE(4 * (PARTS - 1 - i));
+      this.parts[i] = (this.parts[i] ?? 0) + sign * digest.readUInt32BE(4 * (PARTS - 1 - i));
     if (++this.pending >= CARRY_EVERY) this.carry();
   }
 
@@ -50,4 +50,4 @@ export class Fingerprint {
   }
 }
 
-const hashOf = (row: string): Buffer => createHash("sha256").update(row).digest();
+const hashOf = (row: string | Uint8Array): Buffer => hash("sha256", row, "buffer");

@@ -1,9 +1,10 @@
 import type { RecipeSettings } from "#shared/science/recipes.ts";
-import { bulkInsertLines, encodeRow, type Value } from "../database/bulk.ts";
+import { bulkInsertBuffer, encodeRow, type Value } from "../database/bulk.ts";
+import type { LineBuffer } from "../database/line-buffer.ts";
 import { readArrays } from "../database/rows.ts";
 import type { JobRun } from "../jobs/job-run.ts";
 import { adopt, GIVEN } from "./adopt.ts";
-import { deriveLines, STAR_VALUES } from "./derive-rows.ts";
+import { deriveRows, STAR_VALUES } from "./derive-rows.ts";
 import type { Fingerprint } from "./fingerprint.ts";
 
 /** Which extracts count for the edition being made, besides those committed. */
@@ -79,33 +80,48 @@ export const readStarBlock = async (run: JobRun, basis: Basis, ids: string[]): P
 
 /** What the next edition writes of a block, and which rows it takes the place of. */
 export interface PreparedBlock extends Changes {
-  lines: string[];
+  lines: LineBuffer;
   closed: string[];
 }
 
-/** Adopts and derives a block of stars: only those that come out differently get a new row. */
+/**
+ * Adopts and derives a block of stars: only those that come out differently get a new row.
+ *
+ * @param lines receives the new rows; what was in it before must have been written
+ */
 export const prepareBlock = (
   basis: Basis,
   { ids, entries, inForce }: StarBlock,
   fingerprint: Fingerprint,
+  lines: LineBuffer,
 ): PreparedBlock => {
+  lines.clear();
   const living = ids.filter((id) => entries.has(id));
-  const derived = deriveLines(
+  const writeStar = deriveRows(
     living.map((id) => adopt(entries.get(id) ?? [])),
     basis.recipe,
   );
-  const prepared: PreparedBlock = { lines: [], closed: [], added: 0, ended: 0 };
+  const prepared: PreparedBlock = { lines, closed: [], added: 0, ended: 0 };
   living.forEach((id, i) => {
-    const line = derived[i] ?? "";
+    const begin = lines.length;
+    lines.plain(basis.programmeId);
+    lines.plain(id);
+    lines.number(basis.edition + 1);
+    const values = lines.length + 1;
+    writeStar(i, lines);
+    const row = lines.view().subarray(values);
     const old = inForce.get(id);
-    if (old === line) return;
+    if (old !== undefined && row.equals(Buffer.from(old))) {
+      lines.rewind(begin);
+      return;
+    }
     if (old === undefined) prepared.added++;
     else {
       fingerprint.remove(old);
       prepared.closed.push(id);
     }
-    fingerprint.add(line);
-    prepared.lines.push(`${basis.programmeId}\t${id}\t${basis.edition + 1}\t${line}`);
+    fingerprint.add(row);
+    lines.endRow();
   });
   for (const id of ids) {
     const old = inForce.get(id);
@@ -129,5 +145,5 @@ export const writeBlock = async (
        WHERE programme_id = ? AND star_id IN (?) AND from_edition <= ? AND to_edition IS NULL`,
       [basis.edition + 1, basis.programmeId, closed, basis.edition],
     );
-  await bulkInsertLines(run.deps.db, "star", WRITTEN_COLUMNS, lines);
+  await bulkInsertBuffer(run.deps.db, "star", WRITTEN_COLUMNS, lines);
 };

@@ -30,7 +30,7 @@ const escapeText = (text: string): string =>
     : text;
 
 /** A value as a cell of the stream; doubles in the shortest form that reads back as the same bits. */
-export const encodeValue = (value: Value): string => {
+const encodeValue = (value: Value): string => {
   if (value === null) return "\\N";
   if (typeof value === "string") return escapeText(value);
   return Number.isFinite(value) ? String(value) : "\\N";
@@ -155,14 +155,6 @@ const write = async (
   await insert(db, table, columns, encoded.lines());
 };
 
-/** Writes rows that are encoded as lines. */
-export const bulkInsertLines = (
-  db: DataSource,
-  table: string,
-  columns: readonly string[],
-  lines: readonly string[],
-): Promise<void> => write(db, table, columns, ofLines(lines));
-
 /** Writes rows that are bytes already. The buffer may be filled again once this is done. */
 export const bulkInsertBuffer = (
   db: DataSource,
@@ -177,4 +169,4 @@ export const bulkInsert = (
   table: string,
   columns: readonly string[],
   rows: readonly Value[][],
-): Promise<void> => bulkInsertLines(db, table, columns, rows.map(encodeRow));
+): Promise<void> => write(db, table, columns, ofLines(rows.map(encodeRow)));

@@ -1,6 +1,7 @@
 const FIRST_BYTES = 1 << 20;
 const TAB = 9;
 const NEWLINE = 10;
+const ZERO = 48;
 const BACKSLASH = 92;
 
 /** Signs that mean something in the stream, with the letter that stands for each after a backslash. */
@@ -32,6 +33,12 @@ export class LineBuffer {
     return this.bytes.subarray(0, this.length);
   }
 
+  /** Takes back what was written from that length on, a row that was not needed. */
+  rewind(length: number): void {
+    this.length = length;
+    this.isFirst = true;
+  }
+
   blank(): void {
     this.begin(2);
     this.bytes[this.length++] = BACKSLASH;
@@ -40,7 +47,10 @@ export class LineBuffer {
 
   /** A double in the shortest form that reads back as the same bits; what is not finite is blank. */
   number(value: number): void {
-    if (Number.isFinite(value)) this.plain(String(value));
+    if (value >= 0 && value <= 9 && Number.isInteger(value)) {
+      this.begin(1);
+      this.bytes[this.length++] = ZERO + value;
+    } else if (Number.isFinite(value)) this.plain(String(value));
     else this.blank();
   }
 
