@@ -21,7 +21,7 @@ const arrayOf = (derived: StellarColumns, key: string): ArrayLike<number> => {
 };
 
 /** Writes the cells of a star's row after its keys, in the order of `STAR_VALUES`. */
-export type WriteStar = (index: number, lines: LineBuffer) => void;
+type WriteStar = (index: number, lines: LineBuffer) => void;
 
 const writeValue = (value: Value, lines: LineBuffer): void => {
   if (value === null) lines.blank();

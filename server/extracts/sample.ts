@@ -45,7 +45,7 @@ export interface Sample {
   cutLine: CsvRecord | null;
 }
 
-export const NO_META: TableMeta = { title: null, description: null, sources: [], frame: null };
+const NO_META: TableMeta = { title: null, description: null, sources: [], frame: null };
 
 /** A column of which the file says no more than its name. */
 export const namedColumn = (name: string): TableColumn => ({

@@ -5,7 +5,7 @@ import { galacticToIcrs } from "#shared/science/frames.ts";
 import { dateToIcrs } from "#shared/science/precession.ts";
 
 /** Writes the ICRS position of one in the file's frame: right ascension at 0 and declination at 1, degrees. */
-export type ToIcrs = (target: Float64Array, longitude: number, latitude: number) => void;
+type ToIcrs = (target: Float64Array, longitude: number, latitude: number) => void;
 
 const J2000 = 2000;
 
