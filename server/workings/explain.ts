@@ -60,9 +60,13 @@ const definitionOf = (derived: Derived, key: string): Definition | undefined => 
 /** Words for the sources of error, in the order of their vector. */
 const SOURCE_WORDS: Readonly<Record<SourceName, string>> = {
   parallax: "distance",
-  ks: "Ks magnitude",
   g: "G magnitude",
-  colour: "colour",
+  bp: "BP magnitude",
+  rp: "RP magnitude",
+  v: "V magnitude",
+  j: "J magnitude",
+  h: "H magnitude",
+  ks: "Ks magnitude",
   temperature: "temperature: as given, or scatter of its relation",
   gravity: "log g",
   iron: "[Fe/H]",
