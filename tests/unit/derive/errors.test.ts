@@ -182,6 +182,15 @@ describe("a magnitude that enters twice is one source", () => {
     expect(propagated / moved).toBeCloseTo(1, 3);
   });
 
+  test("Ks in the colour and in M Ks pulls temperature and radius in opposite ways", () => {
+    /** K7V of the mean sequence at 20 pc. */
+    const cool: Given = { ...star, g_mag: 9.075, ks_mag: 6.315 };
+    const byRadius: RecipeSettings = { ...recipe, luminosity: ["radius-and-temperature"] };
+    const { propagated, moved } = shares(cool, "ks_mag", 0.03, "luminosity", byRadius);
+    expect(derived(cool, byRadius).method("radius")).toBe("abs-ks-feh");
+    expect(propagated / moved).toBeCloseTo(1, 3);
+  });
+
   test("BP − RP of the bolometric correction owes nothing to V − J of the temperature", () => {
     const dwarf: Given = { ...PRACTICE_STARS.A, v_mag: 12.1, j_mag: 8.1, v_mag_err: 0.02, j_mag_err: 0.02 };
     const cool: Given = {
