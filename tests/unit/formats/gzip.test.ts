@@ -48,6 +48,18 @@ describe("a gzip file", () => {
     await expect(unpack(sum)).rejects.toMatchObject({ code: "gzip-broken" });
   });
 
+  test("may be filled up with zeros, but a member behind them is not lost silently", async () => {
+    expect(await unpack(Buffer.concat([PACKED, Buffer.alloc(5000)]))).toBe(TEXT);
+    for (const behind of [
+      [0, 1],
+      [...Buffer.from("words that are not packed")],
+      [...Buffer.alloc(5000), ...gzipSync("lost\n")],
+    ])
+      await expect(unpack(Buffer.concat([PACKED, Buffer.from(behind)]))).rejects.toMatchObject({
+        code: "gzip-broken",
+      });
+  });
+
   test("is stopped at the limit, which is named", async () => {
     const limits = { bytes: 3 * 1024 ** 2, ratio: 1e9, ratioFrom: 0 };
     await expect(unpack(gzipSync("x".repeat(4 * 1024 ** 2)), limits)).rejects.toThrow(/more than 3 MB/);
