@@ -67,6 +67,7 @@ export const newScratch = () => ({
   isNotDwarf: false,
 
   teffGiven: Number.NaN,
+  teffGivenError: Number.NaN,
   teff: Number.NaN,
   correctionKs: Number.NaN,
   correctionG: Number.NaN,

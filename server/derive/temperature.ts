@@ -226,12 +226,12 @@ const tryCool = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => 
 /** A temperature of 0 K or less is none. */
 const tryGiven = (star: Scratch, given: Inputs, recipe: RecipeSettings, out: Slots): boolean => {
   star.teffGiven = at(given.teff, star.row);
+  star.teffGivenError = errorAt(given.teffError, star.row);
   star.teff = GIVEN.compute(star, recipe);
   if (Number.isNaN(star.teff)) return false;
-  const error = errorAt(given.teffError, star.row);
   star.teffErrors.fill(0);
-  star.teffErrors[SOURCE.temperature] = error / star.teff;
-  out.teff.given(star.row, star.teff, error);
+  star.teffErrors[SOURCE.temperature] = star.teffGivenError / star.teff;
+  out.teff.given(star.row, star.teff, star.teffGivenError);
   out.teff.method(star.row, "given");
   return true;
 };

@@ -230,10 +230,10 @@ const instrumentWorking = ({ assessment, star }: Seen, step: SeenStep): Working 
     blank: blankOf(reason && assessment[reason]),
     method: "",
     formula: step.formula,
-    substituted: substitute(step.formula, numbersOf(step.inputs, [])),
+    substituted: substitute(step.formula, numbersOf(step.inputs, step.constants ?? [])),
     isRoot: false,
     inputs: [...step.inputs],
-    constants: [],
+    constants: [...(step.constants ?? [])],
     ranges: [],
     scatter: "",
     errorParts:
