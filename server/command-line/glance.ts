@@ -1,7 +1,7 @@
 import type { Sample } from "../extracts/sample.ts";
 import type { CsvRecord } from "../formats/csv-splitter.ts";
+import type { RecognisedTable } from "../formats/open-table.ts";
 import type { ColumnValues, TableFinding, TableHeader } from "../formats/table.ts";
-import type { OpenedTable } from "./open-table.ts";
 
 /** What a first reading of the whole file shows: its header, and rows spread over all of it. */
 export interface Glance {
@@ -39,7 +39,10 @@ class Spread {
  * Reads the table to its end and keeps some of it. A file that breaks in the middle is found out here, before anything
  * is written, and units are judged by rows of all its parts.
  */
-export const glanceAt = async ({ reader, decimalMark }: OpenedTable): Promise<Glance> => {
+export const glanceAt = async ({
+  reader,
+  decimalMark,
+}: Pick<RecognisedTable, "reader" | "decimalMark">): Promise<Glance> => {
   const spread = new Spread();
   for await (const { rows, columns } of reader.batches)
     for (let row = 0; row < rows; row++)

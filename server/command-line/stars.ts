@@ -3,9 +3,10 @@ import { KEPT } from "#shared/catalogue/header-spellings.ts";
 import { IdentifierSet } from "../catalogue/identifier-set.ts";
 import type { Value } from "../database/bulk.ts";
 import { rowMapper } from "../extracts/map-row.ts";
+import type { RecognisedTable } from "../formats/open-table.ts";
 import type { ColumnValues, RefusedRow, RowBatch, TableFinding } from "../formats/table.ts";
 import { cellText, glanceAt } from "./glance.ts";
-import { type OpenedTable, openTable } from "./open-table.ts";
+import { openTable } from "./open-table.ts";
 import { readPlanFile } from "./plan-file.ts";
 import { understand } from "./understand.ts";
 
@@ -30,7 +31,7 @@ export class StarRows {
   private readonly used: readonly number[];
 
   constructor(
-    private readonly table: OpenedTable,
+    private readonly table: RecognisedTable,
     plan: ReadingPlan,
   ) {
     this.map = rowMapper(plan);
