@@ -102,6 +102,10 @@ const duration = (star: AssessedStar): WorkingInput =>
     "transit_duration",
   );
 
+/** Half the angle from contact to contact: outer (+) or inner (−), which a transit that grazes does not have. */
+const crossing = (sign: "+" | "-"): string =>
+  `asin(min(1, sqrt(max(0, (1 ${sign} R_box / (k_E * R))^2 - b^2) / (a_R^2 - b^2))))`;
+
 /** Box first: the trapezoid of a planet of that radius gives the time that counts. */
 const trapezoidSteps = (seen: Seen): SeenStep[] => {
   const { star, assessment, card, campaign, recipe } = seen;
@@ -124,8 +128,7 @@ const trapezoidSteps = (seen: Seen): SeenStep[] => {
     label: "time that carries the signal, (T14 + 2 T23) / 3",
     unit: "h",
     value: trapezoidDuration(24 * star.earthPeriod, a, k, b),
-    formula:
-      "24 * P_E / pi / 3 * (asin(sqrt((1 + R_box / (k_E * R))^2 - b^2) / sqrt(a_R^2 - b^2)) + 2 * asin(sqrt((1 - R_box / (k_E * R))^2 - b^2) / sqrt(a_R^2 - b^2)))",
+    formula: `24 * P_E / pi / 3 * (${crossing("+")} + 2 * ${crossing("-")})`,
     inputs: [
       input("derived", "P_E", "period at Earth's insolation", "d", star.earthPeriod, "earth_period"),
       derived(boxed),
