@@ -95,16 +95,19 @@ export const assessStar = (
     scaledAxis(star.earthDistance, radius),
     duration,
   );
-  result.rMinError = result.rMin * Math.hypot(star.reachError, 0.5 * noiseError(star, card, result.noise1h));
+  result.rMinError = result.rMin * Math.hypot(star.reachError, reachErrorByNoise(star, card, result.noise1h));
   return result;
 };
 
 /** Half the step of magnitude over which the noise is seen to change, mag. */
 const STEP_MAG = 0.01;
 
-/** Relative error of the noise by that of the magnitude; a magnitude without one counts as exact, as the card does. */
-const noiseError = (star: AssessedStar, card: CardSettings, noise: number): number =>
-  star.magnitudeError > 0 ? (noiseSlope(card, star.magnitude) * star.magnitudeError) / noise : 0;
+/**
+ * Relative error of the smallest planet by that of the magnitude, through the noise; a magnitude without one counts as
+ * exact, as the card does.
+ */
+export const reachErrorByNoise = (star: AssessedStar, card: CardSettings, noise: number): number =>
+  star.magnitudeError > 0 ? (0.5 * noiseSlope(card, star.magnitude) * star.magnitudeError) / noise : 0;
 
 /** ppm per mag. */
 const noiseSlope = (card: CardSettings, magnitude: number): number =>

@@ -1,4 +1,4 @@
-import type { WorkingInput } from "#shared/api/workings.ts";
+import type { Working, WorkingInput } from "#shared/api/workings.ts";
 import type { CampaignSettings, CardSettings } from "#shared/science/cards.ts";
 import type { RecipeSettings } from "#shared/science/recipes.ts";
 import type { AssessedStar, Assessment } from "./assess.ts";
@@ -21,6 +21,7 @@ export interface SeenStep {
   readonly value: number;
   readonly formula: string;
   readonly inputs: readonly WorkingInput[];
+  readonly constants?: Working["constants"];
   readonly reference: string;
 }
 

@@ -57,13 +57,19 @@ const noiseInput = (seen: Seen): WorkingInput =>
     : derived(signalNoiseStep(seen));
 
 const planetInputs = (seen: Seen): WorkingInput[] => [
-  ofCard("k_E", "solar radius in Earth radii", "", EARTH_RADII_PER_SOLAR),
   input("derived", "R", "radius of the star", "solRad", seen.star.radius, "radius"),
   ofCard("SNR", "signal-to-noise ratio of a detection", "", seen.campaign.snrLimit),
   noiseInput(seen),
   input("derived", "N", "transits in the campaign", "", seen.assessment.transits, "transits"),
   share(seen.star),
 ];
+
+const EARTHS = {
+  symbol: "k_E",
+  value: EARTH_RADII_PER_SOLAR,
+  unit: "earthRad",
+  source: "Nominal solar radius in equatorial radii of the Earth, IAU 2015 Resolution B3",
+};
 
 const JENKINS = "Jenkins 2002, ApJ 575, 493: the multiple-event statistic, solved for the radius.";
 
@@ -82,6 +88,7 @@ const boxStep = (
   value,
   formula: PLANET,
   inputs: [...planetInputs(seen), weighed],
+  constants: [EARTHS],
   reference: JENKINS,
 });
 
@@ -94,6 +101,10 @@ const duration = (star: AssessedStar): WorkingInput =>
     star.duration,
     "transit_duration",
   );
+
+/** Half the angle from contact to contact: outer (+) or inner (−), which a transit that grazes does not have. */
+const crossing = (sign: "+" | "-"): string =>
+  `asin(min(1, sqrt(max(0, (1 ${sign} R_box / (k_E * R))^2 - b^2) / (a_R^2 - b^2))))`;
 
 /** Box first: the trapezoid of a planet of that radius gives the time that counts. */
 const trapezoidSteps = (seen: Seen): SeenStep[] => {
@@ -117,12 +128,10 @@ const trapezoidSteps = (seen: Seen): SeenStep[] => {
     label: "time that carries the signal, (T14 + 2 T23) / 3",
     unit: "h",
     value: trapezoidDuration(24 * star.earthPeriod, a, k, b),
-    formula:
-      "24 * P_E / pi / 3 * (asin(sqrt((1 + R_box / (k_E * R))^2 - b^2) / sqrt(a_R^2 - b^2)) + 2 * asin(sqrt((1 - R_box / (k_E * R))^2 - b^2) / sqrt(a_R^2 - b^2)))",
+    formula: `24 * P_E / pi / 3 * (${crossing("+")} + 2 * ${crossing("-")})`,
     inputs: [
       input("derived", "P_E", "period at Earth's insolation", "d", star.earthPeriod, "earth_period"),
       derived(boxed),
-      ofCard("k_E", "solar radius in Earth radii", "", EARTH_RADII_PER_SOLAR),
       input("derived", "R", "radius of the star", "solRad", star.radius, "radius"),
       input(
         "recipe",
@@ -133,6 +142,7 @@ const trapezoidSteps = (seen: Seen): SeenStep[] => {
       ),
       input("derived", "a_R", "semi-major axis over stellar radius", "", a, "scaled_axis"),
     ],
+    constants: [EARTHS],
     reference:
       "Kipping 2023, arXiv:2305.06790, for the weight; Winn 2010, arXiv:1001.2010, for the durations.",
   };

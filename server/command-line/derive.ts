@@ -1,13 +1,16 @@
 import { once } from "node:events";
+import { resolve } from "node:path";
 import type { Writable } from "node:stream";
 import { unprocessable } from "../errors.ts";
 import { csvLine } from "../handover/csv.ts";
 import { ecsvHeader, ecsvLine, type MetaValue } from "../handover/ecsv.ts";
 import { needed, oneOf, oneOperand, readOptions } from "./options.ts";
 import { OUTPUT_COLUMNS } from "./output-columns.ts";
+import { isSameFile } from "./same-file.ts";
 import { type Named, type NamedRecipe, readCampaign, readCard, readRecipe } from "./settings-files.ts";
 import { type RowCounts, readStars, type StarRows } from "./stars.ts";
 import { type Surroundings, write } from "./surroundings.ts";
+import { usage } from "./trouble.ts";
 import { beginFile } from "./unfinished-file.ts";
 import { type Settings, type WorkedOut, workOut } from "./worked-out.ts";
 
@@ -114,10 +117,17 @@ const summary = (stars: StarRows): string => {
   return [line, ...first, more, ...notes].join("");
 };
 
+/** The extract is the only copy that the command knows of. */
+const refuseToReplace = async (folder: string, file: string, out: string | undefined): Promise<void> => {
+  if (out === undefined || !(await isSameFile(resolve(folder, file), resolve(folder, out)))) return;
+  throw usage(`--out names the extract itself, ${file}.`, "Name another file: the extract would be lost.");
+};
+
 export const derive = async (args: readonly string[], at: Surroundings): Promise<void> => {
   const { values, positionals } = readOptions(args, OPTIONS, "derive");
   const file = oneOperand(positionals, "The file to read", "derive");
   const format = oneOf(values.format, ["ecsv", "csv"], "format");
+  await refuseToReplace(at.folder, file, values.out);
   const choice: Choice = {
     card: await readCard(at.folder, needed(values.card, "card", "derive")),
     campaign: await readCampaign(at.folder, needed(values.campaign, "campaign", "derive")),

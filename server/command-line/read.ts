@@ -1,16 +1,15 @@
 import { once } from "node:events";
-import { createReadStream } from "node:fs";
-import { open } from "node:fs/promises";
-import { basename, resolve } from "node:path";
+import { basename } from "node:path";
 import type { Writable } from "node:stream";
-import { AppError, unprocessable } from "../errors.ts";
+import { AppError } from "../errors.ts";
 import { openTable, type RecognisedTable } from "../formats/open-table.ts";
+import { bytesOf } from "./open-table.ts";
 import { oneOf, oneOperand, readOptions } from "./options.ts";
 import { readPlanFile } from "./plan-file.ts";
 import { ReadCounts, readReport } from "./read-report.ts";
 import { rowLines, rowsHeader } from "./read-rows.ts";
 import { type Surroundings, write } from "./surroundings.ts";
-import { asks, systemWords, usage } from "./trouble.ts";
+import { asks, usage } from "./trouble.ts";
 import { beginFile } from "./unfinished-file.ts";
 
 export const READ_HELP = `Says what the readers make of a file, without taking its columns for anything yet.
@@ -38,25 +37,6 @@ const OPTIONS = {
   rows: { type: "boolean", default: false },
   format: { type: "string" },
 } as const;
-
-/** The bytes of a file; one that cannot be opened is said in words. */
-const bytesOf = async (folder: string, name: string): Promise<AsyncIterable<Buffer>> => {
-  const path = resolve(folder, name);
-  try {
-    const file = await open(path);
-    const isFolder = (await file.stat()).isDirectory();
-    await file.close();
-    if (isFolder) throw Object.assign(new Error("a folder"), { code: "EISDIR" });
-    return createReadStream(path);
-  } catch (error) {
-    const why = systemWords(error);
-    if (why === undefined) throw error;
-    throw unprocessable("no-file", `The file ${path} cannot be read: ${why}.`, {
-      hint: "Check its name and from which folder it is named.",
-      cause: error,
-    });
-  }
-};
 
 /** Which of several tables a file is, the person must say. */
 const asQuestion = (error: unknown): unknown =>

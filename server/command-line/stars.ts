@@ -2,9 +2,10 @@ import type { ReadingPlan } from "#shared/api/extracts.ts";
 import { IdentifierSet } from "../catalogue/identifier-set.ts";
 import type { Value } from "../database/bulk.ts";
 import { EntryMapper } from "../extracts/entry-mapper.ts";
+import type { RecognisedTable } from "../formats/open-table.ts";
 import type { RefusedRow, TableFinding } from "../formats/table.ts";
 import { glanceAt } from "./glance.ts";
-import { type OpenedTable, openTable } from "./open-table.ts";
+import { openTable } from "./open-table.ts";
 import { readPlanFile } from "./plan-file.ts";
 import { understand } from "./understand.ts";
 
@@ -28,7 +29,7 @@ export class StarRows {
   private readonly mapper: EntryMapper;
 
   constructor(
-    private readonly table: OpenedTable,
+    private readonly table: RecognisedTable,
     plan: ReadingPlan,
   ) {
     this.mapper = new EntryMapper(plan);

@@ -6,6 +6,7 @@ import {
   EXTINCTION_COEFFICIENTS,
   type ExtinctionBand,
   extinction,
+  extinctionSlope,
 } from "#shared/science/extinction.ts";
 import type { DistanceMethod, RecipeSettings } from "#shared/science/recipes.ts";
 import { byMethod, type Definition, type DefinitionOf, only } from "./definition.ts";
@@ -114,6 +115,15 @@ export const perExcess = (star: Scratch, band: ExtinctionBand | "v"): number => 
   return band === "v" ? V_PER_EXCESS : extinctionOf(star, band) / star.ebv;
 };
 
+/**
+ * Change of the extinction in a band per E(B − V); 0 where the excess has no error. What the errors of BP and RP add through
+ * the coefficients is left out: it is a few percent of what they do to the colour itself.
+ */
+export const dimmingSlope = (star: Scratch, band: ExtinctionBand | "v"): number => {
+  if (star.ebvError === 0 && star.ebvDistanceError === 0) return 0;
+  return band === "v" ? V_PER_EXCESS : extinctionSlope(band, star.ebv, star.bp - star.rp);
+};
+
 /** Why a parallax gives no distance. */
 const distanceReason = (parallax: number, error: number): BlankKey => {
   if (Number.isNaN(parallax)) return "needs-parallax";
@@ -187,9 +197,12 @@ const writeDistance = (star: Scratch, recipe: RecipeSettings, out: Slots): void 
 const redden = (star: Scratch, given: Inputs, rule: RecipeSettings["extinction"]): void => {
   star.ebv = 0;
   star.ebvError = 0;
+  star.ebvDistanceError = 0;
   if (rule.rule === "constant") star.ebv = rule.ebv;
-  else if (rule.rule === "by-distance") star.ebv = (rule.ebvPerKpc * star.distance) / 1000;
-  else if (rule.rule === "column") {
+  else if (rule.rule === "by-distance") {
+    star.ebv = (rule.ebvPerKpc * star.distance) / 1000;
+    star.ebvDistanceError = star.ebv * star.distanceError;
+  } else if (rule.rule === "column") {
     const ebv = at(given.ebv, star.row);
     if (Number.isNaN(ebv)) return;
     star.ebv = ebv;
@@ -203,7 +216,6 @@ const dim = (star: Scratch, recipe: RecipeSettings): void => {
   star.extinctionG = EXTINCTION_G.compute(star, recipe);
   star.bpRpPerExcess = perExcess(star, "bp") - perExcess(star, "rp");
   star.bpRp = BP_RP.compute(star, recipe);
-  star.bpRpError = Math.sqrt(star.bpError * star.bpError + star.rpError * star.rpError);
 };
 
 const writeAbsoluteKs = (star: Scratch, out: Slots): void => {

@@ -13,12 +13,16 @@ export const judgeDwarf = (star: Scratch): void => {
   star.isDwarf = !star.isNotDwarf && (star.hasLogg || star.absG >= brightest);
 };
 
+/** Whether only its temperature keeps a star from the relations for cool dwarfs. */
+export const isTooHot = (star: Scratch, recipe: RecipeSettings): boolean =>
+  star.teff > recipe.ranges.hottestCoolDwarfK && isInRange(star, recipe);
+
+const isInRange = (star: Scratch, { ranges }: RecipeSettings): boolean =>
+  star.absKs >= ranges.brightestAbsKs && star.absKs <= ranges.faintestAbsKs;
+
 /**
  * Whether the relations for cool dwarfs may serve, within the recipe's magnitudes; a star of unknown temperature is judged
  * by M_Ks alone.
  */
-export const isCool = (star: Scratch, { ranges }: RecipeSettings): boolean =>
-  !star.isNotDwarf &&
-  !(star.teff > ranges.hottestCoolDwarfK) &&
-  star.absKs >= ranges.brightestAbsKs &&
-  star.absKs <= ranges.faintestAbsKs;
+export const isCool = (star: Scratch, recipe: RecipeSettings): boolean =>
+  !star.isNotDwarf && !(star.teff > recipe.ranges.hottestCoolDwarfK) && isInRange(star, recipe);

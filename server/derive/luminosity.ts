@@ -18,6 +18,8 @@ import {
   bolometricCorrectionG,
   bolometricCorrectionGSlope,
 } from "#shared/science/sunlike.ts";
+import { dimmingSlope } from "./brightness.ts";
+import { addColour, BP_RP_BANDS } from "./colour-errors.ts";
 import { byMethod, type Definition, type DefinitionOf, only } from "./definition.ts";
 import { isCool } from "./dwarf.ts";
 import { polynomial, shifted } from "./formula-text.ts";
@@ -106,7 +108,7 @@ const lightFromG = (star: Scratch, recipe: RecipeSettings): boolean => {
   if (Number.isNaN(luminosity)) return false;
   star.luminosity = luminosity * (1 + LIGHT_PER_MAG * BC_G_SCATTER * star.deviates.light);
   const errors = star.luminosityErrors;
-  setMagnitudeErrors(errors, LIGHT_PER_MAG, star, SOURCE.g, star.gError, EXTINCTION_COEFFICIENTS.g[0]);
+  setMagnitudeErrors(errors, LIGHT_PER_MAG, star, SOURCE.g, star.gError, dimmingSlope(star, "g"));
   errors[SOURCE.light] = LIGHT_PER_MAG * BC_G_SCATTER;
   addScaled(errors, LIGHT_PER_MAG * bolometricCorrectionGSlope(star.teff) * star.teff, star.teffErrors);
   return true;
@@ -120,7 +122,7 @@ const lightFromKs = (star: Scratch, recipe: RecipeSettings): boolean => {
   star.luminosity = luminosity * (1 + LIGHT_PER_MAG * BC_KS_SCATTER * star.deviates.light);
   const errors = star.luminosityErrors;
   setMagnitudeErrors(errors, LIGHT_PER_MAG, star, SOURCE.ks, star.ksError, EXTINCTION_COEFFICIENTS.ks[0]);
-  errors[SOURCE.colour] = LIGHT_PER_MAG * bolometricCorrectionKsSlope(star.bpRp) * star.bpRpError;
+  addColour(errors, LIGHT_PER_MAG * bolometricCorrectionKsSlope(star.bpRp), star, BP_RP_BANDS);
   errors[SOURCE.light] = LIGHT_PER_MAG * BC_KS_SCATTER;
   return true;
 };

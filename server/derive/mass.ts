@@ -22,7 +22,7 @@ import {
   spectralMassTeffSlope,
 } from "#shared/science/sunlike.ts";
 import { byMethod, type Definition, type DefinitionOf, only } from "./definition.ts";
-import { isCool } from "./dwarf.ts";
+import { isCool, isTooHot } from "./dwarf.ts";
 import { percent, polynomial, shifted, term } from "./formula-text.ts";
 import { combine, SOURCE, scale, setMagnitudeErrors } from "./relative-error.ts";
 import type { Scratch } from "./scratch.ts";
@@ -131,7 +131,7 @@ export const deriveMass = (star: Scratch, recipe: RecipeSettings, out: Slots): v
   star.mass = Number.NaN;
   if (star.isNotDwarf) out.mass.blank(star.row, "not-dwarf-like");
   else if (out.abs_ks.isBlank(star.row)) out.mass.blankLike(star.row, out.abs_ks);
-  else out.mass.blank(star.row, "outside-mass-relation");
+  else out.mass.blank(star.row, isTooHot(star, recipe) ? "hotter-than-cool-dwarfs" : "outside-mass-relation");
 };
 
 export const deriveDensity = (star: Scratch, recipe: RecipeSettings, out: Slots): void => {

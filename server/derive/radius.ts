@@ -23,7 +23,7 @@ import {
   spectralRadiusTeffSlope,
 } from "#shared/science/spectral-radius.ts";
 import { byMethod, type Definition, type DefinitionOf } from "./definition.ts";
-import { isCool } from "./dwarf.ts";
+import { isCool, isTooHot } from "./dwarf.ts";
 import { percent, polynomial, term } from "./formula-text.ts";
 import { lightByCorrection } from "./luminosity.ts";
 import { combine, SOURCE, scale, setMagnitudeErrors } from "./relative-error.ts";
@@ -152,5 +152,9 @@ export const deriveRadius = (star: Scratch, recipe: RecipeSettings, out: Slots):
   star.radius = Number.NaN;
   if (star.isNotDwarf) out.radius.blank(star.row, "not-dwarf-like");
   else if (out.abs_ks.isBlank(star.row)) out.radius.blankLike(star.row, out.abs_ks);
-  else out.radius.blank(star.row, "outside-radius-relation");
+  else
+    out.radius.blank(
+      star.row,
+      isTooHot(star, recipe) ? "hotter-than-cool-dwarfs" : "outside-radius-relation",
+    );
 };

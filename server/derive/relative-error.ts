@@ -6,23 +6,28 @@
  */
 export const SOURCE = {
   parallax: 0,
-  ks: 1,
-  g: 2,
-  colour: 3,
+  /** Magnitudes one by one: a colour and an absolute magnitude may share one. */
+  g: 1,
+  bp: 2,
+  rp: 3,
+  v: 4,
+  j: 5,
+  h: 6,
+  ks: 7,
   /** A given temperature, or the scatter of the relation that gave it. */
-  temperature: 4,
-  gravity: 5,
-  iron: 6,
+  temperature: 8,
+  gravity: 9,
+  iron: 10,
   /** Scatter of the relations that gave radius, mass and luminosity. */
-  radius: 7,
-  mass: 8,
-  light: 9,
-  extinction: 10,
+  radius: 11,
+  mass: 12,
+  light: 13,
+  extinction: 14,
 } as const;
 
 export type SourceName = keyof typeof SOURCE;
 
-const SOURCES = 11;
+const SOURCES = 15;
 
 export type ErrorVector = Float64Array;
 
@@ -57,15 +62,17 @@ export const PER_PARALLAX = 5 / Math.LN10;
 interface MagnitudeErrors {
   /** Relative error of the distance. */
   readonly distanceError: number;
-  /** Error of E(B − V), mag. */
+  /** Error of E(B − V), mag, of its own. */
   readonly ebvError: number;
+  /** Error of E(B − V), mag, that it owes to the distance. */
+  readonly ebvDistanceError: number;
 }
 
 /**
  * Sets `target` to the vector of a quantity that changes by `slope` (relative) per magnitude of an absolute magnitude.
  *
  * @param own source of the apparent magnitude, and its error, mag
- * @param perExcess extinction in the band per E(B − V)
+ * @param perExcess change of the extinction in the band per E(B − V)
  */
 export const setMagnitudeErrors = (
   target: ErrorVector,
@@ -76,7 +83,7 @@ export const setMagnitudeErrors = (
   perExcess: number,
 ): void => {
   target.fill(0);
-  target[SOURCE.parallax] = slope * PER_PARALLAX * star.distanceError;
+  target[SOURCE.parallax] = slope * (PER_PARALLAX * star.distanceError + perExcess * star.ebvDistanceError);
   target[own] = slope * ownError;
   target[SOURCE.extinction] = -slope * perExcess * star.ebvError;
 };

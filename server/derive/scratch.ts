@@ -36,6 +36,8 @@ export const newScratch = () => ({
   /** Colour excess E(B − V), mag. */
   ebv: 0,
   ebvError: 0,
+  /** What the colour excess owes to the error of the distance, mag; a nearer star is less reddened. */
+  ebvDistanceError: 0,
   /** BP − RP with a first share of the reddening taken off: by it the extinction in G, BP and RP goes. */
   firstColour: Number.NaN,
   extinctionKs: 0,
@@ -45,12 +47,10 @@ export const newScratch = () => ({
   absG: Number.NaN,
   /** BP − RP without reddening. */
   bpRp: Number.NaN,
-  bpRpError: Number.NaN,
   /** Its reddening per E(B − V). */
   bpRpPerExcess: 0,
-  /** The colour, without reddening, that gives the temperature, and its error. */
+  /** The colour, without reddening, that gives the temperature. */
   colour: Number.NaN,
-  colourError: Number.NaN,
   /** Colour per mag of E(B − V). */
   colourPerExcess: 0,
 
@@ -67,6 +67,7 @@ export const newScratch = () => ({
   isNotDwarf: false,
 
   teffGiven: Number.NaN,
+  teffGivenError: Number.NaN,
   teff: Number.NaN,
   correctionKs: Number.NaN,
   correctionG: Number.NaN,

@@ -100,7 +100,7 @@ export const SYMBOLS = {
     "K",
     "teff",
     (s) => s.teffGiven,
-    () => Number.NaN,
+    (s) => s.teffGivenError,
   ),
   logg: {
     name: "log g",

@@ -9,7 +9,6 @@ import {
   coolDwarfTeffScatter,
 } from "#shared/science/cool-dwarf-colours.ts";
 import { COOL_DWARF_TEFF_UNIT_K } from "#shared/science/cool-dwarfs.ts";
-import type { ExtinctionBand } from "#shared/science/extinction.ts";
 import {
   COOL_COLOURS,
   type CoolColour,
@@ -30,6 +29,7 @@ import {
 } from "#shared/science/sunlike-colours.ts";
 import { BRIGHTEST_MAG, FAINTEST_SATURATED_G } from "#shared/science/survey-photometry.ts";
 import { perExcess } from "./brightness.ts";
+import { addColour, type Band, type Colour } from "./colour-errors.ts";
 import { byMethod, type Definition, type DefinitionOf } from "./definition.ts";
 import { polynomial, sum, term } from "./formula-text.ts";
 import { at, errorAt, type Inputs } from "./inputs.ts";
@@ -37,8 +37,6 @@ import { SOURCE } from "./relative-error.ts";
 import type { Scratch } from "./scratch.ts";
 import type { Slots } from "./slots.ts";
 import type { SymbolKey } from "./symbols.ts";
-
-type Band = ExtinctionBand | "v";
 
 const BAND_SYMBOLS = {
   g: "G",
@@ -64,7 +62,7 @@ const sunlikeMethod = (colour: SunlikeColour): MethodKey =>
 /** One colour and the temperature that stars like the Sun have by it. */
 interface SunlikeStep {
   readonly row: SunlikeRow;
-  readonly bands: readonly [Band, Band];
+  readonly bands: Colour;
   readonly colour: Definition;
   readonly teff: Definition;
 }
@@ -77,7 +75,7 @@ const sunlikeFormula = (a: SunlikeRow["coefficients"]): string =>
     ...[term(a[13], "FeH", "C^3"), term(a[14], "logg", "FeH", "C")],
   );
 
-const colourDefinition = (method: MethodKey, [first, second]: readonly [Band, Band]): Definition => ({
+const colourDefinition = (method: MethodKey, [first, second]: Colour): Definition => ({
   method,
   formula: `${BAND_SYMBOLS[first]} - ${BAND_SYMBOLS[second]} - R_C * E_BV`,
   inputs: [BAND_SYMBOLS[first], BAND_SYMBOLS[second], "R_C", "E_BV"],
@@ -115,7 +113,7 @@ const SUNLIKE = Object.fromEntries(SUNLIKE_COLOURS.map((key) => [key, sunlikeSte
 /** One colour and the temperature that cool dwarfs have by it. */
 interface CoolStep {
   readonly row: CoolDwarfRow;
-  readonly bands: readonly [Band, Band];
+  readonly bands: Colour;
   readonly colour: Definition;
   readonly teff: Definition;
 }
@@ -154,10 +152,9 @@ export const TEMPERATURE_DEFINITIONS = {
 } satisfies Record<string, DefinitionOf>;
 
 /** Takes the temperature, with what it owes to the colour and to its own error (K); the caller adds other sources. */
-const adopt = (star: Scratch, teff: number, slope: number, ownError: number): void => {
+const adopt = (star: Scratch, bands: Colour, teff: number, slope: number, ownError: number): void => {
   star.teffErrors.fill(0);
-  star.teffErrors[SOURCE.colour] = (slope * star.colourError) / teff;
-  star.teffErrors[SOURCE.extinction] = (-slope * star.colourPerExcess * star.ebvError) / teff;
+  addColour(star.teffErrors, slope / teff, star, bands);
   star.teffErrors[SOURCE.temperature] = ownError / teff;
 };
 
@@ -174,26 +171,12 @@ const readColour = (
   const [first, second] = bands;
   star.colourPerExcess = perExcess(star, first) - perExcess(star, second);
   star.colour = colour.compute(star, recipe);
-  const a = star[ERROR_KEYS[first]];
-  const b = star[ERROR_KEYS[second]];
-  star.colourError = Math.sqrt(a * a + b * b);
 };
-
-/** Made once: names put together in the loop would cost more than the rest of it. */
-const ERROR_KEYS = {
-  g: "gError",
-  bp: "bpError",
-  rp: "rpError",
-  v: "vError",
-  j: "jError",
-  h: "hError",
-  ks: "ksError",
-} as const satisfies Record<Band, keyof Scratch>;
 
 /** Bright stars saturate the survey; G needs a correction up to 8 that is not applied here. */
 const BRIGHTEST: Readonly<Record<Band, number>> = { ...BRIGHTEST_MAG, g: FAINTEST_SATURATED_G, v: -Infinity };
 
-const isColourSafe = (star: Scratch, [first, second]: readonly [Band, Band]): boolean =>
+const isColourSafe = (star: Scratch, [first, second]: Colour): boolean =>
   star[first] >= BRIGHTEST[first] && star[second] >= BRIGHTEST[second];
 
 const trySunlikeColour = (star: Scratch, step: SunlikeStep, recipe: RecipeSettings): boolean => {
@@ -202,7 +185,7 @@ const trySunlikeColour = (star: Scratch, step: SunlikeStep, recipe: RecipeSettin
   if (!(teff >= recipe.ranges.coolestSunlikeK)) return false;
   const { colour, logg, feh } = star;
   star.teff = teff + SUNLIKE_TEFF_SCATTER_K * star.deviates.temperature;
-  adopt(star, teff, sunlikeTeffColourSlope(step.row, colour, logg, feh), SUNLIKE_TEFF_SCATTER_K);
+  adopt(star, step.bands, teff, sunlikeTeffColourSlope(step.row, colour, logg, feh), SUNLIKE_TEFF_SCATTER_K);
   star.teffErrors[SOURCE.gravity] = (sunlikeTeffGravitySlope(step.row, colour, feh) * star.loggError) / teff;
   star.teffErrors[SOURCE.iron] = (sunlikeTeffIronSlope(step.row, colour, logg) * star.fehError) / teff;
   star.isAssumed = !star.hasLogg || !star.hasFeh;
@@ -230,10 +213,10 @@ const tryCool = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => 
     if (!hasBands(star, step.bands)) continue;
     readColour(star, step, recipe);
     const teff = step.teff.compute(star, recipe);
-    if (Number.isNaN(teff)) return false;
+    if (Number.isNaN(teff)) continue;
     const scatter = coolDwarfTeffScatter(step.row);
     star.teff = teff + scatter * star.deviates.temperature;
-    adopt(star, teff, coolDwarfTeffColourSlope(step.row, star.colour), scatter);
+    adopt(star, step.bands, teff, coolDwarfTeffColourSlope(step.row, star.colour), scatter);
     write(star, out, step.teff.method);
     return true;
   }
@@ -243,12 +226,12 @@ const tryCool = (star: Scratch, recipe: RecipeSettings, out: Slots): boolean => 
 /** A temperature of 0 K or less is none. */
 const tryGiven = (star: Scratch, given: Inputs, recipe: RecipeSettings, out: Slots): boolean => {
   star.teffGiven = at(given.teff, star.row);
+  star.teffGivenError = errorAt(given.teffError, star.row);
   star.teff = GIVEN.compute(star, recipe);
   if (Number.isNaN(star.teff)) return false;
-  const error = errorAt(given.teffError, star.row);
   star.teffErrors.fill(0);
-  star.teffErrors[SOURCE.temperature] = error / star.teff;
-  out.teff.given(star.row, star.teff, error);
+  star.teffErrors[SOURCE.temperature] = star.teffGivenError / star.teff;
+  out.teff.given(star.row, star.teff, star.teffGivenError);
   out.teff.method(star.row, "given");
   return true;
 };
@@ -270,7 +253,7 @@ const hasColour = (star: Scratch, { sunlikeColours, coolColours }: RecipeSetting
   return false;
 };
 
-const hasBands = (star: Scratch, [first, second]: readonly [Band, Band]): boolean =>
+const hasBands = (star: Scratch, [first, second]: Colour): boolean =>
   !Number.isNaN(star[first] - star[second]);
 
 /** Temperature by the first method of the recipe that holds. */

@@ -36,8 +36,11 @@ export class CsvSplitter {
     const text = this.rest + piece;
     const records: CsvRecord[] = [];
     let from = 0;
+    // Looked for once, not again for every line: short lines without quotes would look through all of the piece.
+    let quote = text.indexOf('"');
     for (;;) {
-      const end = this.endOfRecord(text, from);
+      if (quote >= 0 && quote < from) quote = text.indexOf('"', from);
+      const end = this.endOfRecord(text, from, quote);
       if (end < 0) break;
       records.push(this.take(text.slice(from, end)));
       from = end + 1;
@@ -50,17 +53,20 @@ export class CsvSplitter {
   /** The last record, where the file does not end with a line's end. */
   end(): { record: CsvRecord | null; isQuoteOpen: boolean } {
     if (this.rest === "") return { record: null, isQuoteOpen: false };
-    const isQuoteOpen = this.endOfRecord(`${this.rest}\n`, 0) < 0;
+    const isQuoteOpen = this.endOfRecord(`${this.rest}\n`, 0, this.rest.indexOf('"')) < 0;
     const record = this.take(this.rest);
     this.rest = "";
     return { record, isQuoteOpen };
   }
 
-  /** Place of the line's end that ends the record beginning at `from`; −1 when it is not there yet. */
-  private endOfRecord(text: string, from: number): number {
+  /**
+   * Place of the line's end that ends the record beginning at `from`; −1 when it is not there yet.
+   *
+   * @param quote place of the next quote from there on; −1 where there is none
+   */
+  private endOfRecord(text: string, from: number, quote: number): number {
     const end = text.indexOf("\n", from);
     if (end < 0) return -1;
-    const quote = text.indexOf('"', from);
     if (quote < 0 || quote > end) return end;
     return this.endOfQuoted(text, from);
   }

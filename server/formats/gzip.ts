@@ -57,20 +57,32 @@ const tooDense = (limits: GzipLimits): AppError =>
     { hint: "If it is a table all the same, unpack it and bring it as it is." },
   );
 
+const goesOn = (): AppError =>
+  unprocessable(
+    "gzip-broken",
+    "The gzip file is damaged: after its end something follows that is not packed, so a part of it may be lost.",
+    { hint: GET_AGAIN },
+  );
+
 /** What comes out of a gzip file, of one member or of several. */
 export class Gunzip implements AsyncIterable<Uint8Array> {
   /** Bytes of the packed file taken so far. */
   packed = 0;
+  /** Bytes of it up to the last that is not zero; zeros may fill a file up. */
+  private filled = 0;
   private unpacked = 0;
+  private readonly pieces: AsyncIterator<Uint8Array>;
 
   constructor(
-    private readonly source: AsyncIterable<Uint8Array>,
+    source: AsyncIterable<Uint8Array>,
     private readonly limits: GzipLimits = LIMITS,
-  ) {}
+  ) {
+    this.pieces = source[Symbol.asyncIterator]();
+  }
 
   /** To be read once. */
   async *[Symbol.asyncIterator](): AsyncGenerator<Uint8Array> {
-    const input = Readable.from(this.counted());
+    const input = Readable.from(this.rest());
     const output = createGunzip();
     input.on("error", (error) => output.destroy(error));
     input.pipe(output);
@@ -79,11 +91,15 @@ export class Gunzip implements AsyncIterable<Uint8Array> {
         this.check(piece.length);
         yield piece;
       }
+      // The stream ends before a zero byte, whatever follows it.
+      for await (const _ of this.rest());
+      if (this.filled > output.bytesWritten) throw goesOn();
     } catch (error) {
       throw inWords(error);
     } finally {
       output.destroy();
       input.destroy();
+      await this.pieces.return?.();
     }
   }
 
@@ -94,10 +110,15 @@ export class Gunzip implements AsyncIterable<Uint8Array> {
     if (this.unpacked > most) throw tooDense(this.limits);
   }
 
-  private async *counted(): AsyncGenerator<Uint8Array> {
-    for await (const piece of this.source) {
-      this.packed += piece.length;
-      yield piece;
+  private async *rest(): AsyncGenerator<Uint8Array> {
+    for (;;) {
+      const { done, value } = await this.pieces.next();
+      if (done) return;
+      let filled = value.length;
+      while (filled > 0 && value[filled - 1] === 0) filled--;
+      if (filled > 0) this.filled = this.packed + filled;
+      this.packed += value.length;
+      yield value;
     }
   }
 }

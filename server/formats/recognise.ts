@@ -1,4 +1,5 @@
 import { unprocessable } from "../errors.ts";
+import { areFramed } from "./delimited/layout.ts";
 import { isDescriptionHead } from "./described/description.ts";
 import { partingsOf } from "./dialect.ts";
 import { isEcsv } from "./ecsv/header-lines.ts";
@@ -6,7 +7,7 @@ import { isBarred } from "./fixed-width/bar-header.ts";
 import { judgeColumns } from "./fixed-width/layout.ts";
 import type { TableFormat } from "./table.ts";
 import { judgeEncoding } from "./text/encoding.ts";
-import { isRule, readPreamble } from "./text/preamble.ts";
+import { isNoRow, readPreamble } from "./text/preamble.ts";
 
 /** Bytes that a file is recognised by. */
 export const RECOGNISED_BYTES = 256 * 1024;
@@ -90,10 +91,17 @@ const isDelimited = (text: string): boolean => {
   const { lines: before } = readPreamble(lines);
   const sample = lines
     .slice(before)
-    .filter((line) => !isRule(line))
+    .filter((line) => !isNoRow(line))
     .join("\n")
     .slice(0, SAMPLE_CHARACTERS);
-  return partingsOf(sample).some(({ rows, score }) => score >= EXPLAINED * (1000 + (rows[0]?.length ?? 0)));
+  return (
+    areFramed(sample.trimEnd().split("\n")) ||
+    partingsOf(sample).some(({ rows, score }) => {
+      const width = rows[0]?.length ?? 0;
+      const isLone = rows.filter((cells) => cells.join("").trim() !== "").length === 1;
+      return width >= 2 && (isLone || score >= EXPLAINED * (1000 + width));
+    })
+  );
 };
 
 const textFormat = (text: string): TableFormat => {

@@ -1,3 +1,4 @@
+import { REACH_ERROR_KEY } from "#server/derive/star-columns.ts";
 import { createAssessor } from "#server/scan/instrument.ts";
 import type { ResolvedView } from "#server/scan/resolve.ts";
 import type { StarRow } from "#shared/api/stars.ts";
@@ -37,9 +38,14 @@ const storedCells = (row: Record<string, unknown>, columns: readonly Column[], c
 const assessedCells = (
   assess: ReturnType<typeof createAssessor>,
   hasCampaign: boolean,
+  row: StoredStar,
   cells: Cells,
 ): void => {
-  const a = assess((key) => cells.values[key] ?? Number.NaN);
+  const a = assess((key) => {
+    // The error of the reach is stored with the star, but it is no column that is shown.
+    const stored = key === REACH_ERROR_KEY ? row[key] : cells.values[key];
+    return isNumber(stored) ? stored : Number.NaN;
+  });
   put(cells, "noise_1h", a.noise1h, a.noiseBlank);
   if (!hasCampaign) return;
   put(cells, "transits", a.transits, a.transitsBlank);
@@ -57,7 +63,7 @@ export const rowPresenter = (resolved: ResolvedView): ((row: StoredStar) => Omit
     const cells: Cells = { values: {}, blanks: {} };
     storedCells(row, GIVEN, cells);
     storedCells(row, STELLAR, cells);
-    if (assess) assessedCells(assess, campaign !== null, cells);
+    if (assess) assessedCells(assess, campaign !== null, row, cells);
     const score = merit && scoreStar(merit.terms, (key) => cells.values[key] ?? Number.NaN);
     return {
       id: String(row.star_id),

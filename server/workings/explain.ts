@@ -1,4 +1,4 @@
-import { type AssessedStar, assessStar, newAssessment } from "#server/assess/assess.ts";
+import { type AssessedStar, assessStar, newAssessment, reachErrorByNoise } from "#server/assess/assess.ts";
 import type { Seen, SeenStep } from "#server/assess/seen.ts";
 import { seenSteps } from "#server/assess/steps.ts";
 import type { Definition, DefinitionOf } from "#server/derive/definition.ts";
@@ -60,9 +60,13 @@ const definitionOf = (derived: Derived, key: string): Definition | undefined => 
 /** Words for the sources of error, in the order of their vector. */
 const SOURCE_WORDS: Readonly<Record<SourceName, string>> = {
   parallax: "distance",
-  ks: "Ks magnitude",
   g: "G magnitude",
-  colour: "colour",
+  bp: "BP magnitude",
+  rp: "RP magnitude",
+  v: "V magnitude",
+  j: "J magnitude",
+  h: "H magnitude",
+  ks: "Ks magnitude",
   temperature: "temperature: as given, or scatter of its relation",
   gravity: "log g",
   iron: "[Fe/H]",
@@ -213,7 +217,19 @@ const seen = (subject: Subject, derived: Derived): Seen | null => {
 
 const INSTRUMENT_BLANKS = { noise_1h: "noiseBlank", transits: "transitsBlank", r_min: "rMinBlank" } as const;
 
-const instrumentWorking = ({ assessment, star }: Seen, step: SeenStep): Working => {
+/** What the error of the smallest planet is made of. */
+const planetErrorParts = ({ assessment, star, card }: Seen): Working["errorParts"] => {
+  if (!Number.isFinite(star.reachError)) return [];
+  const byNoise = reachErrorByNoise(star, card, assessment.noise1h);
+  const noise = { source: "noise, by the error of the magnitude", size: byNoise };
+  return [
+    { source: "radius and orbit, R★ T^(−1/4)", size: star.reachError },
+    ...(byNoise > 0 ? [noise] : []),
+  ];
+};
+
+const instrumentWorking = (view: Seen, step: SeenStep): Working => {
+  const { assessment } = view;
   const reason = INSTRUMENT_BLANKS[step.key as keyof typeof INSTRUMENT_BLANKS];
   const isPlanet = step.key === "r_min";
   return {
@@ -226,16 +242,13 @@ const instrumentWorking = ({ assessment, star }: Seen, step: SeenStep): Working 
     blank: blankOf(reason && assessment[reason]),
     method: "",
     formula: step.formula,
-    substituted: substitute(step.formula, numbersOf(step.inputs, [])),
+    substituted: substitute(step.formula, numbersOf(step.inputs, step.constants ?? [])),
     isRoot: false,
     inputs: [...step.inputs],
-    constants: [],
+    constants: [...(step.constants ?? [])],
     ranges: [],
     scatter: "",
-    errorParts:
-      isPlanet && Number.isFinite(star.reachError)
-        ? [{ source: "radius and orbit, R★ T^(−1/4)", size: star.reachError }]
-        : [],
+    errorParts: isPlanet ? planetErrorParts(view) : [],
     reference: step.reference,
   };
 };

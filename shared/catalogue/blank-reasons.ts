@@ -47,7 +47,7 @@ export const BLANK_REASONS = [
     "parallax-too-uncertain",
     "out-of-range",
     "parallax uncertain",
-    "The parallax error exceeds a tenth of the parallax, where its inverse is no longer a fair distance.",
+    "The parallax error exceeds the share of the parallax that the recipe allows (a tenth by default): its inverse is no fair distance.",
   ),
   reason(6, "needs-ks", "input-missing", "needs Ks", "A Ks magnitude is needed and none is given."),
   reason(7, "needs-distance", "input-missing", "needs distance", "A distance is needed and there is none."),
@@ -56,14 +56,14 @@ export const BLANK_REASONS = [
     "outside-radius-relation",
     "out-of-range",
     "out of range",
-    "M Ks lies outside 4.6 to 9.8, where the radius relation for cool dwarfs holds.",
+    "M Ks lies outside the range in which the recipe uses the radius relation for cool dwarfs, 4.6 to 9.8 at most.",
   ),
   reason(
     9,
     "outside-mass-relation",
     "out-of-range",
     "out of range",
-    "M Ks lies outside 4.6 to 9.8, where the mass relation for cool dwarfs is used.",
+    "M Ks lies outside the range in which the recipe uses the mass relation for cool dwarfs, 4.6 to 9.8 at most.",
   ),
   reason(
     10,
@@ -180,6 +180,13 @@ export const BLANK_REASONS = [
     "out-of-range",
     "out of range",
     "The colour excess is negative, or the colour lies outside the range in which the extinction law has coefficients.",
+  ),
+  reason(
+    30,
+    "hotter-than-cool-dwarfs",
+    "out-of-range",
+    "too hot",
+    "The star is hotter than the cool dwarfs for which the recipe uses the relations from M Ks.",
   ),
 ] as const satisfies readonly BlankReason[];
 

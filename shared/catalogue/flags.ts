@@ -38,7 +38,8 @@ export const FLAGS = [
     bit: 8,
     key: "assumed",
     word: "assumed",
-    sentence: "Gravity or iron content was not given and was assumed: log g 4.5 ± 0.3, [Fe/H] 0.0 ± 0.2.",
+    sentence:
+      "Gravity or iron content was not given and was assumed, as the recipe says; the errors of what rests on it are the wider for it.",
     isWarning: false,
   },
 ] as const satisfies readonly Flag[];

@@ -44,3 +44,13 @@ export const extinction = (band: ExtinctionBand, ebv: number, bpRp: number): num
   if (!(colour >= EXTINCTION_BP_RP.bluest && colour <= EXTINCTION_BP_RP.reddest)) return Number.NaN;
   return (c[0] + colour * (c[1] + colour * (c[2] + colour * c[3]))) * ebv;
 };
+
+/** dA / dE(B − V) of {@link extinction}: `R(c₀) − 0.8 E(B − V) dR / dc₀`; NaN where the extinction is. */
+export const extinctionSlope = (band: ExtinctionBand, ebv: number, bpRp: number): number => {
+  const c = EXTINCTION_COEFFICIENTS[band];
+  if (Number.isNaN(extinction(band, ebv, bpRp))) return Number.NaN;
+  if (c[1] === 0) return c[0];
+  const colour = bpRp - BP_RP_REDDENING * ebv;
+  const coefficient = c[0] + colour * (c[1] + colour * (c[2] + colour * c[3]));
+  return coefficient - BP_RP_REDDENING * ebv * (c[1] + colour * (2 * c[2] + 3 * c[3] * colour));
+};

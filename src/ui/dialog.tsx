@@ -34,6 +34,8 @@ export const Dialog = ({ title, isOpen, onClose, footer, isWide = false, childre
       ref={dialog}
       aria-labelledby={titleId}
       onCancel={(event) => {
+        // A file chooser that is left without a file sends the same event up from its field.
+        if (event.target !== event.currentTarget) return;
         event.preventDefault();
         onClose();
       }}

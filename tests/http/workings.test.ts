@@ -3,7 +3,7 @@ import { beforeAll, describe, expect, test } from "vitest";
 import type { Programme } from "#server/database/entities/programme.entity.ts";
 import { starWindow } from "#shared/api/stars.ts";
 import { type Workings, workings } from "#shared/api/workings.ts";
-import { columnsOf } from "#shared/catalogue/columns.ts";
+import { columnsOf, errorKey } from "#shared/catalogue/columns.ts";
 import { EMPTY_VIEW, viewToParams } from "#shared/catalogue/view.ts";
 import { workingsText } from "#shared/format/workings-text.ts";
 import { type Agent, startTestApp, type TestApp } from "#tests/support/app.ts";
@@ -64,17 +64,22 @@ const workingsOf = async (place: number | undefined, more: string, view = params
 };
 
 describe("the workings of a star's number", () => {
-  test("give the number of the table, for every column that is worked out", async () => {
+  test("give the number and the error of the table, for every column that is worked out", async () => {
     await workingsOf(A, "key=radius");
     const { body } = await agent
       .get(`/api/programmes/${programme.id}/stars/window?${params}&limit=10`)
       .expect(200);
-    const row = starWindow.parse(body.window).rows.find((r) => r.designation === "Practice A");
-    for (const { key } of columnsOf("stellar", "instrument")) {
-      if (key === "flags") continue;
-      const { steps } = await workingsOf(A, `key=${key}`);
-      expect([key, steps[0]?.key, steps[0]?.value]).toEqual([key, key, row?.values[key] ?? null]);
+    const { rows } = starWindow.parse(body.window);
+    for (const place of [A, SURE]) {
+      const row = rows.find(({ id }) => id === idOf(place));
+      for (const { key } of columnsOf("stellar", "instrument")) {
+        if (key === "flags") continue;
+        const [step] = (await workingsOf(place, `key=${key}`)).steps;
+        const told = [row?.values[key] ?? null, row?.values[errorKey(key)] ?? null];
+        expect([key, step?.key, step?.value, step?.error]).toEqual([key, key, ...told]);
+      }
     }
+    expect(rows.find(({ id }) => id === idOf(SURE))?.values.r_min_err).toBeGreaterThan(0);
   });
 
   test("name recipe, card and campaign, and go without the latter where none is chosen", async () => {

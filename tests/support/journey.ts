@@ -128,7 +128,7 @@ const PRACTICE_CELLS: Readonly<Record<keyof typeof IDENTIFIERS, GridRow>> = {
     "P tr": "1.38 ±0.05",
     "Noise 1 h": "103",
     Transits: "6",
-    "R min": "0.496 ±0.015",
+    "R min": "0.496 ±0.010",
   },
   "LH-0052": {
     Teff: "2 950 ±60",
@@ -137,7 +137,7 @@ const PRACTICE_CELLS: Readonly<Record<keyof typeof IDENTIFIERS, GridRow>> = {
     "P tr": "1.78 ±0.07",
     "Noise 1 h": "294",
     Transits: "20",
-    "R min": "0.337 ±0.010",
+    "R min": "0.337 ±0.007",
   },
   "LH-0077": {
     Teff: "3 650 ±60",
@@ -146,7 +146,7 @@ const PRACTICE_CELLS: Readonly<Record<keyof typeof IDENTIFIERS, GridRow>> = {
     "P tr": "1.16 ±0.04",
     "Noise 1 h": "64.7",
     Transits: "2",
-    "R min": "0.840 ±0.025",
+    "R min": "0.840 ±0.016",
   },
 };
 

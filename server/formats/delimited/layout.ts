@@ -2,7 +2,7 @@ import { LIMITS } from "#shared/limits.ts";
 import { unprocessable } from "../../errors.ts";
 import type { DecimalMark, Delimiter } from "../dialect.ts";
 import { findNames, type NamesFound } from "../text/names.ts";
-import { isRule, type Preamble, readPreamble } from "../text/preamble.ts";
+import { isNoRow, type Preamble, readPreamble } from "../text/preamble.ts";
 import { chooseDialect } from "./choose-dialect.ts";
 
 /** How the lines of a delimited text are laid out, as its beginning shows. */
@@ -34,6 +34,10 @@ const sampleOf = (text: string): string => {
 
 const isFramedLine = (line: string): boolean => /^\s*\|.*\|\s*$/.test(line);
 
+/** Whether lines stand between bars. A row that lacks a bar is none, and does not make the others stand without a frame. */
+export const areFramed = (lines: readonly string[]): boolean =>
+  isFramedLine(lines[0] ?? "") && lines.filter(isFramedLine).length > lines.length / 2;
+
 /** Cells without the two outside a frame; their padding is the frame's too. */
 export const insideFrame = (cells: readonly string[]): string[] =>
   cells.slice(1, -1).map((cell) => cell.trim());
@@ -61,7 +65,7 @@ export const judgeLayout = (head: string, choice: LayoutChoice): Layout => {
   const sample = sampleOf(lines.slice(preamble.lines).join("\n"));
   if (sample.trim() === "") throw noRows();
   const chosen = chooseDialect(unruled(sample), choice.delimiter, choice.name);
-  const isFramed = chosen.delimiter === "|" && unruled(sample).trimEnd().split("\n").every(isFramedLine);
+  const isFramed = chosen.delimiter === "|" && areFramed(unruled(sample).trimEnd().split("\n"));
   const cellsOf = (cells: readonly string[]): readonly string[] => (isFramed ? insideFrame(cells) : cells);
   const { delimiter } = chosen;
   const found = findNames({
@@ -85,5 +89,5 @@ export const judgeLayout = (head: string, choice: LayoutChoice): Layout => {
 const unruled = (sample: string): string =>
   sample
     .split("\n")
-    .filter((line) => !isRule(line))
+    .filter((line) => !isNoRow(line))
     .join("\n");

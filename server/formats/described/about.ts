@@ -18,7 +18,7 @@ export interface FileSummary {
 
 const LONGEST_ABSTRACT = 4000;
 const SECTIONS =
-  /^(Title|Authors|Author|Table|Abstract|Description|Keywords|ADC_Keywords|References?|Reference)\s*:\s*(.*)$/i;
+  /^(Title|Authors|Author|Table|Abstract|Description|Keywords|ADC_Keywords|References?)\s*:\s*(.*)$/i;
 const FILE = /^\s*(\S+)\s+(\d+)\s+(\d+|\.)\s+(\S.*)?$/;
 
 /** The words of each part that a line `Title: …` begins. */

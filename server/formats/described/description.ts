@@ -1,6 +1,6 @@
-import { isBlankWord, parseNumber } from "../numbers.ts";
 import { readExplanation } from "./explanation.ts";
 import { type DescribedField, typeOfFormat } from "./field.ts";
+import { fits } from "./line-cells.ts";
 import { isNote, type Notes, readNotes } from "./notes.ts";
 import { isRuleLine } from "./rule.ts";
 
@@ -88,24 +88,6 @@ const fieldOf = (raw: Raw, notes: Notes): DescribedField => {
   };
 };
 
-const isValueOf = (
-  { type, nullMark }: Raw & ReturnType<typeof typeOfFormat> & { nullMark: string | null },
-  text: string,
-) => type === "text" || text === nullMark || isBlankWord(text) || !Number.isNaN(parseNumber(text, "."));
-
-/** Whether a line may be a row of those columns: a number wherever one is wanted, and at least one value. */
-const fits = (line: string, raw: readonly Raw[]): boolean => {
-  const fields = raw.map((r) => ({ ...r, ...typeOfFormat(r.format), ...readExplanation(r.words) }));
-  const hasNumber = fields.some(({ type }) => type !== "text");
-  const cells = fields.map(({ from, to }) => line.slice(from, to).trim());
-  return (
-    hasNumber &&
-    line.trim() !== "" &&
-    cells.some((cell, at) => cell !== "" && fields[at]?.type !== "text") &&
-    fields.every((field, at) => isValueOf(field, cells[at] ?? ""))
-  );
-};
-
 /** Notes that several tables share stand at the end of a description of several files. */
 const sharedNotes = (lines: readonly string[]): Notes => {
   const at = lines.findIndex((line) => /^\s*Note\s*\(G\d+\)/i.test(line));
@@ -138,9 +120,11 @@ const passNotes = (
   let end = from;
   while (isRuleLine(lines[end] ?? "") || (lines[end] ?? "x").trim() === "") end++;
   if (!isNote(lines[end] ?? "")) return { notes: new Map(), end: Math.min(end, lines.length) };
+  const fields = raw.map((r) => fieldOf(r, new Map()));
+  const isRow = (line: string): boolean => fits(line, fields, "characters") || fits(line, fields, "bytes");
   const areRows = (at: number): boolean =>
-    lines.slice(at, at + ROWS_SEEN).every((line) => line.trim() === "" || fits(line, raw)) &&
-    fits(lines[at] ?? "", raw);
+    isRow(lines[at] ?? "") &&
+    lines.slice(at, at + ROWS_SEEN).every((line) => line.trim() === "" || isRow(line));
   return readNotes(lines, end, areRows);
 };
 

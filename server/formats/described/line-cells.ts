@@ -21,16 +21,33 @@ export const lengthOf = (line: string, counting: Counting): number => {
   return counting === "bytes" && isWide(own) ? Buffer.byteLength(own, "utf8") : own.length;
 };
 
-const fits = (line: string, fields: readonly DescribedField[], counting: Counting): boolean => {
+/** Signs that may stand between described columns; any other would be a part of a value that the places cut off. */
+const BETWEEN = new Set([" ", "\t", "|", ",", ";", ":", "&", "/", '"', "'"]);
+
+/** Where a line has a part of a value between two columns, from 0; −1 where it has none. */
+export const strayBetween = (line: string, fields: readonly DescribedField[], counting: Counting): number => {
+  const text = counting === "bytes" && isWide(line) ? Buffer.from(line, "utf8").toString("latin1") : line;
+  let at = 0;
+  for (const { from, to } of fields) {
+    for (; at < from && at < text.length; at++) if (!BETWEEN.has(text[at] ?? " ")) return at;
+    at = to;
+  }
+  return -1;
+};
+
+/** Whether a line may be a row: nothing beyond the columns or between them, and a number wherever one is wanted. */
+export const fits = (line: string, fields: readonly DescribedField[], counting: Counting): boolean => {
   const last = fields.at(-1)?.to ?? 0;
+  if (lengthOf(line, counting) > last || strayBetween(line, fields, counting) >= 0) return false;
+  let numbers = 0;
   return (
-    lengthOf(line, counting) <= last &&
     cellsOf(line, fields, counting).every((text, at) => {
       const field = fields[at];
       if (text.includes("\ufffd")) return false;
       if (!field || field.type === "text" || text === field.nullMark || isBlankWord(text)) return true;
+      numbers++;
       return !Number.isNaN(parseNumber(text, "."));
-    })
+    }) && numbers > 0
   );
 };
 

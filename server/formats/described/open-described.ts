@@ -11,7 +11,7 @@ import { type About, readAbout } from "./about.ts";
 import { chooseTable, matchesFile } from "./choose-table.ts";
 import { describedColumns } from "./columns.ts";
 import { type DescribedTable, isDescriptionHead, readDescriptions } from "./description.ts";
-import { judgeCounting } from "./line-cells.ts";
+import { fits, judgeCounting } from "./line-cells.ts";
 import { readText } from "./read-text.ts";
 import { DescribedRows } from "./rows.ts";
 import { BY_BYTES, POSITIONS_JOINED, UNDECLARED_WORDS } from "./words.ts";
@@ -55,6 +55,14 @@ const LONGEST_LINE = 2000;
 
 const clipped = (text: string): string[] => text.split("\n").map((line) => line.slice(0, LONGEST_LINE));
 
+/** The first table that rows stand right below, before another description. */
+const withRows = (tables: readonly DescribedTable[], lines: readonly string[]): DescribedTable | undefined =>
+  tables.find(({ end, fields }, at) =>
+    lines
+      .slice(end, tables[at + 1]?.begin)
+      .some((line) => fits(line, fields, "characters") || fits(line, fields, "bytes")),
+  );
+
 /** A description before the rows in the same file. */
 const describedInside = (source: TextSource, name: string | undefined): Described | null => {
   const lines = clipped(source.headText());
@@ -62,8 +70,10 @@ const describedInside = (source: TextSource, name: string | undefined): Describe
   const [first, last] = [tables[0], tables.at(-1)];
   if (!first || !last) return null;
   const about = readAbout(lines.slice(0, first.begin));
+  const own = withRows(tables, lines);
+  if (own) return { about, table: own, lines: own.end, isApart: false };
   const isEmpty = source.isWhole && lines.slice(last.end).every((line) => line.trim() === "");
-  if (isEmpty && (tables.length > 1 || about.files.length > 0)) throw noData(tables);
+  if (about.files.length > 0 || (isEmpty && tables.length > 1)) throw noData(tables);
   return { about, table: chooseTable(tables, name), lines: last.end, isApart: false };
 };
 

@@ -7,7 +7,7 @@ import { TypedColumns } from "../text/typed-columns.ts";
 import { Findings } from "../votable/findings.ts";
 import type { DescribedColumn } from "./columns.ts";
 import type { DescribedField } from "./field.ts";
-import { type Counting, cellsOf, lengthOf } from "./line-cells.ts";
+import { type Counting, cellsOf, lengthOf, strayBetween } from "./line-cells.ts";
 import { RepeatedDescription } from "./repeated-description.ts";
 import { isRuleLine } from "./rule.ts";
 import { degreesOf, type SexagesimalGroup } from "./sexagesimal.ts";
@@ -84,8 +84,12 @@ export class DescribedRows {
   private take(line: string, number: number, isOpen: boolean): string | null {
     const length = lengthOf(line, this.counting);
     if (length > this.end) throw tooLong(number, length, this.end);
+    const stray = strayBetween(line, this.fields, this.counting);
+    if (stray >= 0)
+      return `Something stands at ${stray + 1}, between two columns, where it may be a part of a value.`;
     const cells = cellsOf(line, this.fields, this.counting);
-    const missing = length < this.end ? this.missing(cells, length) : undefined;
+    // Blanks that are there say "no value"; a line that ends before them may have lost one.
+    const missing = line.length < this.end ? this.missing(cells, length) : undefined;
     if (missing) {
       if (isOpen) throw cutOff(number, cells.filter((cell) => cell !== "").length, this.fields.length);
       this.findings.add(SHORT_LINES, `line ${number}: ${length} of ${this.end} characters`);
@@ -101,7 +105,7 @@ export class DescribedRows {
       if (length <= field.from) return !field.isNullable;
       const text = cells[at] ?? "";
       const decimals = /\.(\d*)/.exec(text)?.[1]?.length ?? 0;
-      return decimals < field.decimals && !/[eEdD]/.test(text) && text !== field.nullMark;
+      return decimals < field.decimals && /^[+-]?[\d.]+$/.test(text) && text !== field.nullMark;
     });
   }
 

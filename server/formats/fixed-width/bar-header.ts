@@ -24,13 +24,16 @@ const isBarLine = (line: string): boolean => line.startsWith("|");
 const contentOf = (lines: readonly string[]): number =>
   lines.findIndex((line) => line.trim() !== "" && !line.startsWith("\\"));
 
+const isTypes = (line: string): boolean =>
+  /^(?:\|\s*(?:char|date|int|long|double|float|real)\s*)+\|\s*$/.test(line);
+
 /** Whether names stand between bars and the rows below them do not. */
 export const isBarred = (head: string): boolean => {
   const lines = head.split("\n", 400);
   const first = contentOf(lines);
   if (first < 0 || !isBarLine(lines[first] ?? "") || !/\|.*\|\s*$/.test(lines[first] ?? "")) return false;
   const below = lines.slice(first).find((line) => line.trim() !== "" && !isBarLine(line));
-  if (below === undefined) return lines.slice(0, first).some((line) => line.startsWith("\\"));
+  if (below === undefined) return isTypes(lines[first + 1] ?? "");
   return !below.includes("|") && !isRule(below);
 };
 

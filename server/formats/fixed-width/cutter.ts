@@ -14,7 +14,11 @@ const isBlank = (line: string, at: number): boolean => {
  * whose text goes across a gap, or stands in the middle of one, is not cut at all.
  */
 export class Cutter {
-  constructor(readonly fields: readonly Field[]) {}
+  /** @param isEndFree whether the last column goes on to the end of the line, with blanks in it */
+  constructor(
+    readonly fields: readonly Field[],
+    private readonly isEndFree = true,
+  ) {}
 
   /** The cells of a line, or the number, from 0, of the gap that is none in it. */
   cut(line: string): string[] | number {
@@ -27,8 +31,16 @@ export class Cutter {
       cells.push(line.slice(begin, end).trim());
       begin = end;
     }
-    cells.push(line.slice(begin).trim());
+    const last = line.slice(begin).trim();
+    if (!this.isEndFree && this.goesBeyond(line)) return fields.length - 1;
+    cells.push(last);
     return cells;
+  }
+
+  /** Whether text stands apart from the last column, behind it. */
+  private goesBeyond(line: string): boolean {
+    const end = this.fields.at(-1)?.to ?? 0;
+    return line.length > end && /\s\S/.test(line.slice(Math.max(0, end - 1)));
   }
 
   /** Where the column before a gap ends in this line; −1 where the gap is none. */

@@ -2,7 +2,7 @@ import { LIMITS } from "#shared/limits.ts";
 import { unprocessable } from "../../errors.ts";
 import { type DecimalMark, decimalMarkOf } from "../dialect.ts";
 import { findNames, type NamesFound } from "../text/names.ts";
-import { isRule, type Preamble, readPreamble } from "../text/preamble.ts";
+import { isNoRow, isRule, type Preamble, readPreamble } from "../text/preamble.ts";
 import { Cutter, type Field } from "./cutter.ts";
 import { fieldsBetweenGutters, fieldsOfRule, joinUnnamed } from "./gutters.ts";
 import { tokensOf } from "./tokens.ts";
@@ -51,17 +51,25 @@ const cutAll = (lines: readonly string[], fields: readonly Field[]): Rows | null
   return rows.every((cells) => typeof cells !== "number") ? rows : null;
 };
 
-/** Cells with wide gaps inside are more than one value each. */
-const MOST_WITH_GAPS = 0.3;
+/** Share of a column's cells that may look like several values. */
+const MOST_SEVERAL = 0.3;
+/** Hours, minutes and seconds are three numbers; a cell of more is several values. */
+const MOST_NUMBERS = 3;
 
-const haveGaps = (rows: Rows, at: number): boolean => {
+const isSeveral = (cell: string): boolean =>
+  / {2,}/.test(cell) || cell.split(" ").filter((word) => NUMBER.test(word)).length > MOST_NUMBERS;
+
+const areSeveral = (rows: Rows, at: number): boolean => {
   const cells = rows.map((row) => row[at] ?? "").filter((cell) => cell !== "");
-  return cells.filter((cell) => / {2,}/.test(cell)).length > cells.length * MOST_WITH_GAPS;
+  return cells.filter(isSeveral).length > cells.length * MOST_SEVERAL;
 };
 
+/** Whether the last column holds more than single words. */
+const hasWords = (rows: Rows): boolean => rows.slice(1).some((cells) => /\s/.test(cells.at(-1) ?? ""));
+
 const reading = (kind: Layout["kind"], rows: Rows | null, fields: readonly Field[]): Reading | null =>
-  rows && fields.length >= 2 && !fields.some((_, at) => haveGaps(rows, at))
-    ? { kind, rows, cutter: new Cutter(fields) }
+  rows && fields.length >= 2 && !fields.some((_, at) => areSeveral(rows, at))
+    ? { kind, rows, cutter: new Cutter(fields, hasWords(rows)) }
     : null;
 
 /** Columns that the names stand above. */
@@ -122,7 +130,9 @@ const tooWide = (width: number): Error =>
     { hint: "Save the columns that you need as a table of their own, and bring that." },
   );
 
-/** Whether the last of the lines stands for a file that holds no more than names. */
+const isLastFilled = (rows: Rows): boolean => rows.length > 0 && rows.every((cells) => cells.at(-1) !== "");
+
+/** A line among the first that is ruled for each column. */
 const ruleAmong = (lines: readonly string[]): string | undefined =>
   lines.slice(0, 3).find((line) => isRule(line) && /^[-=\s]+$/.test(line) && fieldsOfRule(line).length >= 2);
 
@@ -137,7 +147,7 @@ export const judgeColumns = (head: string): Layout | null => {
   const own = all
     .slice(preamble.lines)
     .filter((line) => line.trim() !== "" && (preamble.mark === null || !line.startsWith(preamble.mark)));
-  const lines = own.filter((line) => !isRule(line));
+  const lines = own.filter((line) => !isNoRow(line));
   const chosen = lines.length === 0 ? null : choose(lines, ruleAmong(own));
   if (!chosen) return null;
   const decimalMark = decimalMarkOf(
@@ -152,7 +162,7 @@ export const judgeColumns = (head: string): Layout | null => {
     cutter: chosen.cutter,
     found,
     decimalMark,
-    isLastFilled: chosen.rows.slice(found.skip).every((cells) => cells.at(-1) !== ""),
+    isLastFilled: isLastFilled(chosen.rows.slice(found.skip, -1)),
   };
 };
 

@@ -66,6 +66,7 @@ export class ColumnRows {
     const tokens = tokensOf(line);
     // A row that drifts out of its columns is still clear where it has a value for each of them.
     if (tokens.length === this.width) return tokens;
+    if (cells === this.width - 1) return `Text stands behind the last column, ${found.names[cells]}.`;
     return cells === undefined
       ? `This row has ${tokens.length} values between blanks; the table has ${this.width} columns.`
       : `Text stands in the gap between ${found.names[cells]} and ${found.names[cells + 1]}, which is blank in the rows at the beginning.`;

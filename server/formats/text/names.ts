@@ -95,8 +95,11 @@ const inComments = ({ comments, split }: NamesAsked, width: number): Omit<NamesF
   return below.every(isName) ? { names: below, units: null, stand: "comment" } : null;
 };
 
-/** Lines of units and ruled lines below the names, in either order. */
-const belowNames = (rows: NamesAsked["rows"], from: number): { units: string[] | null; skip: number } => {
+/** Lines of units and ruled lines below the names, in either order. Units stand above numbers, where there are rows. */
+const belowNames = (
+  { rows, decimalMark }: NamesAsked,
+  from: number,
+): { units: string[] | null; skip: number } => {
   let units: string[] | null = null;
   let skip = from;
   for (; skip < from + 3; skip++) {
@@ -104,6 +107,8 @@ const belowNames = (rows: NamesAsked["rows"], from: number): { units: string[] |
     if (!cells) break;
     if (isRuleRow(cells)) continue;
     if (units !== null || !isUnitsLine(cells)) break;
+    const body = rows.slice(skip + 1).filter((row) => !isRuleRow(row));
+    if (body.length > 0 && !new Evidence(body, cells.length, decimalMark).isNames(cells)) break;
     units = cells.map(unitIn);
   }
   return { units, skip };
@@ -118,7 +123,7 @@ export const findNames = (asked: NamesAsked): NamesFound => {
   const evidence = new Evidence(rows.slice(1), first.length, asked.decimalMark);
   const commented = evidence.isNames(first) ? null : inComments(asked, first.length);
   if (commented) {
-    const { units, skip } = belowNames(asked.rows, before);
+    const { units, skip } = belowNames(asked, before);
     return { ...commented, units: commented.units ?? units, skip };
   }
   if (evidence.isValues(first))
@@ -128,5 +133,5 @@ export const findNames = (asked: NamesAsked): NamesFound => {
       stand: "nowhere",
       skip: before,
     };
-  return { names: first, stand: "line", ...belowNames(asked.rows, before + 1) };
+  return { names: first, stand: "line", ...belowNames(asked, before + 1) };
 };

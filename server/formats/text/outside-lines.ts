@@ -1,10 +1,7 @@
-import { declaredIn, isRule, type Preamble, uncommented } from "./preamble.ts";
+import { countIn, declaredIn, isNoRow, type Preamble, uncommented } from "./preamble.ts";
 
 const MOST_EXAMPLES = 5;
 const LONGEST_EXAMPLE = 80;
-
-/** As a database's own client counts what it printed. */
-const COUNTED = /^\((\d{1,12}) rows?\)$/;
 
 /** Lines between and after the rows that are no rows: comments, ruled lines and counts. */
 export class OutsideLines {
@@ -28,9 +25,8 @@ export class OutsideLines {
     if (this.mark !== null && line.startsWith(this.mark)) return this.note(line, this.mark);
     if (isWide) return false;
     if (line.startsWith("#")) return this.note(line, "#");
-    const counted = COUNTED.exec(line.trim());
-    if (counted) this.declaredRows ??= Number(counted[1]);
-    return counted !== null || isRule(line);
+    this.declaredRows ??= countIn(line);
+    return isNoRow(line);
   }
 
   private note(line: string, mark: string): true {

@@ -31,8 +31,20 @@ export const uncommented = (line: string, mark: string): string => {
 /** A line drawn below names or around a table: dashes, equals signs and the crossings of a frame. */
 export const isRule = (line: string): boolean => /^[-=\s|+:]+$/.test(line) && /-{3}|==|\|\s*[-=]/.test(line);
 
+/** As a database's own client counts what it printed. */
+const COUNTED = /^\s*\((\d{1,12}) rows?\)\s*$/;
+
+/** The count that such a line gives; null for any other. */
+export const countIn = (line: string): number | null => {
+  const found = COUNTED.exec(line);
+  return found ? Number(found[1]) : null;
+};
+
+/** Whether a line among the rows is none: drawn, or a count of them. */
+export const isNoRow = (line: string): boolean => isRule(line) || countIn(line) !== null;
+
 const ROWS =
-  /(?:^|[^\w])(?:n(?:umber)?[ _]?(?:of[ _])?rows?|rows?(?:[ _]?(?:retrieved|returned|count|total|number))?|row[ _]?count|nrows)\s*[:=]\s*(\d{1,12}|\d{1,3}(?:,\d{3})+)\b/i;
+  /(?:^|[^\w])(?:n(?:umber)?[ _]?(?:of[ _])?rows?|rows?(?:[ _]?(?:retrieved|returned|count|total|number))?|row[ _]?count|nrows)\s*[:=]\s*(\d{1,3}(?:,\d{3})+|\d{1,12})\b/i;
 
 /** Rows that a comment declares, such as `rows=500000`; null for other words. */
 export const declaredIn = (comment: string): number | null => {

@@ -318,7 +318,7 @@ export const ORDERS = {
       "radius-and-temperature": "Radius and temperature",
     }),
     hint: IN_ORDER,
-    source: `${COOL_SOURCE}, Table 3; Andrae et al. 2018, A&A 616, A8, eq. 7`,
+    source: `Ks: a fit of this project to the stars of ${COOL_SOURCE}; G: Andrae et al. 2018, A&A 616, A8, eq. 7`,
   },
 } as const satisfies Record<string, Choice>;
 

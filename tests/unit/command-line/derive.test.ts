@@ -1,4 +1,5 @@
-import { readdirSync } from "node:fs";
+import { readdirSync, symlinkSync } from "node:fs";
+import { join } from "node:path";
 import { describe, expect, test } from "vitest";
 import { DEFAULT_RECIPE, PRACTICE_RECIPE } from "#shared/science/recipes.ts";
 import { type ReadTable, readEcsv } from "../formats/ecsv/support.ts";
@@ -55,6 +56,17 @@ describe("derive", () => {
     expect((await derive("one.ecsv", "--out", "again.ecsv")).code).toBe(0);
     const body = (name: string): string => readIn(folder, name).replace(/^#.*\n/gm, "");
     expect(body("again.ecsv")).toBe(body("one.ecsv"));
+  });
+
+  test("the extract is not written over, under whatever name", async () => {
+    put("stars.csv", STARS);
+    symlinkSync(join(folder, "stars.csv"), join(folder, "link.csv"));
+    for (const name of ["stars.csv", "./stars.csv", "link.csv"]) {
+      const { code, err } = await derive("stars.csv", "--out", name);
+      expect(code).toBe(2);
+      expect(err).toMatch(/--out names the extract itself/);
+    }
+    expect(readIn(folder, "stars.csv")).toBe(STARS);
   });
 
   test("CSV carries the keys alone, with the same values", async () => {

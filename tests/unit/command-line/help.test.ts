@@ -10,6 +10,7 @@ test.each([
   [["derive", "x.csv", "-h"], /--recipe/],
   [["explain", "--help"], /--quantity[\s\S]*--json/],
   [["precision", "--help"], /--photons-only/],
+  [["read", "--help"], /--companion[\s\S]*--rows/],
 ])("%j explains itself on the standard output", async (args, words) => {
   const { code, out, err } = await run(folder, ...args);
   expect([code, err]).toEqual([0, ""]);

@@ -195,6 +195,29 @@ describe("default recipe", () => {
     expect(warm.value("teff")).toBeGreaterThan(4000);
   });
 
+  test("a colour outside the relation for cool dwarfs leaves the temperature to the next one", () => {
+    // BP − RP 1.86 is bluer than the sample, and gives less than 4000 K by the relation of stars like the Sun.
+    const star: Given = { ...COOL, bp_mag: 11.58, g_mag: 10.1, v_mag: 10.6, j_mag: 7.8 };
+    expect(derived(without(star, "v_mag")).reason("teff")).toBe("outside-teff-relation");
+    const byVJ = derived(star);
+    expect(byVJ.method("teff")).toBe("cool-v-j");
+    expect(byVJ.value("teff")).toBeGreaterThan(3800);
+    expect(byVJ.value("teff")).toBeLessThan(4000);
+  });
+
+  test("where only the temperature rules a cool dwarf out, radius and mass say so", () => {
+    const hot = derived({ ...COOL, teff_given: 4300 }, PRACTICE_RECIPE.settings);
+    expect([hot.reason("radius"), hot.reason("mass")]).toEqual([
+      "hotter-than-cool-dwarfs",
+      "hotter-than-cool-dwarfs",
+    ]);
+    const faint = derived({ ...COOL, teff_given: 4300, ks_mag: 12 }, PRACTICE_RECIPE.settings);
+    expect([faint.reason("radius"), faint.reason("mass")]).toEqual([
+      "outside-radius-relation",
+      "outside-mass-relation",
+    ]);
+  });
+
   test("BP and RP of stars that saturate give no temperature", () => {
     const bright = { ...SUNLIKE, bp_mag: 4.9, rp_mag: 4.1 };
     expect(derived(bright).reason("teff")).toBe("outside-teff-relation");

@@ -142,6 +142,120 @@ describe("what quantities share is not counted twice", () => {
   });
 });
 
+/** What one given value adds to an error, against what a small change of it does to the value. */
+const shares = (given: Given, input: string, sigma: number, key: string, recipe: RecipeSettings) => {
+  const error = (own: number): number => derived({ ...given, [`${input}_err`]: own }, recipe).error(key);
+  const value = (step: number): number =>
+    derived({ ...given, [input]: (given[input] ?? 0) + step }, recipe).value(key);
+  const step = sigma / 1000;
+  return {
+    propagated: Math.sqrt(error(sigma) ** 2 - error(0) ** 2),
+    moved: (Math.abs(value(step) - value(-step)) / (2 * step)) * sigma,
+  };
+};
+
+describe("a magnitude that enters twice is one source", () => {
+  /** A G dwarf at 20 pc with all its errors. */
+  const star: Given = {
+    parallax: 50,
+    parallax_err: 0.05,
+    g_mag: 8.2,
+    g_mag_err: 0.01,
+    ks_mag: 6.7,
+    ks_mag_err: 0.02,
+    logg: 4.4,
+    logg_err: 0.05,
+    feh: 0,
+    feh_err: 0.05,
+  };
+  const recipe: RecipeSettings = { ...DEFAULT_RECIPE.settings, sunlikeColours: ["g-ks"] };
+
+  test.each([
+    ["g_mag", "luminosity"],
+    ["g_mag", "radius"],
+    ["g_mag", "density"],
+    ["ks_mag", "teff"],
+    ["ks_mag", "hz_inner"],
+  ])("%s in the colour and in the absolute magnitude: %s", (input, key) => {
+    expect(derived(star, recipe).method("teff")).toBe("sunlike-g-ks");
+    const { propagated, moved } = shares(star, input, 0.03, key, recipe);
+    expect(propagated / moved).toBeCloseTo(1, 3);
+  });
+
+  test("Ks in the colour and in M Ks pulls temperature and radius in opposite ways", () => {
+    /** K7V of the mean sequence at 20 pc. */
+    const cool: Given = { ...star, g_mag: 9.075, ks_mag: 6.315 };
+    const byRadius: RecipeSettings = { ...recipe, luminosity: ["radius-and-temperature"] };
+    const { propagated, moved } = shares(cool, "ks_mag", 0.03, "luminosity", byRadius);
+    expect(derived(cool, byRadius).method("radius")).toBe("abs-ks-feh");
+    expect(propagated / moved).toBeCloseTo(1, 3);
+  });
+
+  test("BP − RP of the bolometric correction owes nothing to V − J of the temperature", () => {
+    const dwarf: Given = { ...PRACTICE_STARS.A, v_mag: 12.1, j_mag: 8.1, v_mag_err: 0.02, j_mag_err: 0.02 };
+    const cool: Given = {
+      ...dwarf,
+      bp_mag: 12.6,
+      bp_mag_err: 0.1,
+      rp_mag: 9.9,
+      rp_mag_err: 0,
+      ks_mag_err: 0.02,
+    };
+    const byVJ: RecipeSettings = { ...DEFAULT_RECIPE.settings, teff: ["cool-colour"], coolColours: ["v-j"] };
+    const { propagated, moved } = shares(cool, "v_mag", 0.1, "hz_outer", byVJ);
+    expect(derived(cool, byVJ).method("luminosity")).toBe("correction-ks");
+    expect(propagated / moved).toBeCloseTo(1, 3);
+  });
+});
+
+describe("the error of a colour excess", () => {
+  /** A G dwarf whose extract gives the excess. */
+  const star: Given = {
+    parallax: 5,
+    parallax_err: 0.02,
+    g_mag: 13.2,
+    g_mag_err: 0,
+    bp_mag: 13.65,
+    bp_mag_err: 0,
+    rp_mag: 12.6,
+    rp_mag_err: 0,
+    ks_mag: 11.6,
+    ks_mag_err: 0,
+    ebv: 0.15,
+    logg: 4.4,
+    logg_err: 0.05,
+    feh: 0,
+    feh_err: 0.05,
+  };
+  const recipe: RecipeSettings = { ...DEFAULT_RECIPE.settings, extinction: { rule: "column" } };
+
+  test.each(["abs_ks", "teff", "luminosity", "radius"])(
+    "moves %s as the law has it at the star's colour",
+    (key) => {
+      const { propagated, moved } = shares(star, "ebv", 0.02, key, recipe);
+      expect(propagated / moved).toBeCloseTo(1, 3);
+    },
+  );
+
+  test("is not lost where the excess itself is 0", () => {
+    const clear = { ...star, ebv: 0 };
+    const { propagated } = shares(clear, "ebv", 0.02, "teff", recipe);
+    const reddened = shares({ ...star, ebv: 1e-6 }, "ebv", 0.02, "teff", recipe);
+    expect(propagated / reddened.propagated).toBeCloseTo(1, 3);
+  });
+
+  test("goes with the distance where the excess does", () => {
+    const byDistance: RecipeSettings = {
+      ...DEFAULT_RECIPE.settings,
+      extinction: { rule: "by-distance", ebvPerKpc: 0.7 },
+    };
+    for (const key of ["abs_ks", "teff", "luminosity"]) {
+      const { propagated, moved } = shares({ ...star, parallax_err: 0 }, "parallax", 0.1, key, byDistance);
+      expect(propagated / moved).toBeCloseTo(1, 3);
+    }
+  });
+});
+
 describe("values without errors", () => {
   test("stand, with no error of their own", () => {
     const star = derived(PRACTICE_STARS.A, PRACTICE_RECIPE.settings);

@@ -3,6 +3,7 @@ import { describe, expect, test } from "vitest";
 import {
   bolometricCorrectionKs,
   bolometricCorrectionKsSlope,
+  COOL_DWARF_ABS_KS,
   coolDwarfTeff,
   coolDwarfTeffSlope,
   logMassFehSlope,
@@ -11,6 +12,7 @@ import {
   massFromAbsKs,
   massFromAbsKsFeh,
   massOverWholeRange,
+  RADIUS_COEFFICIENTS,
   radiusFehSlope,
   radiusFromAbsKs,
   radiusFromAbsKsFeh,
@@ -48,6 +50,15 @@ describe("radius and mass from M Ks", () => {
     expect(radiusFromAbsKs(8.17)).toBeCloseTo(0.1971, 3);
     expect(massFromAbsKs(6.263)).toBeCloseTo(0.3982, 3);
     expect(massFromAbsKs(8.17)).toBeCloseTo(0.1662, 3);
+  });
+
+  test("the range ends before the parabola of the radius turns at M Ks 10.476 and 0.10769 R☉ (computed)", () => {
+    const [constant, linear, square] = RADIUS_COEFFICIENTS;
+    const turn = -linear / (2 * square);
+    expect(turn).toBeCloseTo(10.476, 3);
+    expect(constant + turn * (linear + turn * square)).toBeCloseTo(0.10769, 5);
+    expect(COOL_DWARF_ABS_KS.faintest).toBeLessThan(turn);
+    expect(radiusFromAbsKs(turn)).toBeNaN();
   });
 
   /** Computed; the wrong fifth power of one public program would give 0.484 and 0.113 at these ends. */

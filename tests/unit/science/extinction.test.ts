@@ -1,6 +1,12 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { EXTINCTION_COEFFICIENTS, type ExtinctionBand, extinction } from "#shared/science/extinction.ts";
+import {
+  EXTINCTION_COEFFICIENTS,
+  type ExtinctionBand,
+  extinction,
+  extinctionSlope,
+} from "#shared/science/extinction.ts";
+import { slopeOf } from "./slope.ts";
 
 const BANDS = Object.keys(EXTINCTION_COEFFICIENTS) as ExtinctionBand[];
 
@@ -37,5 +43,11 @@ describe("extinction", () => {
     for (const colour of [0.2, 2.55]) expect(extinction("g", 0, colour)).toBe(0);
     for (const colour of [0.19, 2.56, Number.NaN])
       for (const band of ["g", "bp", "rp"] as const) expect(extinction(band, 0, colour)).toBeNaN();
+  });
+
+  test.each(["g", "bp", "rp", "ks"] as const)("its slope in %s follows the value", (band) => {
+    const slope = slopeOf((ebv) => extinction(band, ebv, 1.1), 0.2);
+    expect(extinctionSlope(band, 0.2, 1.1)).toBeCloseTo(slope, 6);
+    expect(extinctionSlope(band, -0.1, 1.1)).toBeNaN();
   });
 });

@@ -63,20 +63,24 @@ test("i = 89°, a = 20, k = 0.1, 10 days: 3.98696 h and 3.17007 h", () => {
   expect(fullTransitDuration(240, 20, 0.1, b)).toBeCloseTo(3.17007, 4);
 });
 
-/** Gillon et al. 2017, Nature 542, 456, Table 1: period, inclination, depth, a/R★, computed and printed minutes. */
+/** Gillon et al. 2017, Nature 542, 456, Table 1: period, inclination, depth, a/R★, computed impact parameter, computed and printed minutes. */
 test.each([
-  ["b", 1.51087081, 89.65, 0.7266, 20.5, 36.434, 36.4],
-  ["c", 2.4218233, 89.67, 0.687, 28.08, 42.34, 42.37],
-  ["d", 4.04961, 89.75, 0.367, 39.55, 49.119, 49.13],
-  ["e", 6.099615, 89.86, 0.519, 51.97, 57.271, 57.21],
-  ["f", 9.20669, 89.68, 0.673, 68.4, 62.462, 62.6],
-  ["g", 12.35294, 89.71, 0.782, 83.2, 68.307, 68.4],
-])("the published duration of TRAPPIST-1 %s", (_, period, inclination, depth, a, computed, printed) => {
-  const b = a * Math.cos((inclination * Math.PI) / 180);
-  const minutes = transitDuration(1440 * period, a, Math.sqrt(depth / 100), b);
-  expect(minutes).toBeCloseTo(computed, 2);
-  expect(Math.abs(minutes / printed - 1)).toBeLessThan(0.003);
-});
+  ["b", 1.51087081, 89.65, 0.7266, 20.5, 0.1252, 36.434, 36.4],
+  ["c", 2.4218233, 89.67, 0.687, 28.08, 0.1617, 42.34, 42.37],
+  ["d", 4.04961, 89.75, 0.367, 39.55, 0.1726, 49.119, 49.13],
+  ["e", 6.099615, 89.86, 0.519, 51.97, 0.127, 57.271, 57.21],
+  ["f", 9.20669, 89.68, 0.673, 68.4, 0.382, 62.462, 62.6],
+  ["g", 12.35294, 89.71, 0.782, 83.2, 0.4211, 68.307, 68.4],
+])(
+  "the published duration of TRAPPIST-1 %s",
+  (_, period, inclination, depth, a, impact, computed, printed) => {
+    const b = impactParameter(a, inclination);
+    expect(b).toBeCloseTo(impact, 4);
+    const minutes = transitDuration(1440 * period, a, Math.sqrt(depth / 100), b);
+    expect(minutes).toBeCloseTo(computed, 2);
+    expect(Math.abs(minutes / printed - 1)).toBeLessThan(0.003);
+  },
+);
 
 /**
  * Published transits of single planets; the durations from memory. HD 209458 b: a/R★ of Stassun, Collins & Gaudi 2017, AJ

@@ -246,6 +246,24 @@ describe("an explanation", () => {
     expect(Math.hypot(...parts)).toBeCloseTo((working?.error ?? 0) / (working?.value ?? 1), 12);
   });
 
+  test("splits the error of the smallest planet, the noise of an uncertain magnitude included", () => {
+    const given = { ...subject.given, teff_given_err: 60, card_mag_err: 0.3 };
+    const [working] = explain({ ...subject, given }, "r_min");
+    const parts = working?.errorParts.map((part) => part.size ?? Number.NaN) ?? [];
+    expect(parts).toHaveLength(2);
+    expect(Math.hypot(...parts)).toBeCloseTo((working?.error ?? 0) / (working?.value ?? 1), 12);
+    const [exact] = explain({ ...subject, given: { ...given, card_mag_err: 0 } }, "r_min");
+    expect(exact?.errorParts).toHaveLength(1);
+  });
+
+  test("of a trapezoid holds for a planet so large that it grazes on the mean chord", () => {
+    for (const snrLimit of [7.1, 3000]) {
+      const campaign = { ...TRAPEZOID, snrLimit };
+      for (const working of explain({ ...subject, recipe: DEFAULT, campaign }, "r_min"))
+        expectRedone(working);
+    }
+  });
+
   test("marks what was assumed", () => {
     const sunlike: Given = { parallax: 50, parallax_err: 0.1, g_mag: 6.4, bp_mag: 6.8, rp_mag: 5.95 };
     const teff = explain({ ...subject, given: sunlike, recipe: DEFAULT }, "teff")[0];
