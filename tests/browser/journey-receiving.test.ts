@@ -100,7 +100,7 @@ test("rows that are pasted, with a description beside them, go the whole way", a
   await dialog.getByText("Paste the rows first").waitFor();
   await dialog
     .getByLabel("Rows")
-    .fill("source_id\tra\tdec\tepoch\tparallax\n11\t10.5\t20\t2016\t30\n12\t11.5\t21\t2016\t31\n");
+    .fill("source_id\tra\tdec\tepoch\tparallax\n11\t110.5\t20\t2016\t30\n12\t211.5\t21\t2016\t31\n");
   await dialog.getByLabel("Name").fill("From a paper");
   await dialog.getByText("The columns are described in a file of their own").click();
   const chooser = page.waitForEvent("filechooser");
@@ -115,8 +115,9 @@ test("rows that are pasted, with a description beside them, go the whole way", a
   await page.getByRole("link", { name: "Download the description, ReadMe" }).waitFor();
   await page.getByText("There is no byte-by-byte description").waitFor();
   await page.getByRole("button", { name: "Leave the description out" }).click();
+  await page.getByText("Nothing is open.").waitFor();
   await page.getByRole("tab", { name: "Rows" }).click();
-  await page.getByRole("cell", { name: "10.5" }).first().waitFor();
+  await page.getByRole("cell", { name: "110.5" }).first().waitFor();
   await page.keyboard.press("ArrowRight");
   await page
     .getByRole("img", { name: /^2 sampled positions drawn/ })
