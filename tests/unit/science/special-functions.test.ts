@@ -34,7 +34,7 @@ describe("error functions", () => {
   test("erf is odd, erf and erfc make 1, and nothing of NaN is NaN", () => {
     fc.assert(
       fc.property(fc.double({ min: -8, max: 8, noNaN: true }), (x) => {
-        expect(erf(-x)).toBe(-erf(x));
+        expect(erf(-x) + erf(x)).toBe(0);
         expect(erf(x) + erfc(x)).toBeCloseTo(1, 14);
       }),
     );
