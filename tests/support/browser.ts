@@ -75,6 +75,8 @@ export const openPage = async (options: PageOptions): Promise<OpenPage> => {
   if (options.theme)
     await context.addInitScript((theme) => localStorage.setItem("shortlight.theme", theme), options.theme);
   const page = await context.newPage();
+  // The first listener makes the browser hand choosers over, which takes it a moment: long before a key opens one.
+  page.on("filechooser", () => undefined);
   const errors: string[] = [];
   const note = (text: string): void => {
     if (!options.expected?.test(text)) errors.push(text);
