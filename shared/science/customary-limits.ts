@@ -16,7 +16,7 @@ export const CUSTOMARY_LIMITS = {
   fieldOfRegard: { least: 85, most: 135 },
   /** Least distance from the Moon by its illumination class, degrees. */
   moonSeparation: { dark: 20, grey: 30, bright: 45 },
-  /** Illuminated fraction up to which the sky counts as dark, and from which as bright (astroplan's classes). */
+  /** Illuminated fraction up to which the sky counts as dark, and from which as bright (classes in common use for planning). */
   moonIllumination: { dark: 0.25, bright: 0.65 },
   /** Distance from the ecliptic below which asteroids, zodiacal light and planets are a nuisance, degrees. */
   eclipticLatitude: 10,

@@ -3,7 +3,7 @@ import { wingRadius } from "#shared/science/crowding.ts";
 import { CUSTOMARY_LIMITS, moonClass } from "#shared/science/customary-limits.ts";
 
 test("moonlight has three classes", () => {
-  // Classes of astroplan: dark up to 0.25, grey to 0.65, bright from there.
+  // Classes in common use for planning: dark up to 0.25, grey to 0.65, bright from there.
   expect([0, 0.25, 0.26, 0.64, 0.65, 1].map(moonClass)).toEqual([
     "dark",
     "dark",
