@@ -47,7 +47,7 @@ const readFile = async (page: Page): Promise<void> => {
   await enterOnLink(page, "Extracts");
   await enterOnButton(page, "Read file");
   const dialog = page.getByRole("dialog");
-  await tabTo(page, dialog.locator('input[type="file"]'));
+  await tabTo(page, dialog.getByLabel("Choose file"));
   const chooser = page.waitForEvent("filechooser");
   await page.keyboard.press("Enter");
   await (await chooser).setFiles(PRACTICE_FILE_THAT_ASKS);

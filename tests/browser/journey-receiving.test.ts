@@ -117,7 +117,7 @@ test("rows that are pasted, with a description beside them, go the whole way", a
   await page.getByRole("button", { name: "Leave the description out" }).click();
   await page.getByText("Nothing is open.").waitFor();
   await page.getByRole("tab", { name: "Rows" }).click();
-  await page.getByRole("cell", { name: "110.5" }).first().waitFor();
+  await page.getByRole("tabpanel", { name: "Rows" }).getByRole("cell", { name: "110.5" }).waitFor();
   await page.keyboard.press("ArrowRight");
   await page
     .getByRole("img", { name: /^2 sampled positions drawn/ })

@@ -38,12 +38,20 @@ export const SCREENS: readonly (Omit<ScreenAt, "path"> & { path: (f: Furnished) 
   { name: "overview", path: inProgramme("overview"), ready: "h1" },
   { name: "extracts", path: inProgramme("extracts"), ready: "h1" },
   { name: "reading plan", path: inProgramme((f) => `extracts/${f.planning}`), ready: "h1" },
-  { name: "rows of a file", path: inProgramme((f) => `extracts/${f.planning}?look=rows`), ready: "table" },
-  { name: "sky of a file", path: inProgramme((f) => `extracts/${f.planning}?look=sky`), ready: "figure" },
+  {
+    name: "rows of a file",
+    path: inProgramme((f) => `extracts/${f.planning}?look=rows`),
+    ready: '[role="tabpanel"] table',
+  },
+  {
+    name: "sky of a file",
+    path: inProgramme((f) => `extracts/${f.planning}?look=sky`),
+    ready: '[role="tabpanel"] figure',
+  },
   {
     name: "values of a column",
     path: inProgramme((f) => `extracts/${f.planning}?look=values&column=Ks`),
-    ready: "table",
+    ready: '[role="tabpanel"] table',
   },
   {
     name: "columns of an extract",

@@ -52,12 +52,13 @@ export const ExtractPage = () => {
   const programmeId = useProgrammeId();
   const { extractId = "" } = useParams();
   const [opening, setOpening] = useState(0);
-  const isSending = useUploadOf(extractId) !== undefined;
+  const upload = useUploadOf(extractId);
   const { data, error, refetch } = useQuery({
     ...extractOptions(programmeId, extractId),
+    enabled: upload?.isTakenBack !== true,
     // Someone may be sending it from another window.
     refetchInterval: ({ state }) =>
-      state.data?.extract.state === "receiving" && !isSending ? ASK_EVERY_MS : false,
+      state.data?.extract.state === "receiving" && !upload ? ASK_EVERY_MS : false,
   });
   if (error && !data) return <ErrorNotice error={error} onRetry={() => void refetch()} isPage />;
   if (!data) return <Loading what="Opening the extract" />;

@@ -26,7 +26,7 @@ export const shortHash = (sha256: string): string => `${sha256.slice(0, 4)} … 
 
 type Format = ReadingPlan["format"];
 
-export const FORMATS: Readonly<Record<Format, string>> = {
+const FORMATS: Readonly<Record<Format, string>> = {
   delimited: "Delimited text",
   "fixed-width": "Fixed-width text",
   described: "Byte-by-byte table",

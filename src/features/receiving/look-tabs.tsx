@@ -43,7 +43,9 @@ export const LookTabs = <K extends string>({
     looks.findIndex((l) => l.key === wanted),
   );
   const onKeyDown = (event: KeyboardEvent) => {
-    const next = looks[STEPS[event.key]?.(at, looks.length - 1) ?? -1];
+    // The address follows a moment later; keys in quick succession go on from the tab that has the focus.
+    const from = looks.findIndex((l) => l.key === (event.target as HTMLElement).dataset.look);
+    const next = looks[STEPS[event.key]?.(from, looks.length - 1) ?? -1];
     if (!next) return;
     event.preventDefault();
     look(next.key);

@@ -177,8 +177,9 @@ const go = async (run: Running): Promise<void> => {
   } catch (error) {
     if (signal.aborted) return;
     const isTakenBack = isNew && codeOf(error) === "extract-already-here";
-    if (isTakenBack) await removeExtract(programmeId, extractId).catch(() => undefined);
+    // Said first: the page then no longer asks for an extract that is going.
     update(run, { state: "failed", error, isTakenBack });
+    if (isTakenBack) await removeExtract(programmeId, extractId).catch(() => undefined);
   }
 };
 
