@@ -65,7 +65,10 @@ export class DelimitedRows {
 
   /** Cells of a row; null where the record is none. */
   private cellsOf({ cells, text }: CsvRecord): readonly string[] | null {
-    if (text === "") return null;
+    if (text === "") {
+      this.blankLines++;
+      return null;
+    }
     const isFramed = this.layout.isFramed && isInFrame(text);
     const isWide = !this.layout.isFramed && cells.length === this.width;
     if ((!isWide || this.outside.hasMark) && this.outside.take(text, isWide)) return null;
