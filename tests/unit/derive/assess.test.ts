@@ -2,39 +2,12 @@ import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { assessStar, newAssessment } from "#server/assess/assess.ts";
 import { assessColumns, assessedKeys } from "#server/assess/columns.ts";
-import type { DetectorCard } from "#shared/science/cards.ts";
 import { DEFAULT_RECIPE, PRACTICE_RECIPE } from "#shared/science/recipes.ts";
-import { type Given, PRACTICE_CAMPAIGN, PRACTICE_CARD, PRACTICE_STARS } from "./practice-stars.ts";
+import { DETECTOR, type Given, PRACTICE_CAMPAIGN, PRACTICE_CARD, PRACTICE_STARS } from "./practice-stars.ts";
 import { assessed, derived } from "./support.ts";
 
 const A: Given = PRACTICE_STARS.A;
 const withoutMagnitude: Given = Object.fromEntries(Object.entries(A).filter(([key]) => key !== "card_mag"));
-
-/** A small telescope on a mountain that sees star A. */
-const DETECTOR: DetectorCard = {
-  model: "detector",
-  passband: "card_mag",
-  photonBand: "I",
-  apertureM: 0.6,
-  obstruction: 0.4,
-  throughput: 0.5,
-  extinction: 0.06,
-  airmass: 1.3,
-  siteAltitudeM: 2400,
-  pixelScale: 0.6,
-  apertureRadiusPx: 8,
-  skyPixels: 600,
-  readNoise: 8,
-  darkRate: 0.2,
-  fullWell: 1e5,
-  fwhmPx: 4,
-  skyBrightness: 19.5,
-  exposureS: 10,
-  overheadS: 5,
-  floorPpm: 200,
-  brightLimit: 6,
-  faintLimit: 17,
-};
 
 describe("noise", () => {
   test("needs a magnitude in the card's passband, and only that", () => {

@@ -1,4 +1,4 @@
-import type { CampaignSettings, FormulaCard } from "#shared/science/cards.ts";
+import type { CampaignSettings, DetectorCard, FormulaCard } from "#shared/science/cards.ts";
 
 /** The invented card and campaign of the practice stars. */
 export const PRACTICE_CARD: FormulaCard = {
@@ -34,3 +34,29 @@ export const PRACTICE_STARS = {
   },
   C: { ks_mag: 6.85, ks_mag_err: 0.02, parallax: 38.5, parallax_err: 0.05, teff_given: 3650, card_mag: 9.1 },
 } as const satisfies Record<string, Given>;
+
+/** A small telescope on a mountain that sees star A. */
+export const DETECTOR: DetectorCard = {
+  model: "detector",
+  passband: "card_mag",
+  photonBand: "I",
+  apertureM: 0.6,
+  obstruction: 0.4,
+  throughput: 0.5,
+  extinction: 0.06,
+  airmass: 1.3,
+  siteAltitudeM: 2400,
+  pixelScale: 0.6,
+  apertureRadiusPx: 8,
+  skyPixels: 600,
+  readNoise: 8,
+  darkRate: 0.2,
+  fullWell: 1e5,
+  fwhmPx: 4,
+  skyBrightness: 19.5,
+  exposureS: 10,
+  overheadS: 5,
+  floorPpm: 200,
+  brightLimit: 6,
+  faintLimit: 17,
+};

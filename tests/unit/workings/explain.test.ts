@@ -13,6 +13,7 @@ import {
   SUNLIKE_COLOURS,
 } from "#shared/science/recipes.ts";
 import {
+  DETECTOR,
   type Given,
   PRACTICE_CAMPAIGN,
   PRACTICE_CARD,
@@ -20,37 +21,17 @@ import {
 } from "#tests/unit/derive/practice-stars.ts";
 import { assessed, derived } from "#tests/unit/derive/support.ts";
 
-const DETECTOR: DetectorCard = {
-  model: "detector",
-  passband: "card_mag",
-  photonBand: "I",
-  apertureM: 0.6,
-  obstruction: 0.4,
-  throughput: 0.5,
-  extinction: 0.06,
-  airmass: 1.3,
-  siteAltitudeM: 2400,
-  pixelScale: 0.6,
-  apertureRadiusPx: 8,
-  skyPixels: 600,
-  readNoise: 8,
-  darkRate: 0.2,
-  fullWell: 1e5,
-  fwhmPx: 4,
-  skyBrightness: 19.5,
-  exposureS: 10,
-  overheadS: 5,
-  floorPpm: 200,
-  brightLimit: 6,
-  faintLimit: 17,
+/** With every source of noise that a card can state. */
+const FULL: DetectorCard = {
+  ...DETECTOR,
   gain: 1.5,
   digitisation: 0.289,
   comparisonStars: 4,
   jitterPpm: 120,
   redNoisePpm: 80,
 };
-const OSBORN: DetectorCard = { ...DETECTOR, scintillationLaw: "osborn", magnitudeSystem: "ab" };
-const SPACE: DetectorCard = { ...DETECTOR, siteAltitudeM: null };
+const OSBORN: DetectorCard = { ...FULL, scintillationLaw: "osborn", magnitudeSystem: "ab" };
+const SPACE: DetectorCard = { ...FULL, siteAltitudeM: null };
 
 const TRAPEZOID = { ...PRACTICE_CAMPAIGN, statistic: "trapezoid" } as const;
 const DEFAULT = DEFAULT_RECIPE.settings;
@@ -72,7 +53,7 @@ const RECIPES: readonly RecipeSettings[] = [
   ...SUNLIKE_COLOURS.map((colour): RecipeSettings => ({ ...DEFAULT, sunlikeColours: [colour] })),
 ];
 
-const CARDS = [PRACTICE_CARD, DETECTOR, OSBORN, SPACE];
+const CARDS = [PRACTICE_CARD, FULL, OSBORN, SPACE];
 const DERIVED_KEYS = columnsOf("stellar", "instrument").flatMap((c) => (c.key === "flags" ? [] : [c.key]));
 
 const scopeOf = (working: Working): Record<string, number> =>
