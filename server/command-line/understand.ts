@@ -8,6 +8,7 @@ import { isOpen, planFindings } from "../extracts/findings.ts";
 import { readHeader } from "../extracts/read-header.ts";
 import type { Sample } from "../extracts/sample.ts";
 import { suggestUnit, textsOf } from "../extracts/suggest.ts";
+import { julianYear } from "../extracts/suggest-frame.ts";
 import { contradicts } from "../extracts/ucd.ts";
 import { parseNumber } from "../formats/numbers.ts";
 import type { TableColumn } from "../formats/table.ts";
@@ -153,12 +154,6 @@ const raUnitOf = (reading: Reading | undefined): ReadingPlan["raUnit"] => {
   const factor = reading?.answer?.unit === undefined ? undefined : conversionTo("deg", reading.answer.unit);
   if (factor?.factor === 15) return "hour";
   return factor?.factor === 1 ? "deg" : null;
-};
-
-/** Julian year of an epoch such as `J2016.0`; null where there is none. */
-const julianYear = (epoch: string | null | undefined): number | null => {
-  const parts = /^\s*J?\s*(\d{4}(?:\.\d*)?)\s*$/.exec(epoch ?? "");
-  return parts ? Number(parts[1]) : null;
 };
 
 const frameEpoch = ({ header }: Glance, ra: Reading | undefined): number | null =>

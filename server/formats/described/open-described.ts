@@ -1,4 +1,5 @@
 import { unprocessable } from "../../errors.ts";
+import { Findings } from "../findings.ts";
 import type { RowBatch, TableFinding, TableReader } from "../table.ts";
 import { checkText } from "../text/check-text.ts";
 import type { TextEncoding } from "../text/encoding.ts";
@@ -6,7 +7,6 @@ import { addAgain, addEncoding, addRowCount } from "../text/findings.ts";
 import { linesOf } from "../text/text-lines.ts";
 import { TextSource } from "../text/text-source.ts";
 import { headersRenamed, OPEN_END } from "../text/words.ts";
-import { Findings } from "../votable/findings.ts";
 import { type About, readAbout } from "./about.ts";
 import { chooseTable, matchesFile } from "./choose-table.ts";
 import { describedColumns } from "./columns.ts";

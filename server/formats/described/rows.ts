@@ -1,10 +1,10 @@
 import { unprocessable } from "../../errors.ts";
+import { Findings } from "../findings.ts";
 import { parseNumber } from "../numbers.ts";
 import { cutOff } from "../read-records.ts";
 import type { RefusedRow, RowBatch } from "../table.ts";
 import type { LineBatch } from "../text/text-lines.ts";
 import { TypedColumns } from "../text/typed-columns.ts";
-import { Findings } from "../votable/findings.ts";
 import type { DescribedColumn } from "./columns.ts";
 import type { DescribedField } from "./field.ts";
 import { type Counting, cellsOf, lengthOf, strayBetween } from "./line-cells.ts";

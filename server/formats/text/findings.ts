@@ -1,5 +1,5 @@
+import { Findings } from "../findings.ts";
 import type { TableFinding } from "../table.ts";
-import { Findings } from "../votable/findings.ts";
 import type { NamesFound } from "./names.ts";
 import type { OutsideLines } from "./outside-lines.ts";
 import type { TextSource } from "./text-source.ts";

@@ -1,7 +1,7 @@
+import type { Findings } from "../findings.ts";
 import type { BatchBuilder } from "./batch-builder.ts";
 import { brokenRow, short, unreadable } from "./faults.ts";
 import { type Field, nameOf, slotsOf } from "./fields.ts";
-import type { Findings } from "./findings.ts";
 import { nullNumber, nullText } from "./null-mark.ts";
 
 const MOST_ROW_BYTES = 16_777_216;

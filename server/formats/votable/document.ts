@@ -1,10 +1,10 @@
+import type { Findings } from "../findings.ts";
 import type { PositionFrame, TableHeader } from "../table.ts";
 import { BatchBuilder } from "./batch-builder.ts";
 import { BinaryRows } from "./binary-rows.ts";
 import type { DataBlock } from "./data-block.ts";
 import { notVotable, short, unreadable } from "./faults.ts";
 import { type Field, nameOf } from "./fields.ts";
-import type { Findings } from "./findings.ts";
 import type { MarkupEvents } from "./markup.ts";
 import { StreamBlock } from "./stream-block.ts";
 import { headerOf, TableDraft } from "./table-draft.ts";

@@ -1,7 +1,7 @@
+import { Findings } from "../findings.ts";
 import type { OpenTable, RowBatch, TableReader } from "../table.ts";
 import { type ChosenTable, VotableDocument } from "./document.ts";
 import { endsInMiddle, notVotable, short, unreadable } from "./faults.ts";
-import { Findings } from "./findings.ts";
 import { Markup } from "./markup.ts";
 import { TextFeed } from "./text-feed.ts";
 import { AFTER_END, FEWER_ROWS, MORE_ROWS, STRAY_BYTES } from "./words.ts";

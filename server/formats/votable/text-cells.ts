@@ -1,8 +1,8 @@
+import type { Findings } from "../findings.ts";
 import { isBlankWord, parseNumber } from "../numbers.ts";
 import type { BatchBuilder } from "./batch-builder.ts";
 import { short } from "./faults.ts";
 import { type Field, nameOf, slotsOf } from "./fields.ts";
-import type { Findings } from "./findings.ts";
 import { hexadecimalNumber, longText, nullNumber, nullText } from "./null-mark.ts";
 
 const INFINITY = /^([+-]?)inf(?:inity)?$/i;

@@ -1,4 +1,4 @@
-import type { TableFinding } from "../table.ts";
+import type { TableFinding } from "./table.ts";
 
 type FindingWords = Omit<TableFinding, "count" | "examples">;
 
